@@ -1,0 +1,135 @@
+"""Finitely generated abelian groups, written and read as in print."""
+
+from __future__ import annotations
+
+import re
+from collections.abc import Callable, Iterable
+from dataclasses import dataclass
+from math import gcd
+
+from certify.errors import BadInput
+
+__all__ = ["AbelianGroup", "superscript"]
+
+_TERM = re.compile(r"(?:Z|ℤ)(?:\^(?P<rank>\d{1,40}))?|(?:Z|ℤ)/(?P<one>\d{1,40})|\((?:Z|ℤ)/(?P<many>\d{1,40})\)\^(?P<count>\d{1,40})")
+_DIGITS = str.maketrans("0123456789", "⁰¹²³⁴⁵⁶⁷⁸⁹")
+_PLAIN = str.maketrans("⁰¹²³⁴⁵⁶⁷⁸⁹", "0123456789")
+_MOST_SUMMANDS = 10**6
+
+_Power = Callable[[int], str]
+
+
+@dataclass(frozen=True, slots=True)
+class AbelianGroup:
+    """The group ℤ^rank ⊕ ℤ/d_1 ⊕ … ⊕ ℤ/d_s with invariant factors 1 < d_1 | d_2 | … | d_s.
+
+    Equality is isomorphism, because the invariant factors are canonical; make groups through `of` or `parse`.
+
+    Examples
+    --------
+    >>> print(AbelianGroup.of(2, [2, 6, 4]))
+    ℤ² ⊕ (ℤ/2)² ⊕ ℤ/12
+    >>> AbelianGroup.parse("Z/2 + Z/3") == AbelianGroup.parse("Z/6")
+    True
+    """
+
+    rank: int = 0
+    torsion: tuple[int, ...] = ()
+
+    @classmethod
+    def of(cls, rank: int, orders: Iterable[int] = ()) -> AbelianGroup:
+        """Return ℤ^rank plus one cyclic group of each of these orders (each at least 1)."""
+        return cls(rank, _invariant_factors(orders))
+
+    @classmethod
+    def parse(cls, text: str) -> AbelianGroup:
+        """Return the group that is written like ``0``, ``Z^34``, ``Z + (Z/2)^3`` or ``ℤ ⊕ ℤ/4``.
+
+        Raises
+        ------
+        BadInput
+            If a summand cannot be read; it is named.
+        """
+        rank = 0
+        orders: list[int] = []
+        plain = re.sub(r"([⁰¹²³⁴⁵⁶⁷⁸⁹]+)", lambda raised: "^" + raised[1].translate(_PLAIN), text)
+        for summand in re.split(r"[+⊕]", plain):
+            term = re.sub(r"\s+", "", summand)
+            if term == "0":
+                continue
+            match = _TERM.fullmatch(term)
+            order = int(match["one"] or match["many"] or 2) if match else 0
+            count = int(match["count"] or 1) if match else 0
+            if match is None or order < 1 or count > _MOST_SUMMANDS:
+                raise BadInput(
+                    where=f"the group {text!r}",
+                    expected="summands like 0, Z, Z^34, Z/2 or (Z/2)^3 joined by +",
+                    found=repr(summand.strip()),
+                )
+            if match["one"] or match["many"]:
+                orders += [order] * count
+            else:
+                rank += int(match["rank"] or 1)
+        return cls.of(rank, orders)
+
+    def __add__(self, other: AbelianGroup) -> AbelianGroup:
+        """Return the direct sum."""
+        return AbelianGroup.of(self.rank + other.rank, self.torsion + other.torsion)
+
+    def __bool__(self) -> bool:
+        """Tell whether the group is other than zero."""
+        return bool(self.rank or self.torsion)
+
+    def __str__(self) -> str:
+        """Write the group as in print."""
+        return self._written("ℤ", " ⊕ ", superscript)
+
+    def plain(self) -> str:
+        """Write the group in ASCII, as claim sheets do.
+
+        Examples
+        --------
+        >>> AbelianGroup.of(3, [2, 2]).plain()
+        'Z^3 + (Z/2)^2'
+        """
+        return self._written("Z", " + ", lambda exponent: f"^{exponent}")
+
+    def _written(self, ring: str, plus: str, power: _Power) -> str:
+        terms = []
+        if self.rank:
+            terms.append(ring + (power(self.rank) if self.rank > 1 else ""))
+        for order in sorted(set(self.torsion)):
+            count = self.torsion.count(order)
+            terms.append(f"{ring}/{order}" if count == 1 else f"({ring}/{order}){power(count)}")
+        return plus.join(terms) or "0"
+
+
+def superscript(number: int) -> str:
+    """Write an exponent.
+
+    Examples
+    --------
+    >>> superscript(34)
+    '³⁴'
+    """
+    return str(number).translate(_DIGITS)
+
+
+def _invariant_factors(orders: Iterable[int]) -> tuple[int, ...]:
+    """Return the invariant factors of the sum of cyclic groups of these orders, by ℤ/a ⊕ ℤ/b ≅ ℤ/gcd ⊕ ℤ/lcm."""
+    factors: list[int] = []
+    for number in orders:
+        order = number
+        if order == 1:
+            continue
+        for place in reversed(range(len(factors))):
+            if factors[place] % order == 0 and (place == 0 or order % factors[place - 1] == 0):
+                factors.insert(place, order)
+                break
+            common = gcd(factors[place], order)
+            factors[place], order = factors[place] // common * order, common
+            if order == 1:
+                break
+        else:
+            factors.insert(0, order)
+    return tuple(factors)

@@ -1,0 +1,836 @@
+#!/usr/bin/env python3
+"""Check certificates of topological claims. This one file is everything that a referee has to trust.
+
+Run it with any Python from 3.11 on, without installing anything:
+
+    python3 -I -S verifier.py PATH...
+
+PATH is a certificate (*.cert.jsonl or *.cert.jsonl.gz) or a folder that is searched for them. For each file it
+prints accepted, rejected or undecided, and for an accepted one the statement that was proved, written from the
+checked data alone. Exit code: 0 all accepted; 1 something was rejected; 2 the command line is wrong;
+3 something is undecided or unreadable, or there was nothing to check; 70 an internal error.
+
+The format is specified in docs/certificate-format.md, the mathematics in docs/mathematics.md; the Lemmas A to D
+named below stand there with proofs. The file believes nothing: cells and boundaries are rebuilt from the statement,
+and every total is counted anew. Claims are accepted in one place only, at the end of `examine`.
+"""
+
+import argparse
+import hashlib
+import json
+import os
+import re
+import sys
+import time
+import zlib
+from collections import Counter
+from functools import reduce
+from itertools import combinations
+from math import gcd
+from operator import and_
+
+FORMAT = 1
+BATCH = 1 << 18  # faces that are merged together at most; part of the format, since it decides which records there are
+LARGEST = 2**53 - 1  # integers beyond are written as strings (RFC 7493)
+ENDINGS = (".cert.jsonl", ".cert.jsonl.gz")
+CHUNK = 1 << 16
+UNDECIDED = {"limit", "unknown-format", "unknown-kind", "unknown-pair", "not-a-certificate", "unreadable"}
+
+
+class Failure(Exception):
+    """The one way in which a check fails: a stable code, a sentence, and the line of the file where known."""
+
+    def __init__(self, code, sentence, line=None):
+        super().__init__(sentence)
+        self.code = code
+        self.sentence = sentence
+        self.line = line
+
+
+class Budget:
+    """What may still be spent on a file; a limit that is reached makes it undecided, never accepted."""
+
+    def __init__(self, limits):
+        self.limits = limits
+        self.cells = limits.max_cells
+        self.bytes = limits.max_bytes
+        self.deadline = time.monotonic() + limits.max_seconds
+
+    def spend_cells(self, number):
+        self.cells -= number
+        if self.cells < 0:
+            raise Failure("limit", f"more than {self.limits.max_cells} cells to rebuild; raise --max-cells")
+        self.look_at_clock()
+
+    def spend_bytes(self, number):
+        self.bytes -= number
+        if self.bytes < 0:
+            raise Failure("limit", f"more than {self.limits.max_bytes} bytes; raise --max-bytes")
+
+    def look_at_clock(self):
+        if time.monotonic() > self.deadline:
+            raise Failure("limit", f"not done after {self.limits.max_seconds:g} seconds; raise --max-seconds")
+
+
+# ---- the file: lines, canonical JSON, integers ----------------------------------------------------------------------
+
+
+def plain_bytes(path, budget):
+    """Yield the bytes of a file, decompressed if its name ends in .gz, in pieces of bounded size."""
+    packed = path.endswith(".gz")
+    inflate = zlib.decompressobj(31) if packed else None
+    with open(path, "rb") as file:
+        while piece := file.read(CHUNK):
+            while piece:
+                if inflate is None:
+                    data, piece = piece, b""
+                elif inflate.eof:
+                    raise Failure("gzip", "bytes follow the first gzip member")
+                else:
+                    try:
+                        data = inflate.decompress(piece, CHUNK)
+                    except zlib.error as error:
+                        raise Failure("gzip", "the file is not a gzip stream") from error
+                    piece = inflate.unconsumed_tail or inflate.unused_data
+                budget.spend_bytes(len(data))
+                yield data
+        while inflate is not None and not inflate.eof:
+            data = inflate.decompress(inflate.unconsumed_tail, CHUNK)
+            if not data:
+                raise Failure("gzip", "the gzip stream ends too early")
+            budget.spend_bytes(len(data))
+            yield data
+
+
+class Lines:
+    """The lines of a certificate, one by one, with a running digest of all lines before the one at hand."""
+
+    def __init__(self, path, budget):
+        self.pieces = plain_bytes(path, budget)
+        self.pending = bytearray()
+        self.number = 0
+        self.digest = hashlib.sha256()
+        self.line = b""
+        self.budget = budget
+
+    def raw(self):
+        """Return the next line with its line feed, or None at the end of the file."""
+        self.digest.update(self.line)
+        self.number += 1
+        start = 0
+        while (end := self.pending.find(b"\n", start)) < 0:
+            start = len(self.pending)
+            piece = next(self.pieces, None)
+            if piece is None:
+                if self.pending:
+                    raise Failure("truncated", "the last line has no line feed")
+                return None
+            self.pending += piece
+        self.line = bytes(self.pending[: end + 1])
+        del self.pending[: end + 1]
+        return self.line
+
+    def next(self):
+        """Return the value of the next line."""
+        if self.raw() is None:
+            raise Failure("truncated", "the file ends without its end record")
+        self.budget.look_at_clock()
+        return value_of(self.line)
+
+
+def refuse_float(text):
+    raise Failure("number", f"{text[:40]} is not an integer")
+
+
+def canonical(value):
+    """Return the one spelling of a value: keys sorted, no spaces, UTF-8."""
+    return json.dumps(value, sort_keys=True, separators=(",", ":"), ensure_ascii=False).encode("utf-8")
+
+
+def value_of(line):
+    """Return the JSON value of a line that is spelled canonically."""
+    try:
+        value = json.loads(line.decode("utf-8"), parse_float=refuse_float, parse_constant=refuse_float)
+        spelled = canonical(value) + b"\n"
+    except RecursionError as error:
+        raise Failure("nesting", "the line is nested too deeply") from error
+    except UnicodeError as error:
+        raise Failure("encoding", "the line is not UTF-8") from error
+    except ValueError as error:
+        raise Failure("json", "the line is not JSON") from error
+    if spelled != line:
+        raise Failure("spelling", "the line is not in canonical form (sorted unique keys, no spaces, shortest numbers)")
+    return value
+
+
+def record(value, required, optional=()):
+    """Return a JSON object after checking its keys."""
+    if type(value) is not dict:
+        raise Failure("shape", "an object is expected")
+    for key in required:
+        if key not in value:
+            raise Failure("missing-key", f"the key {key!r} is missing")
+    for key in value:
+        if key not in required and key not in optional:
+            raise Failure("unknown-key", f"the key {key[:40]!r} is unknown here")
+    return value
+
+
+def sequence(value):
+    """Return a JSON array."""
+    if type(value) is not list:
+        raise Failure("shape", "a list is expected")
+    return value
+
+
+def integer(value, budget):
+    """Return an integer; beyond ±(2^53 - 1) it is spelled as a decimal string."""
+    if type(value) is int:
+        if -LARGEST <= value <= LARGEST:
+            return value
+        raise Failure("number", "an integer beyond ±(2^53 - 1) must be a decimal string")
+    if type(value) is not str or not re.fullmatch(r"-?[1-9][0-9]*", value, re.ASCII):
+        raise Failure("number", "an integer is expected")
+    if len(value) > budget.limits.max_bits * 0.30103 + 2:
+        raise Failure("limit", f"an integer of more than {budget.limits.max_bits} bits; raise --max-bits")
+    number = int(value)
+    if -LARGEST <= number <= LARGEST:
+        raise Failure("number", "an integer within ±(2^53 - 1) must be a JSON number")
+    if number.bit_length() > budget.limits.max_bits:
+        raise Failure("limit", f"an integer of more than {budget.limits.max_bits} bits; raise --max-bits")
+    return number
+
+
+def numbers(value, start, stop):
+    """Return a list of strictly ascending integers from `start` to below `stop`."""
+    last = start - 1
+    for number in sequence(value):
+        if type(number) is not int or not last < number < stop:
+            raise Failure("index", f"integers ascending from {start} to {stop - 1} are expected")
+        last = number
+    return value
+
+
+# ---- the statement --------------------------------------------------------------------------------------------------
+
+
+class Statement:
+    """The claim: homology of (X, A)^K, read strictly from the header and held in checked form."""
+
+    def __init__(self, value, budget):
+        if type(value) is dict and value.get("kind") != "homology":
+            raise Failure("unknown-kind", f"claims of the kind {str(value.get('kind'))[:40]!r} are unknown here")
+        record(value, ("degrees", "facets", "groups", "kind", "pairs", "vertices"))
+        self.vertices = value["vertices"]
+        if type(self.vertices) is not int or self.vertices < 0:
+            raise Failure("number", "the number of vertices is expected")
+        self.facets = [tuple(numbers(facet, 1, self.vertices + 1)) for facet in sequence(value["facets"])]
+        self.discs = [disc(name) for name in sequence(value["pairs"])]
+        if len(self.discs) != self.vertices:
+            raise Failure("statement", "one pair for each vertex is expected")
+        self.degrees = None if value["degrees"] is None else numbers(value["degrees"], 0, LARGEST)
+        if self.degrees == []:
+            raise Failure("statement", "at least one degree is expected")
+        self.top = None if self.degrees is None else self.degrees[-1] + 1
+        self.check_facets()
+        self.groups = self.read_groups(value["groups"], budget)
+
+    def check_facets(self):
+        """Require the facets to be in order, and none to lie in another."""
+        if not self.facets:
+            raise Failure("statement", "a complex has at least one facet, and the complex {∅} has the empty one")
+        if any(left >= right for left, right in zip(self.facets, self.facets[1:])):
+            raise Failure("statement", "the facets must stand in ascending order, each once")
+        holders = [0] * (self.vertices + 1)
+        for number, facet in enumerate(self.facets):
+            for vertex in facet:
+                holders[vertex] |= 1 << number
+        for number, facet in enumerate(self.facets):
+            common = (1 << len(self.facets)) - 1
+            for vertex in facet:
+                common &= holders[vertex]
+            if common != 1 << number:
+                raise Failure("statement", "a facet lies in another one")
+
+    def read_groups(self, value, budget):
+        """Return {degree: (rank, invariant factors)} without zero groups."""
+        groups = {}
+        last = -1
+        for entry in sequence(value):
+            if len(sequence(entry)) != 3:
+                raise Failure("shape", "a group is a list of degree, rank and torsion")
+            degree, rank = integer(entry[0], budget), integer(entry[1], budget)
+            torsion = tuple(integer(order, budget) for order in sequence(entry[2]))
+            if degree <= last or rank < 0 or not (rank or torsion):
+                raise Failure("statement", "groups stand in ascending degrees, with ranks from 0 and no zero group")
+            if any(order < 2 for order in torsion) or any(b % a for a, b in zip(torsion, torsion[1:])):
+                raise Failure("statement", "torsion is a list of invariant factors above 1, each dividing the next")
+            if self.degrees is not None and degree not in self.degrees:
+                raise Failure("statement", "a group is stated in a degree that the claim leaves out")
+            groups[degree] = (rank, torsion)
+            last = degree
+        return groups
+
+    def text(self):
+        """Render the statement in the notation of mathematics."""
+        names = sorted(set(self.discs))
+        if len(names) == 1:
+            space, pairs = f"({disc_text(names[0])})^K", ""
+        else:
+            space = "(X,A)^K"
+            where = [(n, ", ".join(str(i + 1) for i, d in enumerate(self.discs) if d == n)) for n in names]
+            pairs = "".join(f", (X_i,A_i) = ({disc_text(n)}) for i = {places}" for n, places in where)
+        degrees = sorted(self.groups) if self.degrees is None else self.degrees
+        parts = [f"H_{k} ≅ {group_text(*self.groups.get(k, (0, ())))}" for k in degrees]
+        if parts:
+            first, _, rest = parts[0].partition(" ")
+            parts[0] = f"{first}({space}; ℤ) {rest}"
+        if self.degrees is None:
+            parts.append("H_k = 0 for all other k" if parts else f"H_k({space}; ℤ) = 0 for all k")
+        wide = self.vertices > 9
+        facets = " ".join((",".join if wide else "".join)(map(str, facet)) or "∅" for facet in self.facets)
+        used = {vertex for facet in self.facets for vertex in facet}
+        ghosts = [str(i) for i in range(1, self.vertices + 1) if i not in used]
+        ghost_text = f" (no face holds {', '.join(ghosts)})" if ghosts else ""
+        plural = "vertex" if self.vertices == 1 else "vertices"
+        return f"{', '.join(parts)}; K on {self.vertices} {plural} with facets {facets}{ghost_text}{pairs}"
+
+
+def disc(name):
+    """Return n for the pair (D^n, S^{n-1}) written like "(D2, S1)"."""
+    match = re.fullmatch(r"\(D([1-9][0-9]{0,5}), S(0|[1-9][0-9]{0,5})\)", name, re.ASCII) if type(name) is str else None
+    if match is None or int(match[1]) != int(match[2]) + 1:
+        raise Failure("unknown-pair", f"the pair {str(name)[:40]!r} is unknown here")
+    return int(match[1])
+
+
+def raised(number):
+    return str(number).translate(str.maketrans("0123456789", "⁰¹²³⁴⁵⁶⁷⁸⁹"))
+
+
+def disc_text(n):
+    return f"D{raised(n)},S{raised(n - 1)}"
+
+
+def group_text(rank, torsion):
+    terms = ["ℤ" + (raised(rank) if rank > 1 else "")] if rank else []
+    for order, count in sorted(Counter(torsion).items()):
+        terms.append(f"ℤ/{order}" if count == 1 else f"(ℤ/{order}){raised(count)}")
+    return " ⊕ ".join(terms) or "0"
+
+
+# ---- the space: faces, blocks up to relabelling, cells of the whole product ------------------------------------------
+
+
+def face_masks(statement, budget):
+    """Return the faces of K as bit masks, bit i for vertex i + 1, sorted by size and mask, as far as they matter."""
+    most = statement.vertices if statement.top is None else statement.top
+    masks = set()
+    for facet in statement.facets:
+        for size in range(min(len(facet), most) + 1):
+            for face in combinations(facet, size):
+                masks.add(sum(1 << vertex - 1 for vertex in face))
+                budget.spend_cells(1)
+    return sorted(masks, key=lambda mask: (mask.bit_count(), mask))
+
+
+def without(faces, place):
+    """Return the faces that avoid the vertex at `place`, with the vertices above it moved down by one."""
+    below = (1 << place) - 1
+    above = ~below
+    bit = 1 << place
+    return tuple([mask & below | mask >> 1 & above for mask in faces if not mask & bit])
+
+
+def block_classes(statement, budget):
+    """Yield the full subcomplexes K_I, equal ones (after moving I down to 1, 2, …) together.
+
+    Yields (name, faces, vertices, shifts): the 0/1 word of the first I of the class, the faces of K_I, |I|, and a
+    Counter of the degree shifts of all I in the class. The word order of the names is ascending. Vertices are decided
+    one after the other, and subsets that lead to the same remaining complex are merged on the way (Lemma D); a level
+    of more than BATCH faces is cut into runs that are finished one after the other.
+    """
+    start = (0, tuple(face_masks(statement, budget)))
+    pending = [(0, {start: ("", Counter({0: 1}))})]
+    while pending:
+        vertex, states = pending.pop()
+        if vertex == statement.vertices:
+            for (kept, faces), (name, shifts) in states.items():
+                yield name, faces, kept, shifts
+            continue
+        shift = statement.discs[vertex] - 1
+        level = {}
+        for (kept, faces), (name, shifts) in states.items():
+            budget.spend_cells(len(faces))
+            moved = Counter({s + shift: c for s, c in shifts.items() if statement.top is None or s + shift < statement.top})
+            for state, word, counts in (
+                ((kept, without(faces, kept)), name + "0", shifts),
+                ((kept + 1, faces), name + "1", moved),
+            ):
+                if state in level:
+                    level[state][1].update(counts)
+                elif counts:
+                    level[state] = (word, Counter(counts))
+        runs, room = [], 0
+        for state, entry in level.items():
+            room -= len(state[1])
+            if not runs or room < 0:
+                runs.append({})
+                room = BATCH - len(state[1])
+            runs[-1][state] = entry
+        pending += [(vertex + 1, run) for run in reversed(runs)]
+
+
+def is_cone(faces, vertices, most):
+    """Tell whether some vertex lies with every face of less than `most` vertices in a common face (Lemma C)."""
+    largest = faces[-1].bit_count()
+    candidates = (1 << vertices) - 1
+    if largest < most:  # the faces of the largest size cannot be completed, so an apex lies in all of them
+        candidates = reduce(and_, (mask for mask in faces if mask.bit_count() == largest))
+    for vertex in range(vertices):
+        bit = 1 << vertex
+        if candidates & bit:
+            completed = sum(1 for mask in faces if mask & bit)
+            if completed == sum(1 for mask in faces if not mask & bit and mask.bit_count() < most):
+                return True
+    return False
+
+
+class Faces:
+    """The augmented oriented chain complex of a simplicial complex; degree k is spanned by the faces of k vertices."""
+
+    def __init__(self, faces):
+        self.degrees = [[] for _ in range(faces[-1].bit_count() + 1)]
+        for mask in faces:
+            self.degrees[mask.bit_count()].append(mask)
+        self.index = [{mask: i for i, mask in enumerate(masks)} for masks in self.degrees]
+        self.sizes = [len(masks) for masks in self.degrees]
+
+    def leads(self, degree, cells):
+        """Return the last cell in d of each of these cells, on which d has ±1: the face without its first vertex."""
+        masks, below = self.degrees[degree], self.index[degree - 1]
+        return [below[masks[cell] & masks[cell] - 1] for cell in cells]
+
+    def boundary(self, degree, cell):
+        """Return d of a cell: the sum of its facets with alternating signs, + where the first vertex is left out."""
+        mask = rest = self.degrees[degree][cell]
+        index = self.index[degree - 1]
+        sign = -1 if degree % 2 == 0 else 1
+        terms = []
+        while rest:
+            bit = 1 << rest.bit_length() - 1
+            terms.append((index[mask ^ bit], sign))
+            sign = -sign
+            rest ^= bit
+        return terms
+
+
+class Cells:
+    """The cellular chain complex of the whole product (X, A)^K: cells are words, one letter for each vertex."""
+
+    def __init__(self, statement, budget):
+        faces = set(face_masks(statement, budget))
+        words = [("", 0, 0)]
+        self.discs = statement.discs
+        for vertex, n in enumerate(self.discs):
+            letters = ((0, 0), (0, n - 1), (1 << vertex, n))
+            words = [
+                (word + "012"[letter], support | bit, degree + more)
+                for word, support, degree in words
+                for letter, (bit, more) in enumerate(letters)
+                if support | bit in faces and (statement.top is None or degree + more <= statement.top)
+            ]
+            budget.spend_cells(len(words))
+        self.degrees = [[] for _ in range(max(degree for _, _, degree in words) + 1)]
+        for word, _, degree in words:
+            self.degrees[degree].append(word)
+        self.index = [{word: i for i, word in enumerate(words)} for words in self.degrees]
+        self.sizes = [len(words) for words in self.degrees]
+
+    def leads(self, degree, cells):
+        """Return the last cell in d of each of these cells, on which d has ±1: the last 2 becomes a 1."""
+        below, leads = self.index[degree - 1], []
+        for cell in cells:
+            start, two, rest = self.degrees[degree][cell].rpartition("2")
+            if not two:
+                raise Failure("boundary", f"cell {cell} of degree {degree} is no a of a pair, it is a cycle")
+            leads.append(below[start + "1" + rest])
+        return leads
+
+    def boundary(self, degree, cell):
+        """Return d of a cell by the Leibniz rule; d 2 = 1 - 0 for (D^1, S^0), and d 2 = 1 for larger discs."""
+        word = self.degrees[degree][cell]
+        index = self.index[degree - 1]
+        sign = 1
+        terms = []
+        for place, (letter, n) in enumerate(zip(word, self.discs)):
+            if letter == "2":
+                terms.append((index[word[:place] + "1" + word[place + 1 :]], sign))
+                if n == 1:
+                    terms.append((index[word[:place] + "0" + word[place + 1 :]], -sign))
+            if (n if letter == "2" else n - 1 if letter == "1" else 0) % 2:
+                sign = -sign
+        terms.sort()
+        return terms
+
+
+# ---- the proof: Lemma A and Lemma B ----------------------------------------------------------------------------------
+
+
+def vector(value, size, budget):
+    """Return a sparse vector, read from the list of its cells and coefficients in turn, cells ascending."""
+    if len(sequence(value)) % 2 or not value:
+        raise Failure("vector", "a vector lists cells and coefficients in turn, at least one of each")
+    cells = numbers(value[::2], 0, size)
+    coefficients = [integer(coefficient, budget) for coefficient in value[1::2]]
+    if 0 in coefficients:
+        raise Failure("vector", "a coefficient is zero")
+    return list(zip(cells, coefficients))
+
+
+def boundary_of(terms, degree, space):
+    """Return d of a vector as a sorted sparse vector."""
+    total = {}
+    for cell, coefficient in terms:
+        for place, sign in space.boundary(degree, cell):
+            total[place] = total.get(place, 0) + sign * coefficient
+    return sorted((place, coefficient) for place, coefficient in total.items() if coefficient)
+
+
+def listed(entry, key):
+    """Return the list under an optional key, which must not be written when it is empty."""
+    value = sequence(entry.get(key, []))
+    if key in entry and not value:
+        raise Failure("shape", f"an empty {key!r} is written by leaving it out")
+    return value
+
+
+def homology(space, basis, budget):
+    """Return (rank, orders of cyclic summands) of H_k for each degree k, proved by an adapted basis (Lemma A)."""
+    if len(sequence(basis)) != len(space.sizes):
+        raise Failure("degrees", f"a basis in each of {len(space.sizes)} degrees is expected, {len(basis)} are given")
+    groups = []
+    matched_above, boundaries, orders = [], [], []
+    for degree in reversed(range(len(space.sizes))):
+        size = space.sizes[degree]
+        entry = record(basis[degree], (), ("cycles", "groups", "matched", "order", "pairs"))
+        matched = numbers(listed(entry, "matched"), 0, size)
+        pairs = [read_pair(pair, degree, space, budget) for pair in listed(entry, "pairs")]
+        if degree == 0 and (matched or pairs):
+            raise Failure("boundary", "degree 0 has a pair, but there is nothing below it")
+        cycles = [vector(value, size, budget) for value in listed(entry, "cycles")]
+        if any(boundary_of(cycle, degree, space) for cycle in cycles):
+            raise Failure("cycle", f"a vector listed as a cycle in degree {degree} has a boundary")
+        vectors = [a for a, _, _ in pairs] + cycles
+        if "order" in entry:
+            family = [[(cell, 1)] for cell in matched] + vectors
+            family += [space.boundary(degree + 1, cell) for cell in matched_above] + boundaries
+            check_staircase(size, family, entry, budget)
+        else:
+            leads = matched + (space.leads(degree + 1, matched_above) if matched_above else [])
+            check_natural(size, leads, vectors + boundaries, entry)
+        groups.append((len(cycles), orders))
+        matched_above, boundaries = matched, [b for _, _, b in pairs]
+        orders = [e for _, e, _ in pairs if e > 1]
+        budget.look_at_clock()
+    return groups[::-1]
+
+
+def read_pair(value, degree, space, budget):
+    """Return a, e, b with d a = e b; where e is 1 only a is written, and b is d a."""
+    if len(sequence(value)) not in (1, 3):
+        raise Failure("shape", "a pair is [a], or [a, e, b]")
+    a = vector(value[0], space.sizes[degree], budget)
+    image = boundary_of(a, degree, space)
+    if len(value) == 1:
+        return a, 1, image
+    e = integer(value[1], budget)
+    if e < 2:
+        raise Failure("torsion", "the e of a pair that lists its b is at least 2")
+    b = vector(value[2], space.sizes[degree - 1] if degree else 0, budget)
+    if image != [(cell, e * coefficient) for cell, coefficient in b]:
+        raise Failure("boundary", f"d a is not e b for a pair in degree {degree}")
+    return a, e, b
+
+
+def check_natural(size, leads, vectors, entry):
+    """Require a basis of Z^size in which the largest cells of all vectors differ and carry ±1 (Lemma B).
+
+    `leads` are the largest cells of the vectors for which the coefficient is known to be ±1 by construction.
+    """
+    if "groups" in entry:
+        raise Failure("order", "groups need an order")
+    for terms in vectors:
+        if not terms or terms[-1][1] not in (1, -1):
+            raise Failure("basis", "a vector is zero, or its coefficient on its largest cell is not ±1")
+    leads = leads + [terms[-1][0] for terms in vectors]
+    if len(leads) != size or len(set(leads)) != size:
+        raise Failure("basis", f"the vectors do not lead each of the {size} cells once")
+
+
+def check_staircase(size, family, entry, budget):
+    """Require the family to be a basis of Z^size, in staircase form for the order and groups given (Lemma B)."""
+    order = sequence(entry["order"])
+    if not all(type(cell) is int for cell in order) or sorted(order) != list(range(size)):
+        raise Failure("order", "the order must list every cell once")
+    if len(family) != size or not all(family):
+        raise Failure("basis", f"{size} vectors other than zero are expected")
+    place = {cell: n for n, cell in enumerate(order)}
+    groups = listed(entry, "groups")
+    group_of, members = {}, []
+    for group in groups:
+        cells = sequence(record(group, ("cells", "inverse"))["cells"])
+        if len(cells) < 2 or not all(type(cell) is int and cell in place for cell in cells):
+            raise Failure("group", "a group has two cells or more")
+        begin = place[cells[0]]
+        if order[begin : begin + len(cells)] != cells or any(cell in group_of for cell in cells):
+            raise Failure("group", "the cells of a group must follow one another in the order, in no other group")
+        group_of.update((cell, len(members)) for cell in cells)
+        members.append([])
+    seen = set()
+    for terms in family:
+        cell, coefficient = min(terms, key=lambda term: place[term[0]])
+        if cell in group_of:
+            members[group_of[cell]].append(dict(terms))
+        elif cell in seen or coefficient not in (1, -1):
+            raise Failure("basis", f"cell {cell} leads two vectors, or one with a coefficient that is not ±1")
+        seen.add(cell)
+    for group, vectors in zip(groups, members):
+        check_inverse(group["cells"], vectors, group["inverse"], budget)
+
+
+def check_inverse(cells, vectors, inverse, budget):
+    """Require the square matrix of a group (a row for each cell, a column for each vector) to have this inverse."""
+    size = len(cells)
+    if len(vectors) != size or len(sequence(inverse)) != size:
+        raise Failure("group", "a group has as many cells as vectors, and so many rows in its inverse")
+    for i, line in enumerate(inverse):
+        budget.look_at_clock()
+        row = [integer(entry, budget) for entry in sequence(line)]
+        if len(row) != size:
+            raise Failure("group", "the inverse of a group is a square matrix")
+        for j, terms in enumerate(vectors):
+            if sum(entry * terms.get(cell, 0) for entry, cell in zip(row, cells)) != (i == j):
+                raise Failure("group", "the matrix given as the inverse of a group is not its inverse")
+
+
+# ---- the claim -------------------------------------------------------------------------------------------------------
+
+
+class Total:
+    """The homology that has been proved so far, summed over the blocks."""
+
+    def __init__(self):
+        self.ranks = Counter()
+        self.torsion = {}
+
+    def add(self, degree, rank, orders, times):
+        self.ranks[degree] += rank * times
+        for order in orders:
+            self.torsion.setdefault(degree, Counter())[order] += times
+
+    def groups(self):
+        """Return {degree: (rank, invariant factors)} without zero groups."""
+        found = {}
+        for degree in self.ranks.keys() | self.torsion.keys():
+            torsion = invariant_factors(self.torsion.get(degree, Counter()))
+            if self.ranks[degree] or torsion:
+                found[degree] = (self.ranks[degree], torsion)
+        return found
+
+
+def invariant_factors(orders):
+    """Return the invariant factors of a sum of cyclic groups, by Z/a + Z/b = Z/gcd + Z/lcm, equal ones together."""
+    counts = Counter(orders)
+    while True:
+        clash = next(((a, b) for a, b in combinations(sorted(counts), 2) if b % a), None)
+        if clash is None:
+            return tuple(order for order in sorted(counts) for _ in range(counts[order]) if order > 1)
+        a, b = clash
+        times = min(counts[a], counts[b])
+        common = gcd(a, b)
+        counts.update({common: times})
+        counts.update({a // common * b: times})
+        counts.subtract({a: times, b: times})
+        counts = +counts
+
+
+def prove_by_blocks(statement, lines, budget):
+    """Check one record for each class of blocks that is no cone, and return the total (stable splitting)."""
+    total = Total()
+    for name, faces, vertices, shifts in block_classes(statement, budget):
+        most = statement.vertices
+        if statement.top is not None:
+            most = statement.top - min(shifts)
+            faces = [mask for mask in faces if mask.bit_count() <= most]
+        if is_cone(faces, vertices, most):
+            continue
+        value = next_record(lines, ("basis", "block"))
+        if value["block"] != name:
+            raise Failure("block", f"the record of block {name} is expected here")
+        for degree, (rank, orders) in enumerate(homology(Faces(faces), value["basis"], budget)):
+            for shift, times in shifts.items():
+                total.add(degree + shift, rank, orders, times)
+    return total
+
+
+def prove_by_cells(statement, lines, budget):
+    """Check the one record of the whole product, and return the total."""
+    total = Total()
+    basis = next_record(lines, ("basis",))["basis"]
+    for degree, (rank, orders) in enumerate(homology(Cells(statement, budget), basis, budget)):
+        total.add(degree, rank, orders, 1)
+    return total
+
+
+ROUTES = {"blocks": prove_by_blocks, "cells": prove_by_cells}
+
+
+def next_record(lines, keys):
+    value = lines.next()
+    if type(value) is dict and "end" in value:
+        raise Failure("missing-record", "the end record stands where another record is needed")
+    return record(value, keys)
+
+
+def read_header(lines):
+    """Return the claim's name, the route and the raw statement."""
+    first = lines.raw()
+    if first is None or b'"format"' not in first:
+        raise Failure("not-a-certificate", "the first line is no certificate header")
+    value = value_of(first)
+    if type(value) is dict and value.get("format") != FORMAT:
+        raise Failure("unknown-format", f"format {str(value.get('format'))[:40]} is unknown here, {FORMAT} is known")
+    record(value, ("about", "format", "route", "statement"))
+    if type(value["format"]) is not int:
+        raise Failure("number", "the format is an integer")
+    about = record(value["about"], ("claim",), ("labels", "source", "title"))
+    if type(about["claim"]) is not str or not re.fullmatch(r"[A-Za-z0-9][A-Za-z0-9._-]{0,99}", about["claim"], re.ASCII):
+        raise Failure("claim-name", "a claim's name has 1 to 100 letters, digits, dots, dashes and underscores")
+    for key in ("source", "title"):
+        if type(about.get(key, "")) is not str:
+            raise Failure("shape", f"{key} is a text")
+    if not all(type(label) is str for label in sequence(about.get("labels", []))):
+        raise Failure("shape", "labels are texts")
+    if value["route"] not in ("blocks", "cells"):
+        raise Failure("route", "the route is 'blocks' or 'cells'")
+    return about["claim"], value["route"], value["statement"]
+
+
+def examine(path, limits):
+    """Return the report on one file."""
+    report = {
+        "path": path, "verdict": "undecided", "reason": "internal", "where": None,
+        "claim": None, "statement": None, "fingerprint": None, "sentence": "",
+    }
+    lines = None
+    try:
+        budget = Budget(limits)
+        if not path.endswith(ENDINGS):
+            raise Failure("not-a-certificate", f"the name of a certificate ends in {' or '.join(ENDINGS)}")
+        lines = Lines(path, budget)
+        report["claim"], route, raw = read_header(lines)
+        statement = Statement(raw, budget)
+        total = ROUTES[route](statement, lines, budget)
+        ending = lines.next()
+        end = record(record(ending, ("end",))["end"], ("records", "sha256"))
+        if type(end["records"]) is not int or end["records"] != lines.number - 2:
+            raise Failure("end", "the end record gives another number of records")
+        if end["sha256"] != lines.digest.hexdigest():
+            raise Failure("digest", "the end record gives another digest of the lines before it")
+        if lines.raw() is not None:
+            raise Failure("trailing", "lines follow the end record")
+        found = total.groups()
+        wanted = sorted(found.keys() | statement.groups.keys()) if statement.degrees is None else statement.degrees
+        for degree in wanted:
+            proved, claimed = found.get(degree, (0, ())), statement.groups.get(degree, (0, ()))
+            if proved != claimed:
+                stated = f"H_{degree} is stated as {group_text(*claimed)}, but the records prove {group_text(*proved)}"
+                raise Failure("false", stated, line=1)
+        report["statement"] = statement.text()
+        report["fingerprint"] = hashlib.sha256(canonical(raw)).hexdigest()
+        report.update(verdict="accepted", reason="proved", sentence="every record was checked")
+    except Failure as failure:
+        verdict = "undecided" if failure.code in UNDECIDED else "rejected"
+        where = f"line {failure.line or lines.number}" if lines else None
+        report.update(verdict=verdict, reason=failure.code, where=where, sentence=failure.sentence)
+    except OSError as error:
+        report.update(reason="unreadable", sentence=f"the file cannot be read ({error.strerror})")
+    except MemoryError:
+        report.update(reason="limit", sentence="the memory of this machine does not suffice")
+    return report
+
+
+# ---- the command -----------------------------------------------------------------------------------------------------
+
+
+def certificates_in(path):
+    """Return the certificates at a path: the file itself, or all below a folder, in the order of their names."""
+    if not os.path.isdir(path):
+        return [path]
+    return sorted(
+        os.path.join(folder, name) for folder, _, names in os.walk(path) for name in names if name.endswith(ENDINGS)
+    )
+
+
+def printable(text):
+    """Return a text that cannot disturb a terminal or forge a line."""
+    return text if text.isprintable() else ascii(text)
+
+
+def show(report):
+    """Print the report on one file."""
+    print(f"{report['verdict']:<10} {printable(report['path'])}")
+    if report["verdict"] == "accepted":
+        print(f"           {report['statement']}")
+        print(f"           fingerprint {report['fingerprint']}")
+    else:
+        where = f"{report['where']}, " if report["where"] else ""
+        print(f"           {where}{report['reason']}: {printable(report['sentence'])}")
+
+
+def exit_code(reports):
+    """Return the exit code for these reports; 0 needs at least one, all accepted."""
+    if any(report["reason"] == "internal" for report in reports):
+        return 70
+    verdicts = {report["verdict"] for report in reports}
+    if "rejected" in verdicts:
+        return 1
+    return 0 if verdicts == {"accepted"} else 3
+
+
+def main(arguments=None):
+    """Check the files named on the command line and return the exit code."""
+    parser = argparse.ArgumentParser(prog="verifier.py", description="Check certificates; read the head of this file.")
+    parser.add_argument("paths", nargs="+", metavar="PATH", help="a certificate, or a folder to search for them")
+    parser.add_argument("--json", action="store_true", help="print one JSON object instead of text")
+    parser.add_argument("--max-bytes", type=int, default=1 << 30, help="bytes of a file, decompressed (%(default)s)")
+    parser.add_argument("--max-cells", type=int, default=50_000_000, help="cells to rebuild (%(default)s)")
+    parser.add_argument("--max-bits", type=int, default=100_000, help="bits of one integer (%(default)s)")
+    parser.add_argument("--max-seconds", type=float, default=3600, help="seconds for one file (%(default)s)")
+    limits = parser.parse_args(arguments)
+    sys.stdout.reconfigure(encoding="utf-8")
+    sys.set_int_max_str_digits(max(4300, limits.max_bits))
+    reports = []
+    for path in [file for path in limits.paths for file in certificates_in(path)]:
+        reports.append(examine(path, limits))
+        if not limits.json:
+            show(reports[-1])
+            sys.stdout.flush()
+    code = exit_code(reports)
+    if limits.json:
+        verdict = {0: "accepted", 1: "rejected"}.get(code, "undecided")
+        print(json.dumps({"verdict": verdict, "files": reports}, ensure_ascii=False, indent=1))
+    else:
+        counts = Counter(report["verdict"] for report in reports)
+        print(", ".join(f"{counts[verdict]} {verdict}" for verdict in ("accepted", "rejected", "undecided")))
+    return code
+
+
+if __name__ == "__main__":
+    try:
+        code = main()
+    except Exception as error:
+        print(f"internal error, no verdict: {type(error).__name__}: {ascii(str(error))}", file=sys.stderr)
+        code = 70
+    sys.exit(code)
