@@ -323,35 +323,39 @@ def group_text(rank, torsion):
 
 
 def face_masks(statement, budget):
-    """Return the faces of K as bit masks, bit i for vertex i + 1, sorted by size and mask, as far as they matter."""
-    most = statement.vertices if statement.top is None else statement.top
-    masks = set()
+    """Return the faces of K as ascending bit masks, bit i for vertex i + 1, a tuple for each number of vertices."""
+    longest = max(map(len, statement.facets))
+    sizes = range(min(longest, longest if statement.top is None else statement.top) + 1)
+    masks = [set() for _ in sizes]
     for facet in statement.facets:
-        for size in range(min(len(facet), most) + 1):
+        for size in sizes:
             for face in combinations(facet, size):
-                masks.add(sum(1 << vertex - 1 for vertex in face))
+                masks[size].add(sum(1 << vertex - 1 for vertex in face))
                 budget.spend_cells(1)
-    return sorted(masks, key=lambda mask: (mask.bit_count(), mask))
+    return tuple(tuple(sorted(found)) for found in masks)
 
 
 def without(faces, place):
     """Return the faces that avoid the vertex at `place`, with the vertices above it moved down by one."""
-    below = (1 << place) - 1
-    above = ~below
     bit = 1 << place
-    return tuple([mask & below | mask >> 1 & above for mask in faces if not mask & bit])
+    below = bit - 1
+    above = ~below
+    left = [tuple([mask & below | mask >> 1 & above for mask in masks if not mask & bit]) for masks in faces]
+    while not left[-1]:
+        left.pop()
+    return tuple(left)
 
 
 def block_classes(statement, budget):
     """Yield the full subcomplexes K_I, equal ones (after moving I down to 1, 2, …) together.
 
     Yields (name, faces, vertices, shifts): the 0/1 word of the first I of the class, the faces of K_I, |I|, and a
-    Counter of the degree shifts of all I in the class. The word order of the names is ascending. Vertices are decided
+    how many I of the class have which degree shift. The word order of the names is ascending. Vertices are decided
     one after the other, and subsets that lead to the same remaining complex are merged on the way (Lemma D); a level
     of more than BATCH faces is cut into runs that are finished one after the other.
     """
-    start = (0, tuple(face_masks(statement, budget)))
-    pending = [(0, {start: ("", Counter({0: 1}))})]
+    start = (0, face_masks(statement, budget))
+    pending = [(0, {start: ("", {0: 1})})]
     while pending:
         vertex, states = pending.pop()
         if vertex == statement.vertices:
@@ -361,37 +365,39 @@ def block_classes(statement, budget):
         shift = statement.discs[vertex] - 1
         level = {}
         for (kept, faces), (name, shifts) in states.items():
-            budget.spend_cells(len(faces))
-            moved = Counter({s + shift: c for s, c in shifts.items() if statement.top is None or s + shift < statement.top})
+            budget.spend_cells(sum(map(len, faces)))
+            moved = {s + shift: n for s, n in shifts.items() if statement.top is None or s + shift < statement.top}
             for state, word, counts in (
                 ((kept, without(faces, kept)), name + "0", shifts),
                 ((kept + 1, faces), name + "1", moved),
             ):
                 if state in level:
-                    level[state][1].update(counts)
+                    known = level[state][1]
+                    for s, n in counts.items():
+                        known[s] = known.get(s, 0) + n
                 elif counts:
-                    level[state] = (word, Counter(counts))
+                    level[state] = (word, dict(counts))
         runs, room = [], 0
         for state, entry in level.items():
-            room -= len(state[1])
+            size = sum(map(len, state[1]))
+            room -= size
             if not runs or room < 0:
                 runs.append({})
-                room = BATCH - len(state[1])
+                room = BATCH - size
             runs[-1][state] = entry
         pending += [(vertex + 1, run) for run in reversed(runs)]
 
 
 def is_cone(faces, vertices, most):
     """Tell whether some vertex lies with every face of less than `most` vertices in a common face (Lemma C)."""
-    largest = faces[-1].bit_count()
     candidates = (1 << vertices) - 1
-    if largest < most:  # the faces of the largest size cannot be completed, so an apex lies in all of them
-        candidates = reduce(and_, (mask for mask in faces if mask.bit_count() == largest))
+    if len(faces) <= most:  # no face of the largest size can be completed, so an apex lies in all of them
+        candidates = reduce(and_, faces[-1])
     for vertex in range(vertices):
         bit = 1 << vertex
         if candidates & bit:
-            completed = sum(1 for mask in faces if mask & bit)
-            if completed == sum(1 for mask in faces if not mask & bit and mask.bit_count() < most):
+            completed = sum(1 for masks in faces for mask in masks if mask & bit)
+            if completed == sum(1 for masks in faces[:most] for mask in masks if not mask & bit):
                 return True
     return False
 
@@ -400,9 +406,7 @@ class Faces:
     """The augmented oriented chain complex of a simplicial complex; degree k is spanned by the faces of k vertices."""
 
     def __init__(self, faces):
-        self.degrees = [[] for _ in range(faces[-1].bit_count() + 1)]
-        for mask in faces:
-            self.degrees[mask.bit_count()].append(mask)
+        self.degrees = faces
         self.index = [{mask: i for i, mask in enumerate(masks)} for masks in self.degrees]
         self.sizes = [len(masks) for masks in self.degrees]
 
@@ -429,7 +433,7 @@ class Cells:
     """The cellular chain complex of the whole product (X, A)^K: cells are words, one letter for each vertex."""
 
     def __init__(self, statement, budget):
-        faces = set(face_masks(statement, budget))
+        faces = set().union(*face_masks(statement, budget))
         words = [("", 0, 0)]
         self.discs = statement.discs
         for vertex, n in enumerate(self.discs):
@@ -662,7 +666,7 @@ def prove_by_blocks(statement, lines, budget):
         most = statement.vertices
         if statement.top is not None:
             most = statement.top - min(shifts)
-            faces = [mask for mask in faces if mask.bit_count() <= most]
+            faces = faces[: most + 1]
         if is_cone(faces, vertices, most):
             continue
         value = next_record(lines, ("basis", "block"))

@@ -16,7 +16,7 @@ __all__ = ["Face", "Label", "SimplicialComplex", "distinct_labels"]
 Label = Hashable
 """What a person calls a vertex: any hashable value except a truth value."""
 
-Item = TypeVar("Item")
+_Item = TypeVar("_Item")
 
 
 @dataclass(frozen=True, slots=True)
@@ -70,7 +70,7 @@ class SimplicialComplex:
         --------
         >>> print(SimplicialComplex.from_facets([[3, 1], [1, 2], [2]]))
         3 vertices, facets 12 13
-        >>> print(SimplicialComplex.from_facets([["a"]], vertices="a b".split()))
+        >>> print(SimplicialComplex.from_facets([["a"]], vertices=["a", "b"]))
         2 vertices, facets a, ghosts b
         >>> SimplicialComplex.from_facets([[]])
         SimplicialComplex(labels=(), facets=((),))
@@ -286,7 +286,7 @@ def distinct_labels(labels: Iterable[Label], where: str) -> tuple[Label, ...]:
     return tuple(seen)
 
 
-def _items(given: Iterable[Item], where: str) -> Iterable[Item]:
+def _items(given: Iterable[_Item], where: str) -> Iterable[_Item]:
     """Return what was given if it is a list of some kind; a string is one name and no list of letters."""
     if isinstance(given, str | bytes) or not isinstance(given, Iterable):
         raise BadInput(where=where, expected="a list", found=repr(given))
@@ -306,7 +306,7 @@ def _numbers(facet: Iterable[Label], number: Mapping[Label, int], where: str) ->
     for label in facet:
         if label not in number:
             raise BadInput(
-                where=where, expected="vertices of the complex", found=f"{label!r}, which is none of them"
+                where=where, expected="vertices of the complex", found=f"vertex {label!r}, which is none"
             )
     return [number[label] for label in facet]
 
