@@ -75,14 +75,10 @@ class SimplicialComplex:
         >>> SimplicialComplex.from_facets([[]])
         SimplicialComplex(labels=(), facets=((),))
         """
-        given = [
-            distinct_labels(facet, f"facet {n}") for n, facet in enumerate(_items(facets, "facets"), start=1)
-        ]
+        given = [distinct_labels(facet, f"facet {n}") for n, facet in enumerate(_items(facets, "facets"), start=1)]
         labels = _natural_order(given) if vertices is None else distinct_labels(vertices, "vertices")
         number = {label: i for i, label in enumerate(labels)}
-        return cls.from_faces(
-            labels, [_numbers(facet, number, f"facet {n}") for n, facet in enumerate(given, start=1)]
-        )
+        return cls.from_faces(labels, [_numbers(facet, number, f"facet {n}") for n, facet in enumerate(given, start=1)])
 
     @classmethod
     def from_faces(cls, labels: Iterable[Label], faces: Iterable[Iterable[int]]) -> SimplicialComplex:
@@ -103,9 +99,7 @@ class SimplicialComplex:
         """Return what `from_faces` returns, with the faces written as bit masks."""
         facets = tuple(sorted(map(face_of, maximal(masks))))
         if not facets:
-            raise BadInput(
-                where="facets", expected="at least one facet ([[]] has the empty face)", found="none"
-            )
+            raise BadInput(where="facets", expected="at least one facet ([[]] has the empty face)", found="none")
         return cls(tuple(labels), facets)
 
     @property
@@ -207,9 +201,7 @@ class SimplicialComplex:
         (1, 1, 1)
         """
         f, d = self.f_vector(), self.dimension + 1
-        return tuple(
-            sum((-1) ** (k - i) * comb(d - i, k - i) * f[i] for i in range(k + 1)) for k in range(d + 1)
-        )
+        return tuple(sum((-1) ** (k - i) * comb(d - i, k - i) * f[i] for i in range(k + 1)) for k in range(d + 1))
 
     def euler_characteristic(self) -> int:
         """Return f_0 - f_1 + f_2 - ..., without the empty face.
@@ -305,9 +297,7 @@ def _numbers(facet: Iterable[Label], number: Mapping[Label, int], where: str) ->
     """Return the numbers of the given vertices, in the order given."""
     for label in facet:
         if label not in number:
-            raise BadInput(
-                where=where, expected="vertices of the complex", found=f"vertex {label!r}, which is none"
-            )
+            raise BadInput(where=where, expected="vertices of the complex", found=f"vertex {label!r}, which is none")
     return [number[label] for label in facet]
 
 

@@ -219,9 +219,7 @@ FAMILIES: Mapping[str, Family] = MappingProxyType(
                 "boundary of a cyclic polytope",
             ),
             Family("points", points, {"m": "number of points"}, "points without edges"),
-            Family(
-                "projective-plane", triangulations.projective_plane, {}, "real projective plane, 6 vertices"
-            ),
+            Family("projective-plane", triangulations.projective_plane, {}, "real projective plane, 6 vertices"),
             Family("torus", triangulations.torus, {}, "torus, 7 vertices"),
             Family("klein-bottle", triangulations.klein_bottle, {}, "Klein bottle, 8 vertices"),
             Family(
@@ -270,9 +268,7 @@ def build(name: str, /, **arguments: object) -> SimplicialComplex:
         raise BadInput(where="family", expected=f"one of {', '.join(FAMILIES)}", found=repr(name))
     for parameter, meaning in family.parameters.items():
         if parameter not in arguments:
-            raise BadInput(
-                where=f"family {name}", expected=f"the argument {parameter} ({meaning})", found="none"
-            )
+            raise BadInput(where=f"family {name}", expected=f"the argument {parameter} ({meaning})", found="none")
     for argument in arguments:
         if argument not in family.parameters:
             known = f"only {', '.join(family.parameters)}" if family.parameters else "no argument"
@@ -285,9 +281,7 @@ def build(name: str, /, **arguments: object) -> SimplicialComplex:
 
 def _check(name: str, value: int, *, least: int, most: int | None = None) -> None:
     """Refuse a value that is no whole number or out of range; sheets may hold anything here."""
-    wanted = (
-        f"a whole number of at least {least}" if most is None else f"a whole number from {least} to {most}"
-    )
+    wanted = f"a whole number of at least {least}" if most is None else f"a whole number from {least} to {most}"
     is_number = isinstance(value, int) and not isinstance(value, bool)
     if not is_number or value < least or (most is not None and value > most):
         raise BadInput(where=f"argument {name}", expected=wanted, found=repr(value))

@@ -67,15 +67,10 @@ def complex_from_table(table: Mapping[str, object]) -> SimplicialComplex:
     """
     for key in table:
         if key not in ("facets", "vertices"):
-            raise BadInput(
-                where=f"key {key}", expected="only the keys facets and vertices", found="another key"
-            )
+            raise BadInput(where=f"key {key}", expected="only the keys facets and vertices", found="another key")
     if "facets" not in table:
         raise BadInput(where="key facets", expected="a list of facets", found="no such key")
-    facets = [
-        _plain_labels(facet, f"facet {n}")
-        for n, facet in enumerate(_a_list(table["facets"], "facets"), start=1)
-    ]
+    facets = [_plain_labels(facet, f"facet {n}") for n, facet in enumerate(_a_list(table["facets"], "facets"), start=1)]
     vertices = _plain_labels(table["vertices"], "vertices") if "vertices" in table else None
     return SimplicialComplex.from_facets(facets, vertices)
 
@@ -98,9 +93,7 @@ def read_complex_file(path: str | Path) -> SimplicialComplex:
     path = Path(path)
     reader = _READERS.get(path.suffix.lower())
     if reader is None:
-        raise BadInput(
-            where=str(path), expected="a file name ending in .txt, .json or .toml", found="another ending"
-        )
+        raise BadInput(where=str(path), expected="a file name ending in .txt, .json or .toml", found="another ending")
     try:
         return reader(_text_of(path))
     except BadInput as fault:
@@ -114,9 +107,7 @@ def _text_of(path: Path) -> str:
     except OSError as fault:
         raise BadInput(where="file", expected="a readable file", found=str(fault.strerror)) from fault
     except UnicodeDecodeError as fault:
-        raise BadInput(
-            where="file", expected="UTF-8 text", found=f"other bytes at position {fault.start}"
-        ) from fault
+        raise BadInput(where="file", expected="UTF-8 text", found=f"other bytes at position {fault.start}") from fault
 
 
 def _facets_in(text: str) -> Iterator[tuple[str, list[Label]]]:

@@ -1,0 +1,1 @@
+"""Ratios measured in one run; ``python -m tests.benchmarks`` prints the whole table."""
