@@ -15,6 +15,8 @@ named below stand there with proofs. The file believes nothing: cells and bounda
 and every total is counted anew. Claims are accepted in one place only, at the end of `examine`.
 """
 
+from __future__ import annotations
+
 import argparse
 import hashlib
 import json
@@ -24,10 +26,11 @@ import sys
 import time
 import zlib
 from collections import Counter
+from collections.abc import Iterable, Iterator, Sequence
 from functools import reduce
-from itertools import combinations
+from itertools import combinations, pairwise
 from math import gcd
-from operator import and_
+from operator import and_, ge
 
 FORMAT = 1
 BATCH = 1 << 18  # faces that are merged together at most; part of the format, since it decides which records there are
@@ -37,10 +40,15 @@ CHUNK = 1 << 16
 UNDECIDED = {"limit", "unknown-format", "unknown-kind", "unknown-pair", "not-a-certificate", "unreadable"}
 
 
+Vector = list[tuple[int, int]]  # cells with coefficients, cells ascending
+Groups = dict[int, tuple[int, tuple[int, ...]]]  # degree: rank and invariant factors, zero groups left out
+Faces = tuple[tuple[int, ...], ...]  # for each number of vertices the faces as ascending bit masks
+
+
 class Failure(Exception):
     """The one way in which a check fails: a stable code, a sentence, and the line of the file where known."""
 
-    def __init__(self, code, sentence, line=None):
+    def __init__(self, code: str, sentence: str, line: int | None = None) -> None:
         super().__init__(sentence)
         self.code = code
         self.sentence = sentence
@@ -50,62 +58,64 @@ class Failure(Exception):
 class Budget:
     """What may still be spent on a file; a limit that is reached makes it undecided, never accepted."""
 
-    def __init__(self, limits):
-        self.limits = limits
-        self.cells = limits.max_cells
-        self.bytes = limits.max_bytes
-        self.deadline = time.monotonic() + limits.max_seconds
+    def __init__(self, limits: argparse.Namespace) -> None:
+        self.max_bytes: int = limits.max_bytes
+        self.max_cells: int = limits.max_cells
+        self.max_bits: int = limits.max_bits
+        self.max_seconds: float = limits.max_seconds
+        self.bytes = self.max_bytes
+        self.cells = self.max_cells
+        self.deadline = time.monotonic() + self.max_seconds
 
-    def spend_cells(self, number):
+    def spend_cells(self, number: int) -> None:
         self.cells -= number
         if self.cells < 0:
-            raise Failure("limit", f"more than {self.limits.max_cells} cells to rebuild; raise --max-cells")
+            raise Failure("limit", f"more than {self.max_cells} cells to rebuild; raise --max-cells")
         self.look_at_clock()
 
-    def spend_bytes(self, number):
+    def spend_bytes(self, number: int) -> None:
         self.bytes -= number
         if self.bytes < 0:
-            raise Failure("limit", f"more than {self.limits.max_bytes} bytes; raise --max-bytes")
+            raise Failure("limit", f"more than {self.max_bytes} bytes; raise --max-bytes")
 
-    def look_at_clock(self):
+    def look_at_clock(self) -> None:
         if time.monotonic() > self.deadline:
-            raise Failure("limit", f"not done after {self.limits.max_seconds:g} seconds; raise --max-seconds")
+            raise Failure("limit", f"not done after {self.max_seconds:g} seconds; raise --max-seconds")
 
 
 # ---- the file: lines, canonical JSON, integers ----------------------------------------------------------------------
 
 
-def plain_bytes(path, budget):
+def plain_bytes(path: str, budget: Budget) -> Iterator[bytes]:
     """Yield the bytes of a file, decompressed if its name ends in .gz, in pieces of bounded size."""
-    packed = path.endswith(".gz")
-    inflate = zlib.decompressobj(31) if packed else None
     with open(path, "rb") as file:
-        while piece := file.read(CHUNK):
-            while piece:
-                if inflate is None:
-                    data, piece = piece, b""
-                elif inflate.eof:
-                    raise Failure("gzip", "bytes follow the first gzip member")
-                else:
-                    try:
-                        data = inflate.decompress(piece, CHUNK)
-                    except zlib.error as error:
-                        raise Failure("gzip", "the file is not a gzip stream") from error
-                    piece = inflate.unconsumed_tail or inflate.unused_data
-                budget.spend_bytes(len(data))
-                yield data
-        while inflate is not None and not inflate.eof:
-            data = inflate.decompress(inflate.unconsumed_tail, CHUNK)
-            if not data:
-                raise Failure("gzip", "the gzip stream ends too early")
+        pieces = iter(lambda: file.read(CHUNK), b"")
+        for data in inflated(pieces) if path.endswith(".gz") else pieces:
             budget.spend_bytes(len(data))
             yield data
+
+
+def inflated(pieces: Iterable[bytes]) -> Iterator[bytes]:
+    """Yield the content of the one gzip member in these bytes, at most CHUNK bytes at a time."""
+    inflate = zlib.decompressobj(31)
+    try:
+        for piece in pieces:
+            rest = piece
+            while rest or inflate.unconsumed_tail:
+                if inflate.eof:
+                    raise Failure("gzip", "bytes follow the first gzip member")
+                yield inflate.decompress(rest, CHUNK)
+                rest = inflate.unconsumed_tail or inflate.unused_data
+        if not inflate.eof:
+            raise Failure("gzip", "the gzip stream ends too early")
+    except zlib.error as error:
+        raise Failure("gzip", "the file is not a gzip stream") from error
 
 
 class Lines:
     """The lines of a certificate, one by one, with a running digest of all lines before the one at hand."""
 
-    def __init__(self, path, budget):
+    def __init__(self, path: str, budget: Budget) -> None:
         self.pieces = plain_bytes(path, budget)
         self.pending = bytearray()
         self.number = 0
@@ -113,7 +123,7 @@ class Lines:
         self.line = b""
         self.budget = budget
 
-    def raw(self):
+    def raw(self) -> bytes | None:
         """Return the next line with its line feed, or None at the end of the file."""
         self.digest.update(self.line)
         self.number += 1
@@ -130,7 +140,7 @@ class Lines:
         del self.pending[: end + 1]
         return self.line
 
-    def next(self):
+    def next(self) -> object:
         """Return the value of the next line."""
         if self.raw() is None:
             raise Failure("truncated", "the file ends without its end record")
@@ -138,16 +148,16 @@ class Lines:
         return value_of(self.line)
 
 
-def refuse_float(text):
+def refuse_float(text: str) -> object:
     raise Failure("number", f"{text[:40]} is not an integer")
 
 
-def canonical(value):
+def canonical(value: object) -> bytes:
     """Return the one spelling of a value: keys sorted, no spaces, UTF-8."""
     return json.dumps(value, sort_keys=True, separators=(",", ":"), ensure_ascii=False).encode("utf-8")
 
 
-def value_of(line):
+def value_of(line: bytes) -> object:
     """Return the JSON value of a line that is spelled canonically."""
     try:
         value = json.loads(line.decode("utf-8"), parse_float=refuse_float, parse_constant=refuse_float)
@@ -163,7 +173,7 @@ def value_of(line):
     return value
 
 
-def record(value, required, optional=()):
+def record(value: object, required: Sequence[str], optional: Sequence[str] = ()) -> dict[str, object]:
     """Return a JSON object after checking its keys."""
     if type(value) is not dict:
         raise Failure("shape", "an object is expected")
@@ -176,14 +186,14 @@ def record(value, required, optional=()):
     return value
 
 
-def sequence(value):
+def sequence(value: object) -> list[object]:
     """Return a JSON array."""
     if type(value) is not list:
         raise Failure("shape", "a list is expected")
     return value
 
 
-def integer(value, budget):
+def integer(value: object, budget: Budget) -> int:
     """Return an integer; beyond ±(2^53 - 1) it is spelled as a decimal string."""
     if type(value) is int:
         if -LARGEST <= value <= LARGEST:
@@ -191,24 +201,22 @@ def integer(value, budget):
         raise Failure("number", "an integer beyond ±(2^53 - 1) must be a decimal string")
     if type(value) is not str or not re.fullmatch(r"-?[1-9][0-9]*", value, re.ASCII):
         raise Failure("number", "an integer is expected")
-    if len(value) > budget.limits.max_bits * 0.30103 + 2:
-        raise Failure("limit", f"an integer of more than {budget.limits.max_bits} bits; raise --max-bits")
+    if len(value) > budget.max_bits * 0.30103 + 2:
+        raise Failure("limit", f"an integer of more than {budget.max_bits} bits; raise --max-bits")
     number = int(value)
     if -LARGEST <= number <= LARGEST:
         raise Failure("number", "an integer within ±(2^53 - 1) must be a JSON number")
-    if number.bit_length() > budget.limits.max_bits:
-        raise Failure("limit", f"an integer of more than {budget.limits.max_bits} bits; raise --max-bits")
     return number
 
 
-def numbers(value, start, stop):
+def numbers(value: object, start: int, stop: int) -> list[int]:
     """Return a list of strictly ascending integers from `start` to below `stop`."""
-    last = start - 1
-    for number in sequence(value):
-        if type(number) is not int or not last < number < stop:
-            raise Failure("index", f"integers ascending from {start} to {stop - 1} are expected")
-        last = number
-    return value
+    found = [number for number in sequence(value) if type(number) is int]
+    if len(found) != len(sequence(value)) or any(map(ge, found, found[1:])):
+        raise Failure("index", "integers in ascending order are expected, each once")
+    if found and not start <= found[0] <= found[-1] < stop:
+        raise Failure("index", f"integers from {start} to {stop - 1} are expected")
+    return found
 
 
 # ---- the statement --------------------------------------------------------------------------------------------------
@@ -217,53 +225,48 @@ def numbers(value, start, stop):
 class Statement:
     """The claim: homology of (X, A)^K, read strictly from the header and held in checked form."""
 
-    def __init__(self, value, budget):
-        if type(value) is dict and value.get("kind") != "homology":
-            raise Failure("unknown-kind", f"claims of the kind {str(value.get('kind'))[:40]!r} are unknown here")
-        record(value, ("degrees", "facets", "groups", "kind", "pairs", "vertices"))
-        self.vertices = value["vertices"]
-        if type(self.vertices) is not int or self.vertices < 0:
-            raise Failure("number", "the number of vertices is expected")
-        self.facets = [tuple(numbers(facet, 1, self.vertices + 1)) for facet in sequence(value["facets"])]
+    def __init__(self, raw: object, budget: Budget) -> None:
+        if type(raw) is dict and raw.get("kind") != "homology":
+            raise Failure("unknown-kind", f"claims of the kind {str(raw.get('kind'))[:40]!r} are unknown here")
+        value = record(raw, ("degrees", "facets", "groups", "kind", "pairs", "vertices"))
+        self.vertices = integer(value["vertices"], budget)
+        self.facets = [numbers(facet, 1, self.vertices + 1) for facet in sequence(value["facets"])]
         self.discs = [disc(name) for name in sequence(value["pairs"])]
         if len(self.discs) != self.vertices:
             raise Failure("statement", "one pair for each vertex is expected")
         self.degrees = None if value["degrees"] is None else numbers(value["degrees"], 0, LARGEST)
         if self.degrees == []:
             raise Failure("statement", "at least one degree is expected")
-        self.top = None if self.degrees is None else self.degrees[-1] + 1
+        self.top = self.degrees[-1] + 1 if self.degrees else None
         self.check_facets()
         self.groups = self.read_groups(value["groups"], budget)
 
-    def check_facets(self):
+    def check_facets(self) -> None:
         """Require the facets to be in order, and none to lie in another."""
         if not self.facets:
             raise Failure("statement", "a complex has at least one facet, and the complex {∅} has the empty one")
-        if any(left >= right for left, right in zip(self.facets, self.facets[1:])):
+        if any(map(ge, self.facets, self.facets[1:])):
             raise Failure("statement", "the facets must stand in ascending order, each once")
-        holders = [0] * (self.vertices + 1)
+        holders = dict.fromkeys(range(1, self.vertices + 1), 0)
         for number, facet in enumerate(self.facets):
             for vertex in facet:
                 holders[vertex] |= 1 << number
         for number, facet in enumerate(self.facets):
-            common = (1 << len(self.facets)) - 1
-            for vertex in facet:
-                common &= holders[vertex]
-            if common != 1 << number:
+            if reduce(and_, (holders[vertex] for vertex in facet), (1 << len(self.facets)) - 1) != 1 << number:
                 raise Failure("statement", "a facet lies in another one")
 
-    def read_groups(self, value, budget):
-        """Return {degree: (rank, invariant factors)} without zero groups."""
-        groups = {}
+    def read_groups(self, value: object, budget: Budget) -> Groups:
+        """Return the groups that are stated."""
+        groups: Groups = {}
         last = -1
-        for entry in sequence(value):
-            if len(sequence(entry)) != 3:
+        for entry in map(sequence, sequence(value)):
+            if len(entry) != 3:
                 raise Failure("shape", "a group is a list of degree, rank and torsion")
             degree, rank = integer(entry[0], budget), integer(entry[1], budget)
             torsion = tuple(integer(order, budget) for order in sequence(entry[2]))
             if degree <= last or rank < 0 or not (rank or torsion):
                 raise Failure("statement", "groups stand in ascending degrees, with ranks from 0 and no zero group")
-            if any(order < 2 for order in torsion) or any(b % a for a, b in zip(torsion, torsion[1:])):
+            if any(order < 2 for order in torsion) or any(b % a for a, b in pairwise(torsion)):
                 raise Failure("statement", "torsion is a list of invariant factors above 1, each dividing the next")
             if self.degrees is not None and degree not in self.degrees:
                 raise Failure("statement", "a group is stated in a degree that the claim leaves out")
@@ -271,7 +274,7 @@ class Statement:
             last = degree
         return groups
 
-    def text(self):
+    def text(self) -> str:
         """Render the statement in the notation of mathematics."""
         names = sorted(set(self.discs))
         if len(names) == 1:
@@ -287,32 +290,31 @@ class Statement:
             parts[0] = f"{first}({space}; ℤ) {rest}"
         if self.degrees is None:
             parts.append("H_k = 0 for all other k" if parts else f"H_k({space}; ℤ) = 0 for all k")
-        wide = self.vertices > 9
-        facets = " ".join((",".join if wide else "".join)(map(str, facet)) or "∅" for facet in self.facets)
-        used = {vertex for facet in self.facets for vertex in facet}
-        ghosts = [str(i) for i in range(1, self.vertices + 1) if i not in used]
-        ghost_text = f" (no face holds {', '.join(ghosts)})" if ghosts else ""
+        comma = "," if self.vertices > 9 else ""
+        facets = " ".join(comma.join(map(str, facet)) or "∅" for facet in self.facets)
+        ghosts = sorted(set(range(1, self.vertices + 1)).difference(*self.facets))
+        ghost_text = f" (no face holds {', '.join(map(str, ghosts))})" if ghosts else ""
         plural = "vertex" if self.vertices == 1 else "vertices"
         return f"{', '.join(parts)}; K on {self.vertices} {plural} with facets {facets}{ghost_text}{pairs}"
 
 
-def disc(name):
+def disc(name: object) -> int:
     """Return n for the pair (D^n, S^{n-1}) written like "(D2, S1)"."""
-    match = re.fullmatch(r"\(D([1-9][0-9]{0,5}), S(0|[1-9][0-9]{0,5})\)", name, re.ASCII) if type(name) is str else None
-    if match is None or int(match[1]) != int(match[2]) + 1:
+    match = re.fullmatch(r"\(D([1-9][0-9]{0,5}), S(0|[1-9][0-9]{0,5})\)", str(name), re.ASCII)
+    if type(name) is not str or match is None or int(match[1]) != int(match[2]) + 1:
         raise Failure("unknown-pair", f"the pair {str(name)[:40]!r} is unknown here")
     return int(match[1])
 
 
-def raised(number):
+def raised(number: int) -> str:
     return str(number).translate(str.maketrans("0123456789", "⁰¹²³⁴⁵⁶⁷⁸⁹"))
 
 
-def disc_text(n):
+def disc_text(n: int) -> str:
     return f"D{raised(n)},S{raised(n - 1)}"
 
 
-def group_text(rank, torsion):
+def group_text(rank: int, torsion: Sequence[int]) -> str:
     terms = ["ℤ" + (raised(rank) if rank > 1 else "")] if rank else []
     for order, count in sorted(Counter(torsion).items()):
         terms.append(f"ℤ/{order}" if count == 1 else f"(ℤ/{order}){raised(count)}")
@@ -322,11 +324,11 @@ def group_text(rank, torsion):
 # ---- the space: faces, blocks up to relabelling, cells of the whole product ------------------------------------------
 
 
-def face_masks(statement, budget):
-    """Return the faces of K as ascending bit masks, bit i for vertex i + 1, a tuple for each number of vertices."""
+def face_masks(statement: Statement, budget: Budget) -> Faces:
+    """Return the faces of K as ascending bit masks, bit i for vertex i + 1, as far as their size matters."""
     longest = max(map(len, statement.facets))
     sizes = range(min(longest, longest if statement.top is None else statement.top) + 1)
-    masks = [set() for _ in sizes]
+    masks: list[set[int]] = [set() for _ in sizes]
     for facet in statement.facets:
         for size in sizes:
             for face in combinations(facet, size):
@@ -335,7 +337,7 @@ def face_masks(statement, budget):
     return tuple(tuple(sorted(found)) for found in masks)
 
 
-def without(faces, place):
+def without(faces: Faces, place: int) -> Faces:
     """Return the faces that avoid the vertex at `place`, with the vertices above it moved down by one."""
     bit = 1 << place
     below = bit - 1
@@ -346,10 +348,10 @@ def without(faces, place):
     return tuple(left)
 
 
-def block_classes(statement, budget):
+def block_classes(statement: Statement, budget: Budget) -> Iterator[tuple[str, Faces, int, dict[int, int]]]:
     """Yield the full subcomplexes K_I, equal ones (after moving I down to 1, 2, …) together.
 
-    Yields (name, faces, vertices, shifts): the 0/1 word of the first I of the class, the faces of K_I, |I|, and a
+    Yields (name, faces, vertices, shifts): the 0/1 word of the first I of the class, the faces of K_I, |I|, and
     how many I of the class have which degree shift. The word order of the names is ascending. Vertices are decided
     one after the other, and subsets that lead to the same remaining complex are merged on the way (Lemma D); a level
     of more than BATCH faces is cut into runs that are finished one after the other.
@@ -363,7 +365,7 @@ def block_classes(statement, budget):
                 yield name, faces, kept, shifts
             continue
         shift = statement.discs[vertex] - 1
-        level = {}
+        level: dict[tuple[int, Faces], tuple[str, dict[int, int]]] = {}
         for (kept, faces), (name, shifts) in states.items():
             budget.spend_cells(sum(map(len, faces)))
             moved = {s + shift: n for s, n in shifts.items() if statement.top is None or s + shift < statement.top}
@@ -377,7 +379,8 @@ def block_classes(statement, budget):
                         known[s] = known.get(s, 0) + n
                 elif counts:
                     level[state] = (word, dict(counts))
-        runs, room = [], 0
+        runs: list[dict[tuple[int, Faces], tuple[str, dict[int, int]]]] = []
+        room = 0
         for state, entry in level.items():
             size = sum(map(len, state[1]))
             room -= size
@@ -388,7 +391,7 @@ def block_classes(statement, budget):
         pending += [(vertex + 1, run) for run in reversed(runs)]
 
 
-def is_cone(faces, vertices, most):
+def is_cone(faces: Faces, vertices: int, most: int) -> bool:
     """Tell whether some vertex lies with every face of less than `most` vertices in a common face (Lemma C)."""
     candidates = (1 << vertices) - 1
     if len(faces) <= most:  # no face of the largest size can be completed, so an apex lies in all of them
@@ -402,137 +405,152 @@ def is_cone(faces, vertices, most):
     return False
 
 
-class Faces:
+class Space:
+    """A based complex that was rebuilt from the statement: cells numbered from 0 in each degree, and d."""
+
+    sizes: list[int]
+
+    def leads(self, degree: int, cells: list[int]) -> list[int]:
+        """Return the last cell in d of each of these cells; d has ±1 there."""
+        raise NotImplementedError
+
+    def boundary(self, degree: int, vector: Vector) -> Vector:
+        """Return d of a vector of this degree."""
+        raise NotImplementedError
+
+
+class Simplices(Space):
     """The augmented oriented chain complex of a simplicial complex; degree k is spanned by the faces of k vertices."""
 
-    def __init__(self, faces):
-        self.degrees = faces
-        self.index = [{mask: i for i, mask in enumerate(masks)} for masks in self.degrees]
-        self.sizes = [len(masks) for masks in self.degrees]
+    def __init__(self, faces: Faces) -> None:
+        self.faces = faces
+        self.index = [{mask: i for i, mask in enumerate(masks)} for masks in faces]
+        self.sizes = [len(masks) for masks in faces]
 
-    def leads(self, degree, cells):
-        """Return the last cell in d of each of these cells, on which d has ±1: the face without its first vertex."""
-        masks, below = self.degrees[degree], self.index[degree - 1]
+    def leads(self, degree: int, cells: list[int]) -> list[int]:
+        """Leaving out the first vertex of a face gives the largest mask, with sign +."""
+        masks, below = self.faces[degree], self.index[degree - 1]
         return [below[masks[cell] & masks[cell] - 1] for cell in cells]
 
-    def boundary(self, degree, cell):
-        """Return d of a cell: the sum of its facets with alternating signs, + where the first vertex is left out."""
-        mask = rest = self.degrees[degree][cell]
-        index = self.index[degree - 1]
-        sign = -1 if degree % 2 == 0 else 1
-        terms = []
-        while rest:
-            bit = 1 << rest.bit_length() - 1
-            terms.append((index[mask ^ bit], sign))
-            sign = -sign
-            rest ^= bit
-        return terms
+    def boundary(self, degree: int, vector: Vector) -> Vector:
+        """The facets of a face with alternating signs, + where the first vertex is left out."""
+        masks = self.faces[degree]
+        total: dict[int, int] = {}
+        for cell, coefficient in vector:
+            mask = rest = masks[cell]
+            while rest:
+                bit = rest & -rest
+                total[mask ^ bit] = total.get(mask ^ bit, 0) + coefficient
+                coefficient = -coefficient  # noqa: PLW2901 - the sign alternates along the vertices
+                rest ^= bit
+        below = self.index[degree - 1]
+        return sorted((below[mask], coefficient) for mask, coefficient in total.items() if coefficient)
 
 
-class Cells:
-    """The cellular chain complex of the whole product (X, A)^K: cells are words, one letter for each vertex."""
+class Cells(Space):
+    """The cellular chain complex of the whole product (X, A)^K: cells are words, one letter for each vertex.
 
-    def __init__(self, statement, budget):
+    Letters of (D^n, S^{n-1}): for n = 1 the points 0, 1 and the edge 2 with d 2 = 1 - 0; otherwise a point 0, a cell 1
+    of degree n - 1, and a cell 2 of degree n with d 2 = 1. The places with a 2 form a face of K.
+    """
+
+    def __init__(self, statement: Statement, budget: Budget) -> None:
         faces = set().union(*face_masks(statement, budget))
         words = [("", 0, 0)]
         self.discs = statement.discs
         for vertex, n in enumerate(self.discs):
-            letters = ((0, 0), (0, n - 1), (1 << vertex, n))
+            letters = (("0", 0, 0), ("1", 0, n - 1), ("2", 1 << vertex, n))
             words = [
-                (word + "012"[letter], support | bit, degree + more)
+                (word + letter, support | bit, degree + more)
                 for word, support, degree in words
-                for letter, (bit, more) in enumerate(letters)
+                for letter, bit, more in letters
                 if support | bit in faces and (statement.top is None or degree + more <= statement.top)
             ]
             budget.spend_cells(len(words))
-        self.degrees = [[] for _ in range(max(degree for _, _, degree in words) + 1)]
+        self.words: list[list[str]] = [[] for _ in range(max(degree for _, _, degree in words) + 1)]
         for word, _, degree in words:
-            self.degrees[degree].append(word)
-        self.index = [{word: i for i, word in enumerate(words)} for words in self.degrees]
-        self.sizes = [len(words) for words in self.degrees]
+            self.words[degree].append(word)
+        self.index = [{word: i for i, word in enumerate(words)} for words in self.words]
+        self.sizes = [len(words) for words in self.words]
 
-    def leads(self, degree, cells):
-        """Return the last cell in d of each of these cells, on which d has ±1: the last 2 becomes a 1."""
-        below, leads = self.index[degree - 1], []
+    def leads(self, degree: int, cells: list[int]) -> list[int]:
+        """The last 2 becomes a 1."""
+        leads = []
         for cell in cells:
-            start, two, rest = self.degrees[degree][cell].rpartition("2")
+            start, two, rest = self.words[degree][cell].rpartition("2")
             if not two:
                 raise Failure("boundary", f"cell {cell} of degree {degree} is no a of a pair, it is a cycle")
-            leads.append(below[start + "1" + rest])
+            leads.append(self.index[degree - 1][f"{start}1{rest}"])
         return leads
 
-    def boundary(self, degree, cell):
-        """Return d of a cell by the Leibniz rule; d 2 = 1 - 0 for (D^1, S^0), and d 2 = 1 for larger discs."""
-        word = self.degrees[degree][cell]
-        index = self.index[degree - 1]
-        sign = 1
-        terms = []
-        for place, (letter, n) in enumerate(zip(word, self.discs)):
-            if letter == "2":
-                terms.append((index[word[:place] + "1" + word[place + 1 :]], sign))
-                if n == 1:
-                    terms.append((index[word[:place] + "0" + word[place + 1 :]], -sign))
-            if (n if letter == "2" else n - 1 if letter == "1" else 0) % 2:
-                sign = -sign
-        terms.sort()
-        return terms
+    def boundary(self, degree: int, vector: Vector) -> Vector:
+        """The Leibniz rule, with the sign of the degrees of the letters before."""
+        total: dict[str, int] = {}
+        for cell, coefficient in vector:
+            word = self.words[degree][cell]
+            for place, (letter, n) in enumerate(zip(word, self.discs, strict=True)):
+                if letter == "2":
+                    for end, sign in (("1", 1), ("0", -1)) if n == 1 else (("1", 1),):
+                        face = word[:place] + end + word[place + 1 :]
+                        total[face] = total.get(face, 0) + sign * coefficient
+                if (letter == "2" and n % 2) or (letter == "1" and not n % 2):
+                    coefficient = -coefficient  # noqa: PLW2901 - the sign of the letters so far
+        below = self.index[degree - 1]
+        return sorted((below[face], coefficient) for face, coefficient in total.items() if coefficient)
 
 
 # ---- the proof: Lemma A and Lemma B ----------------------------------------------------------------------------------
 
 
-def vector(value, size, budget):
+def vector(value: object, size: int, budget: Budget) -> Vector:
     """Return a sparse vector, read from the list of its cells and coefficients in turn, cells ascending."""
-    if len(sequence(value)) % 2 or not value:
+    flat = sequence(value)
+    if len(flat) % 2 or not flat:
         raise Failure("vector", "a vector lists cells and coefficients in turn, at least one of each")
-    cells = numbers(value[::2], 0, size)
-    coefficients = [integer(coefficient, budget) for coefficient in value[1::2]]
-    if 0 in coefficients:
-        raise Failure("vector", "a coefficient is zero")
-    return list(zip(cells, coefficients))
+    terms = []
+    last = -1
+    for cell, given in zip(flat[::2], flat[1::2], strict=True):
+        coefficient = given if type(given) is int and -LARGEST <= given <= LARGEST else integer(given, budget)
+        if type(cell) is not int or not last < cell < size or not coefficient:
+            raise Failure(
+                "vector", f"cells from 0 to {size - 1} are expected, ascending, with coefficients other than 0"
+            )
+        terms.append((cell, coefficient))
+        last = cell
+    return terms
 
 
-def boundary_of(terms, degree, space):
-    """Return d of a vector as a sorted sparse vector."""
-    total = {}
-    for cell, coefficient in terms:
-        for place, sign in space.boundary(degree, cell):
-            total[place] = total.get(place, 0) + sign * coefficient
-    return sorted((place, coefficient) for place, coefficient in total.items() if coefficient)
-
-
-def listed(entry, key):
-    """Return the list under an optional key, which must not be written when it is empty."""
-    value = sequence(entry.get(key, []))
-    if key in entry and not value:
-        raise Failure("shape", f"an empty {key!r} is written by leaving it out")
-    return value
-
-
-def homology(space, basis, budget):
+def homology(space: Space, basis: object, budget: Budget) -> list[tuple[int, list[int]]]:
     """Return (rank, orders of cyclic summands) of H_k for each degree k, proved by an adapted basis (Lemma A)."""
-    if len(sequence(basis)) != len(space.sizes):
-        raise Failure("degrees", f"a basis in each of {len(space.sizes)} degrees is expected, {len(basis)} are given")
-    groups = []
-    matched_above, boundaries, orders = [], [], []
+    entries = sequence(basis)
+    if len(entries) != len(space.sizes):
+        raise Failure("degrees", f"a basis in each of {len(space.sizes)} degrees is expected, {len(entries)} are given")
+    groups: list[tuple[int, list[int]]] = []
+    matched_above: list[int] = []
+    boundaries: list[Vector] = []
+    orders: list[int] = []
     for degree in reversed(range(len(space.sizes))):
         size = space.sizes[degree]
-        entry = record(basis[degree], (), ("cycles", "groups", "matched", "order", "pairs"))
-        matched = numbers(listed(entry, "matched"), 0, size)
-        pairs = [read_pair(pair, degree, space, budget) for pair in listed(entry, "pairs")]
+        entry = record(entries[degree], (), ("cycles", "groups", "matched", "order", "pairs"))
+        if not all(map(sequence, entry.values())):
+            raise Failure("shape", "an empty list is written by leaving out its key")
+        matched = numbers(entry.get("matched", []), 0, size)
+        pairs = [read_pair(sequence(pair), degree, space, budget) for pair in sequence(entry.get("pairs", []))]
         if degree == 0 and (matched or pairs):
             raise Failure("boundary", "degree 0 has a pair, but there is nothing below it")
-        cycles = [vector(value, size, budget) for value in listed(entry, "cycles")]
-        if any(boundary_of(cycle, degree, space) for cycle in cycles):
+        cycles = [vector(cycle, size, budget) for cycle in sequence(entry.get("cycles", []))]
+        if degree and any(space.boundary(degree, cycle) for cycle in cycles):
             raise Failure("cycle", f"a vector listed as a cycle in degree {degree} has a boundary")
         vectors = [a for a, _, _ in pairs] + cycles
         if "order" in entry:
-            family = [[(cell, 1)] for cell in matched] + vectors
-            family += [space.boundary(degree + 1, cell) for cell in matched_above] + boundaries
+            family: list[Vector] = [[(cell, 1)] for cell in matched] + vectors
+            family += [space.boundary(degree + 1, [(cell, 1)]) for cell in matched_above] + boundaries
             check_staircase(size, family, entry, budget)
+        elif "groups" in entry:
+            raise Failure("order", "groups need an order")
         else:
             leads = matched + (space.leads(degree + 1, matched_above) if matched_above else [])
-            check_natural(size, leads, vectors + boundaries, entry)
+            check_natural(size, leads, vectors + boundaries)
         groups.append((len(cycles), orders))
         matched_above, boundaries = matched, [b for _, _, b in pairs]
         orders = [e for _, e, _ in pairs if e > 1]
@@ -540,12 +558,12 @@ def homology(space, basis, budget):
     return groups[::-1]
 
 
-def read_pair(value, degree, space, budget):
+def read_pair(value: list[object], degree: int, space: Space, budget: Budget) -> tuple[Vector, int, Vector]:
     """Return a, e, b with d a = e b; where e is 1 only a is written, and b is d a."""
-    if len(sequence(value)) not in (1, 3):
+    if len(value) not in (1, 3):
         raise Failure("shape", "a pair is [a], or [a, e, b]")
     a = vector(value[0], space.sizes[degree], budget)
-    image = boundary_of(a, degree, space)
+    image = space.boundary(degree, a) if degree else []
     if len(value) == 1:
         return a, 1, image
     e = integer(value[1], budget)
@@ -557,64 +575,61 @@ def read_pair(value, degree, space, budget):
     return a, e, b
 
 
-def check_natural(size, leads, vectors, entry):
+def check_natural(size: int, leads: list[int], vectors: list[Vector]) -> None:
     """Require a basis of Z^size in which the largest cells of all vectors differ and carry ±1 (Lemma B).
 
-    `leads` are the largest cells of the vectors for which the coefficient is known to be ±1 by construction.
+    `leads` are the largest cells of those vectors for which the coefficient is known to be ±1 by construction.
     """
-    if "groups" in entry:
-        raise Failure("order", "groups need an order")
-    for terms in vectors:
-        if not terms or terms[-1][1] not in (1, -1):
-            raise Failure("basis", "a vector is zero, or its coefficient on its largest cell is not ±1")
-    leads = leads + [terms[-1][0] for terms in vectors]
-    if len(leads) != size or len(set(leads)) != size:
+    if not all(terms and terms[-1][1] in (1, -1) for terms in vectors):
+        raise Failure("basis", "a vector is zero, or its coefficient on its largest cell is not ±1")
+    found = leads + [terms[-1][0] for terms in vectors]
+    if len(found) != size or len(set(found)) != size:
         raise Failure("basis", f"the vectors do not lead each of the {size} cells once")
 
 
-def check_staircase(size, family, entry, budget):
+def check_staircase(size: int, family: list[Vector], entry: dict[str, object], budget: Budget) -> None:
     """Require the family to be a basis of Z^size, in staircase form for the order and groups given (Lemma B)."""
-    order = sequence(entry["order"])
-    if not all(type(cell) is int for cell in order) or sorted(order) != list(range(size)):
+    order = [cell for cell in sequence(entry["order"]) if type(cell) is int]
+    if len(order) != len(sequence(entry["order"])) or sorted(order) != list(range(size)):
         raise Failure("order", "the order must list every cell once")
     if len(family) != size or not all(family):
         raise Failure("basis", f"{size} vectors other than zero are expected")
     place = {cell: n for n, cell in enumerate(order)}
-    groups = listed(entry, "groups")
-    group_of, members = {}, []
-    for group in groups:
-        cells = sequence(record(group, ("cells", "inverse"))["cells"])
-        if len(cells) < 2 or not all(type(cell) is int and cell in place for cell in cells):
-            raise Failure("group", "a group has two cells or more")
-        begin = place[cells[0]]
-        if order[begin : begin + len(cells)] != cells or any(cell in group_of for cell in cells):
-            raise Failure("group", "the cells of a group must follow one another in the order, in no other group")
-        group_of.update((cell, len(members)) for cell in cells)
-        members.append([])
-    seen = set()
+    group_of: dict[int, int] = {}
+    members: list[tuple[list[int], list[dict[int, int]], object]] = []
+    for value in sequence(entry.get("groups", [])):
+        group = record(value, ("cells", "inverse"))
+        cells = [cell for cell in sequence(group["cells"]) if type(cell) is int and cell in place]
+        if len(cells) < 2 or order[place[cells[0]] :][: len(cells)] != cells or cells != group["cells"]:
+            raise Failure("group", "a group has two cells or more, as they follow one another in the order")
+        if any(cell in group_of for cell in cells):
+            raise Failure("group", "a cell is in two groups")
+        group_of.update(dict.fromkeys(cells, len(members)))
+        members.append((cells, [], group["inverse"]))
+    seen: set[int] = set()
     for terms in family:
         cell, coefficient = min(terms, key=lambda term: place[term[0]])
         if cell in group_of:
-            members[group_of[cell]].append(dict(terms))
+            members[group_of[cell]][1].append(dict(terms))
         elif cell in seen or coefficient not in (1, -1):
             raise Failure("basis", f"cell {cell} leads two vectors, or one with a coefficient that is not ±1")
         seen.add(cell)
-    for group, vectors in zip(groups, members):
-        check_inverse(group["cells"], vectors, group["inverse"], budget)
+    for cells, vectors, inverse in members:
+        check_inverse(cells, vectors, sequence(inverse), budget)
 
 
-def check_inverse(cells, vectors, inverse, budget):
+def check_inverse(cells: list[int], vectors: list[dict[int, int]], inverse: list[object], budget: Budget) -> None:
     """Require the square matrix of a group (a row for each cell, a column for each vector) to have this inverse."""
     size = len(cells)
-    if len(vectors) != size or len(sequence(inverse)) != size:
+    if len(vectors) != size or len(inverse) != size:
         raise Failure("group", "a group has as many cells as vectors, and so many rows in its inverse")
     for i, line in enumerate(inverse):
-        budget.look_at_clock()
         row = [integer(entry, budget) for entry in sequence(line)]
         if len(row) != size:
             raise Failure("group", "the inverse of a group is a square matrix")
+        budget.look_at_clock()
         for j, terms in enumerate(vectors):
-            if sum(entry * terms.get(cell, 0) for entry, cell in zip(row, cells)) != (i == j):
+            if sum(entry * terms.get(cell, 0) for entry, cell in zip(row, cells, strict=True)) != (i == j):
                 raise Failure("group", "the matrix given as the inverse of a group is not its inverse")
 
 
@@ -624,18 +639,18 @@ def check_inverse(cells, vectors, inverse, budget):
 class Total:
     """The homology that has been proved so far, summed over the blocks."""
 
-    def __init__(self):
-        self.ranks = Counter()
-        self.torsion = {}
+    def __init__(self) -> None:
+        self.ranks: Counter[int] = Counter()
+        self.torsion: dict[int, Counter[int]] = {}
 
-    def add(self, degree, rank, orders, times):
-        self.ranks[degree] += rank * times
-        for order in orders:
-            self.torsion.setdefault(degree, Counter())[order] += times
+    def add(self, groups: list[tuple[int, list[int]]], shift: int, times: int) -> None:
+        for degree, (rank, orders) in enumerate(groups):
+            self.ranks[degree + shift] += rank * times
+            for order in orders:
+                self.torsion.setdefault(degree + shift, Counter())[order] += times
 
-    def groups(self):
-        """Return {degree: (rank, invariant factors)} without zero groups."""
-        found = {}
+    def groups(self) -> Groups:
+        found: Groups = {}
         for degree in self.ranks.keys() | self.torsion.keys():
             torsion = invariant_factors(self.torsion.get(degree, Counter()))
             if self.ranks[degree] or torsion:
@@ -643,7 +658,7 @@ class Total:
         return found
 
 
-def invariant_factors(orders):
+def invariant_factors(orders: Counter[int]) -> tuple[int, ...]:
     """Return the invariant factors of a sum of cyclic groups, by Z/a + Z/b = Z/gcd + Z/lcm, equal ones together."""
     counts = Counter(orders)
     while True:
@@ -653,51 +668,48 @@ def invariant_factors(orders):
         a, b = clash
         times = min(counts[a], counts[b])
         common = gcd(a, b)
-        counts.update({common: times})
-        counts.update({a // common * b: times})
-        counts.subtract({a: times, b: times})
+        counts[common] += times
+        counts[a // common * b] += times
+        counts[a] -= times
+        counts[b] -= times
         counts = +counts
 
 
-def prove_by_blocks(statement, lines, budget):
+def prove_by_blocks(statement: Statement, lines: Lines, budget: Budget) -> Total:
     """Check one record for each class of blocks that is no cone, and return the total (stable splitting)."""
     total = Total()
-    for name, faces, vertices, shifts in block_classes(statement, budget):
-        most = statement.vertices
-        if statement.top is not None:
-            most = statement.top - min(shifts)
-            faces = faces[: most + 1]
+    for name, all_faces, vertices, shifts in block_classes(statement, budget):
+        most = statement.vertices if statement.top is None else statement.top - min(shifts)
+        faces = all_faces[: most + 1]
         if is_cone(faces, vertices, most):
             continue
         value = next_record(lines, ("basis", "block"))
         if value["block"] != name:
             raise Failure("block", f"the record of block {name} is expected here")
-        for degree, (rank, orders) in enumerate(homology(Faces(faces), value["basis"], budget)):
-            for shift, times in shifts.items():
-                total.add(degree + shift, rank, orders, times)
+        groups = homology(Simplices(faces), value["basis"], budget)
+        for shift, times in shifts.items():
+            total.add(groups, shift, times)
     return total
 
 
-def prove_by_cells(statement, lines, budget):
+def prove_by_cells(statement: Statement, lines: Lines, budget: Budget) -> Total:
     """Check the one record of the whole product, and return the total."""
     total = Total()
-    basis = next_record(lines, ("basis",))["basis"]
-    for degree, (rank, orders) in enumerate(homology(Cells(statement, budget), basis, budget)):
-        total.add(degree, rank, orders, 1)
+    total.add(homology(Cells(statement, budget), next_record(lines, ("basis",))["basis"], budget), 0, 1)
     return total
 
 
 ROUTES = {"blocks": prove_by_blocks, "cells": prove_by_cells}
 
 
-def next_record(lines, keys):
+def next_record(lines: Lines, keys: Sequence[str]) -> dict[str, object]:
     value = lines.next()
     if type(value) is dict and "end" in value:
         raise Failure("missing-record", "the end record stands where another record is needed")
     return record(value, keys)
 
 
-def read_header(lines):
+def read_header(lines: Lines) -> tuple[str, str, object]:
     """Return the claim's name, the route and the raw statement."""
     first = lines.raw()
     if first is None or b'"format"' not in first:
@@ -705,28 +717,45 @@ def read_header(lines):
     value = value_of(first)
     if type(value) is dict and value.get("format") != FORMAT:
         raise Failure("unknown-format", f"format {str(value.get('format'))[:40]} is unknown here, {FORMAT} is known")
-    record(value, ("about", "format", "route", "statement"))
-    if type(value["format"]) is not int:
+    header = record(value, ("about", "format", "route", "statement"))
+    if type(header["format"]) is not int:
         raise Failure("number", "the format is an integer")
-    about = record(value["about"], ("claim",), ("labels", "source", "title"))
-    if type(about["claim"]) is not str or not re.fullmatch(r"[A-Za-z0-9][A-Za-z0-9._-]{0,99}", about["claim"], re.ASCII):
+    about = record(header["about"], ("claim",), ("labels", "source", "title"))
+    texts = [about["claim"], about.get("source", ""), about.get("title", ""), header["route"]]
+    if not all(type(text) is str for text in texts + sequence(about.get("labels", []))):
+        raise Failure("shape", "the claim's name, source, title, labels and route are texts")
+    if not re.fullmatch(r"[A-Za-z0-9][A-Za-z0-9._-]{0,99}", str(about["claim"]), re.ASCII):
         raise Failure("claim-name", "a claim's name has 1 to 100 letters, digits, dots, dashes and underscores")
-    for key in ("source", "title"):
-        if type(about.get(key, "")) is not str:
-            raise Failure("shape", f"{key} is a text")
-    if not all(type(label) is str for label in sequence(about.get("labels", []))):
-        raise Failure("shape", "labels are texts")
-    if value["route"] not in ("blocks", "cells"):
-        raise Failure("route", "the route is 'blocks' or 'cells'")
-    return about["claim"], value["route"], value["statement"]
+    if header["route"] not in ROUTES:
+        raise Failure("route", f"the route is {' or '.join(map(repr, ROUTES))}")
+    return str(about["claim"]), str(header["route"]), header["statement"]
 
 
-def examine(path, limits):
-    """Return the report on one file."""
-    report = {
-        "path": path, "verdict": "undecided", "reason": "internal", "where": None,
-        "claim": None, "statement": None, "fingerprint": None, "sentence": "",
-    }
+def check_end(lines: Lines) -> None:
+    """Require the end record, with the right count and digest, and nothing behind it."""
+    end = record(record(lines.next(), ("end",))["end"], ("records", "sha256"))
+    if type(end["records"]) is not int or end["records"] != lines.number - 2:
+        raise Failure("end", "the end record gives another number of records")
+    if end["sha256"] != lines.digest.hexdigest():
+        raise Failure("digest", "the end record gives another digest of the lines before it")
+    if lines.raw() is not None:
+        raise Failure("trailing", "something follows the end record")
+
+
+def compare(statement: Statement, found: Groups) -> None:
+    """Require the groups that were proved to be those that are stated, in every degree of the claim."""
+    degrees = sorted(found.keys() | statement.groups.keys()) if statement.degrees is None else statement.degrees
+    for degree in degrees:
+        proved, stated = found.get(degree, (0, ())), statement.groups.get(degree, (0, ()))
+        if proved != stated:
+            sentence = f"H_{degree} is stated as {group_text(*stated)}, but the records prove {group_text(*proved)}"
+            raise Failure("false", sentence, line=1)
+
+
+def examine(path: str, limits: argparse.Namespace) -> dict[str, str | None]:
+    """Return the report on one file. Only the last step of the try block accepts, after every check has passed."""
+    report: dict[str, str | None] = {"path": path, "verdict": "undecided", "reason": "internal", "where": None}
+    report |= {"claim": None, "statement": None, "fingerprint": None, "sentence": ""}
     lines = None
     try:
         budget = Budget(limits)
@@ -736,39 +765,26 @@ def examine(path, limits):
         report["claim"], route, raw = read_header(lines)
         statement = Statement(raw, budget)
         total = ROUTES[route](statement, lines, budget)
-        ending = lines.next()
-        end = record(record(ending, ("end",))["end"], ("records", "sha256"))
-        if type(end["records"]) is not int or end["records"] != lines.number - 2:
-            raise Failure("end", "the end record gives another number of records")
-        if end["sha256"] != lines.digest.hexdigest():
-            raise Failure("digest", "the end record gives another digest of the lines before it")
-        if lines.raw() is not None:
-            raise Failure("trailing", "lines follow the end record")
-        found = total.groups()
-        wanted = sorted(found.keys() | statement.groups.keys()) if statement.degrees is None else statement.degrees
-        for degree in wanted:
-            proved, claimed = found.get(degree, (0, ())), statement.groups.get(degree, (0, ()))
-            if proved != claimed:
-                stated = f"H_{degree} is stated as {group_text(*claimed)}, but the records prove {group_text(*proved)}"
-                raise Failure("false", stated, line=1)
-        report["statement"] = statement.text()
-        report["fingerprint"] = hashlib.sha256(canonical(raw)).hexdigest()
-        report.update(verdict="accepted", reason="proved", sentence="every record was checked")
+        check_end(lines)
+        compare(statement, total.groups())
+        text, fingerprint = statement.text(), hashlib.sha256(canonical(raw)).hexdigest()
+        report |= {"statement": text, "fingerprint": fingerprint, "sentence": "every record was checked"}
+        report |= {"verdict": "accepted", "reason": "proved"}
     except Failure as failure:
-        verdict = "undecided" if failure.code in UNDECIDED else "rejected"
-        where = f"line {failure.line or lines.number}" if lines else None
-        report.update(verdict=verdict, reason=failure.code, where=where, sentence=failure.sentence)
+        report["verdict"] = "undecided" if failure.code in UNDECIDED else "rejected"
+        report["where"] = f"line {failure.line or lines.number}" if lines else None
+        report |= {"reason": failure.code, "sentence": failure.sentence}
     except OSError as error:
-        report.update(reason="unreadable", sentence=f"the file cannot be read ({error.strerror})")
+        report |= {"reason": "unreadable", "sentence": f"the file cannot be read ({error.strerror})"}
     except MemoryError:
-        report.update(reason="limit", sentence="the memory of this machine does not suffice")
+        report |= {"reason": "limit", "sentence": "the memory of this machine does not suffice"}
     return report
 
 
 # ---- the command -----------------------------------------------------------------------------------------------------
 
 
-def certificates_in(path):
+def certificates_in(path: str) -> list[str]:
     """Return the certificates at a path: the file itself, or all below a folder, in the order of their names."""
     if not os.path.isdir(path):
         return [path]
@@ -777,33 +793,30 @@ def certificates_in(path):
     )
 
 
-def printable(text):
+def printable(text: str | None) -> str:
     """Return a text that cannot disturb a terminal or forge a line."""
-    return text if text.isprintable() else ascii(text)
+    return text if text and text.isprintable() else ascii(text)
 
 
-def show(report):
+def show(report: dict[str, str | None]) -> None:
     """Print the report on one file."""
     print(f"{report['verdict']:<10} {printable(report['path'])}")
     if report["verdict"] == "accepted":
-        print(f"           {report['statement']}")
-        print(f"           fingerprint {report['fingerprint']}")
+        print(f"           {report['statement']}\n           fingerprint {report['fingerprint']}")
     else:
         where = f"{report['where']}, " if report["where"] else ""
         print(f"           {where}{report['reason']}: {printable(report['sentence'])}")
 
 
-def exit_code(reports):
+def exit_code(reports: list[dict[str, str | None]]) -> int:
     """Return the exit code for these reports; 0 needs at least one, all accepted."""
-    if any(report["reason"] == "internal" for report in reports):
-        return 70
     verdicts = {report["verdict"] for report in reports}
     if "rejected" in verdicts:
         return 1
     return 0 if verdicts == {"accepted"} else 3
 
 
-def main(arguments=None):
+def main(arguments: list[str] | None = None) -> int:
     """Check the files named on the command line and return the exit code."""
     parser = argparse.ArgumentParser(prog="verifier.py", description="Check certificates; read the head of this file.")
     parser.add_argument("paths", nargs="+", metavar="PATH", help="a certificate, or a folder to search for them")
@@ -813,10 +826,9 @@ def main(arguments=None):
     parser.add_argument("--max-bits", type=int, default=100_000, help="bits of one integer (%(default)s)")
     parser.add_argument("--max-seconds", type=float, default=3600, help="seconds for one file (%(default)s)")
     limits = parser.parse_args(arguments)
-    sys.stdout.reconfigure(encoding="utf-8")
     sys.set_int_max_str_digits(max(4300, limits.max_bits))
     reports = []
-    for path in [file for path in limits.paths for file in certificates_in(path)]:
+    for path in (file for given in limits.paths for file in certificates_in(given)):
         reports.append(examine(path, limits))
         if not limits.json:
             show(reports[-1])
@@ -833,8 +845,9 @@ def main(arguments=None):
 
 if __name__ == "__main__":
     try:
+        sys.stdout.reconfigure(encoding="utf-8", errors="backslashreplace")  # type: ignore[union-attr]
         code = main()
-    except Exception as error:
-        print(f"internal error, no verdict: {type(error).__name__}: {ascii(str(error))}", file=sys.stderr)
+    except Exception as error:  # noqa: BLE001 - a crash must never look like a verdict
+        print(f"internal error, no verdict: {type(error).__name__}: {str(error)!a}", file=sys.stderr)
         code = 70
     sys.exit(code)

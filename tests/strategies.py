@@ -4,9 +4,26 @@ from __future__ import annotations
 
 from hypothesis import strategies as st
 
-from certify.simplicial import Label, SimplicialComplex, face_of
+from certify.exact import AbelianGroup, BasedComplex
+from certify.products import DiscPair, PolyhedralProduct
+from certify.simplicial import FAMILIES, Label, SimplicialComplex, build, face_of, join
 
-__all__ = ["complexes", "complexes_with_face", "complexes_with_vertices"]
+__all__ = [
+    "based_complexes",
+    "complexes",
+    "complexes_with_face",
+    "complexes_with_torsion",
+    "complexes_with_vertices",
+    "cyclic_orders",
+    "disc_products",
+    "disc_products_with_torsion",
+    "integer_matrices",
+    "products_with_degrees",
+    "relabelled_products",
+    "sphere_products",
+    "spheres",
+    "unimodular_matrices",
+]
 
 
 # -- simplicial complexes -----------------------------------------------------------------------
@@ -39,3 +56,189 @@ def complexes_with_vertices(draw: st.DrawFn, max_vertices: int = 6) -> tuple[Sim
     k = draw(complexes(max_vertices))
     chosen = draw(st.permutations(k.labels))
     return k, list(chosen[: draw(st.integers(0, len(chosen)))])
+
+
+# -- abelian groups and integer matrices --------------------------------------------------------
+
+
+def orders() -> st.SearchStrategy[int]:
+    """Draw the order of a cyclic group: 1, a small number with divisors in common with others, or a huge one."""
+    return st.integers(1, 12) | st.sampled_from([16, 27, 36, 60, 2**61 - 1, 10**18, 2**40 * 3**20])
+
+
+def cyclic_orders() -> st.SearchStrategy[list[int]]:
+    """Draw the orders of the summands of a finite abelian group, in any order, some perhaps 1."""
+    return st.lists(orders(), max_size=6)
+
+
+def coefficients() -> st.SearchStrategy[int]:
+    """Draw an integer: mostly small, at times far beyond the size of a machine word."""
+    return st.integers(-3, 3) | st.integers(-3, 3) | st.sampled_from([2**64 + 1, -(10**30)])
+
+
+@st.composite
+def integer_matrices(draw: st.DrawFn, max_size: int = 4) -> list[list[int]]:
+    """Draw a matrix with at least one row and one column."""
+    rows, columns = draw(st.integers(1, max_size)), draw(st.integers(1, max_size))
+    line = st.lists(coefficients(), min_size=columns, max_size=columns)
+    return draw(st.lists(line, min_size=rows, max_size=rows))
+
+
+@st.composite
+def unimodular_matrices(draw: st.DrawFn, max_size: int = 4) -> list[list[int]]:
+    """Draw a square matrix of determinant 1 or -1, perhaps 0×0."""
+    size = draw(st.integers(0, max_size))
+    matrix = [[int(i == j) for j in range(size)] for i in range(size)]
+    for i, j, factor in draw(_moves(size)):
+        matrix[i] = [a + factor * b for a, b in zip(matrix[i], matrix[j], strict=True)]
+    signs = draw(st.lists(st.sampled_from([1, -1]), min_size=size, max_size=size))
+    rows = draw(st.permutations(matrix))
+    return [[sign * entry for entry in row] for sign, row in zip(signs, rows, strict=True)]
+
+
+@st.composite
+def _moves(draw: st.DrawFn, size: int) -> list[tuple[int, int, int]]:
+    """Draw (i, j, factor) for all i ≠ j: a factor for each elementary matrix."""
+    places = [(i, j) for i in range(size) for j in range(size) if i != j]
+    factors = draw(st.lists(coefficients(), min_size=len(places), max_size=len(places)))
+    return [(i, j, factor) for (i, j), factor in zip(places, factors, strict=True) if factor]
+
+
+# -- based complexes ----------------------------------------------------------------------------
+
+
+@st.composite
+def based_complexes(
+    draw: st.DrawFn, max_degree: int = 3, max_pieces: int = 8
+) -> tuple[BasedComplex, tuple[AbelianGroup, ...]]:
+    """Draw a based complex together with its homology, degree by degree.
+
+    It starts as a sum of pieces ℤ and ℤ --e--> ℤ, of which the homology can be read off, and is disguised by random
+    changes of the basis in each degree.
+    """
+    top = draw(st.integers(0, max_degree))
+    lone = st.tuples(st.integers(0, top), st.just(0))
+    joined = st.tuples(st.integers(1, max(top, 1)), orders())
+    pieces = draw(st.lists(lone | joined if top else lone, max_size=max_pieces))
+    boundaries, homology = _elementary(top, pieces)
+    for degree in range(top + 1):
+        _change_basis(draw, boundaries, degree)
+    columns = [[tuple(enumerate(column)) for column in boundary] for boundary in boundaries]
+    return BasedComplex.from_columns(columns), homology
+
+
+def _elementary(top: int, pieces: list[tuple[int, int]]) -> tuple[list[list[list[int]]], tuple[AbelianGroup, ...]]:
+    """Return the boundaries, as lists of dense columns, and the homology of a sum of pieces (degree, e)."""
+    sizes = [0] * (top + 1)
+    ranks = [0] * (top + 1)
+    torsion: list[list[int]] = [[] for _ in sizes]
+    joins = []
+    for degree, e in pieces:
+        if e:
+            joins.append((degree, sizes[degree], sizes[degree - 1], e))
+            sizes[degree - 1] += 1
+            torsion[degree - 1].append(e)
+        else:
+            ranks[degree] += 1
+        sizes[degree] += 1
+    boundaries = [[[0] * (sizes[k - 1] if k else 0) for _ in range(sizes[k])] for k in range(top + 1)]
+    for degree, column, row, e in joins:
+        boundaries[degree][column][row] = e
+    return boundaries, tuple(map(AbelianGroup.of, ranks, torsion))
+
+
+def _change_basis(draw: st.DrawFn, boundaries: list[list[list[int]]], degree: int) -> None:
+    """Add multiples of cells to other cells of a degree, change signs and shuffle them."""
+    size = len(boundaries[degree])
+    above = boundaries[degree + 1] if degree + 1 < len(boundaries) else []
+    for i, j, factor in draw(_moves(size)):
+        # Cell i becomes cell i + factor · cell j, so the old cell i is the new one minus factor · cell j.
+        own = boundaries[degree]
+        own[i] = [a + factor * b for a, b in zip(own[i], own[j], strict=True)]
+        for column in above:
+            column[j] -= factor * column[i]
+    order = draw(st.permutations(range(size)))
+    signs = draw(st.lists(st.sampled_from([1, -1]), min_size=size, max_size=size))
+    boundaries[degree][:] = [[signs[i] * a for a in boundaries[degree][i]] for i in order]
+    for column in above:
+        column[:] = [signs[i] * column[i] for i in order]
+
+
+# -- polyhedral products ------------------------------------------------------------------------
+
+
+@st.composite
+def complexes_with_torsion(draw: st.DrawFn) -> SimplicialComplex:
+    """Draw a projective plane on shuffled vertices, with a cone over some of it and perhaps a ghost.
+
+    The plane is a full subcomplex, so that every polyhedral product of disc pairs over the complex has torsion.
+    """
+    order = draw(st.permutations(range(6)))
+    plane = [[order[vertex] for vertex in facet] for facet in build("projective-plane").facets]
+    cone = draw(st.lists(st.sampled_from([face for facet in plane for face in (facet, facet[:2])]), max_size=4))
+    vertices = 6 + bool(cone) + draw(st.integers(0, 1))
+    return SimplicialComplex.from_faces(range(1, vertices + 1), plane + [[*face, 6] for face in cone])
+
+
+@st.composite
+def disc_products(draw: st.DrawFn, max_vertices: int = 5, max_n: int = 3) -> PolyhedralProduct:
+    """Draw a polyhedral product of disc pairs, one pair for each vertex, over a complex that may have ghosts."""
+    return draw(_with_pairs(draw(complexes(max_vertices)), max_n))
+
+
+@st.composite
+def disc_products_with_torsion(draw: st.DrawFn, max_n: int = 3) -> PolyhedralProduct:
+    """Draw a polyhedral product of disc pairs that has torsion in its homology."""
+    return draw(_with_pairs(draw(complexes_with_torsion()), max_n))
+
+
+@st.composite
+def spheres(draw: st.DrawFn) -> SimplicialComplex:
+    """Draw a complex on at most 8 vertices that triangulates a sphere; the empty one is the sphere of dimension -1."""
+    family = st.sampled_from(
+        [("simplex-boundary", m, 0) for m in range(1, 6)]
+        + [("polygon", n, 0) for n in range(3, 8)]
+        + [("cross-polytope", n, 0) for n in range(4)]
+        + [("cyclic-polytope", m, d) for d in range(2, 5) for m in range(d + 1, 9)]
+    )
+    k = _member(*draw(family))
+    if k.vertex_count < 4 and draw(st.booleans()):
+        return join(k, _member("simplex-boundary", draw(st.integers(1, 4)), 0))
+    return k
+
+
+def _member(name: str, size: int, dimension: int) -> SimplicialComplex:
+    parameters = FAMILIES[name].parameters
+    return build(name, **dict(zip(parameters, (size, dimension), strict=False)))
+
+
+def _with_pairs(k: SimplicialComplex, max_n: int) -> st.SearchStrategy[PolyhedralProduct]:
+    pair = st.builds(DiscPair, st.integers(1, max_n))
+    pairs = st.lists(pair, min_size=k.vertex_count, max_size=k.vertex_count)
+    return pairs.map(lambda chosen: PolyhedralProduct(k, tuple(chosen)))
+
+
+@st.composite
+def sphere_products(draw: st.DrawFn, max_n: int = 3) -> PolyhedralProduct:
+    """Draw a polyhedral product of disc pairs over a sphere; it is a closed manifold."""
+    return draw(_with_pairs(draw(spheres()), max_n))
+
+
+@st.composite
+def products_with_degrees(draw: st.DrawFn) -> tuple[PolyhedralProduct, list[int]]:
+    """Draw a product, and degrees in any order, some of which may lie above all its cells."""
+    space = draw(disc_products() | disc_products_with_torsion(max_n=2))
+    most = sum(pair.n for pair in space.pairs) + 2
+    return space, draw(st.lists(st.integers(0, most), min_size=1, max_size=4))
+
+
+@st.composite
+def relabelled_products(draw: st.DrawFn) -> tuple[PolyhedralProduct, PolyhedralProduct]:
+    """Draw a product, and the same one with its vertices in another order."""
+    space = draw(disc_products(max_vertices=6) | disc_products_with_torsion())
+    order = draw(st.permutations(range(space.complex.vertex_count)))
+    place = {vertex: number for number, vertex in enumerate(order)}
+    faces = [[place[vertex] for vertex in facet] for facet in space.complex.facets]
+    labels = [space.complex.labels[vertex] for vertex in order]
+    moved = SimplicialComplex.from_faces(labels, faces)
+    return space, PolyhedralProduct(moved, tuple(space.pairs[vertex] for vertex in order))

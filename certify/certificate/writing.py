@@ -36,7 +36,7 @@ class Spool:
 
     def __init__(self) -> None:
         self.records = 0
-        self._file: IO[bytes] = tempfile.TemporaryFile()
+        self._file: IO[bytes] = tempfile.TemporaryFile()  # noqa: SIM115 - closed by __exit__
 
     def __enter__(self) -> Spool:
         """Return the spool itself."""

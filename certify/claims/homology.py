@@ -1,8 +1,8 @@
 """The claim kind ``homology``: the integral homology groups of a polyhedral product.
 
-Statement: H_k((X, A)^K; ℤ) for all degrees, or for a list of degrees. Routes: ``blocks``, one record for each class of
-blocks of the stable splitting that is no cone, or ``cells``, one record for the whole product. Each record is an adapted
-basis (Lemmas A and B of docs/mathematics.md).
+Statement: H_k((X, A)^K; ℤ) for all degrees, or for a list of degrees. Routes: ``blocks``, one record for each class
+of blocks of the stable splitting that is no cone, or ``cells``, one record for the whole product. Each record is an
+adapted basis (Lemmas A and B of docs/mathematics.md).
 """
 
 from __future__ import annotations

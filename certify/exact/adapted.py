@@ -15,7 +15,7 @@ from dataclasses import dataclass, field
 from certify.exact.complexes import BasedComplex
 from certify.exact.groups import AbelianGroup
 from certify.exact.smith import diagonalise
-from certify.exact.staircase import Group, Layout, arrange
+from certify.exact.staircase import NATURAL, Group, Layout, arrange, is_natural
 from certify.exact.vectors import Entries, Vector, add_multiple, combination, entries
 
 __all__ = ["AdaptedBasis", "AdaptedDegree", "Group", "Pair", "adapted_basis"]
@@ -112,6 +112,7 @@ class _Element:
 class _FromAbove:
     """What a degree leaves to the one below: boundaries b with the cells they use up, and carried basis vectors."""
 
+    matched: list[tuple[Entries, int]] = field(default_factory=list)
     boundaries: list[tuple[Entries, int]] = field(default_factory=list)
     carried: list[tuple[Vector, int]] = field(default_factory=list)
     classes: list[list[int]] = field(default_factory=list)
@@ -231,7 +232,9 @@ class _Degree:
             _Element(combination((form.right[i][j], e.chain.items()) for i, e in enumerate(elements)), {}, home)
             for j in range(len(elements))
         ]
-        columns = [{row: line[j] for row, line in zip(rows, form.left, strict=True) if line[j]} for j in range(len(rows))]
+        columns = [
+            {row: line[j] for row, line in zip(rows, form.left, strict=True) if line[j]} for j in range(len(rows))
+        ]
         rank = len(form.entries)
         for element, e, column in zip(mixed, form.entries, columns, strict=False):
             self._accept_pair(element, e, entries(column), rows[0])
@@ -244,17 +247,20 @@ class _Degree:
 
     def finish(self) -> AdaptedDegree:
         """Return this degree of the adapted basis, and leave the boundaries to the degree below."""
-        self.below.boundaries = self.matched_boundaries + self.pair_boundaries
+        self.below.boundaries = self.pair_boundaries
+        self.below.matched = self.matched_boundaries
         self.below.used.update(self.pivots)
-        family = [(((cell, 1),), cell) for cell in self.matched]
-        family += [(pair.a, home) for pair, home in self.pairs]
-        family += self.cycles
-        family += self.above.boundaries
+        explicit = [(pair.a, home) for pair, home in self.pairs] + self.cycles
+        layout = NATURAL
+        if self.classes or not is_natural(explicit + self.above.boundaries):
+            family: list[tuple[Entries, int]] = [(((cell, 1),), cell) for cell in self.matched]
+            family += explicit + self.above.matched + self.above.boundaries
+            layout = arrange(len(self.columns), family, self.classes)
         return AdaptedDegree(
             matched=tuple(self.matched),
             pairs=tuple(pair for pair, _ in self.pairs),
             cycles=tuple(cycle for cycle, _ in self.cycles),
-            layout=arrange(len(self.columns), family, self.classes),
+            layout=layout,
         )
 
 

@@ -11,7 +11,9 @@ from certify.errors import BadInput
 
 __all__ = ["AbelianGroup", "superscript"]
 
-_TERM = re.compile(r"(?:Z|ℤ)(?:\^(?P<rank>\d{1,40}))?|(?:Z|ℤ)/(?P<one>\d{1,40})|\((?:Z|ℤ)/(?P<many>\d{1,40})\)\^(?P<count>\d{1,40})")
+_TERM = re.compile(
+    r"(?:Z|ℤ)(?:\^(?P<rank>\d{1,40}))?|(?:Z|ℤ)/(?P<one>\d{1,40})|\((?:Z|ℤ)/(?P<many>\d{1,40})\)\^(?P<count>\d{1,40})"
+)
 _DIGITS = str.maketrans("0123456789", "⁰¹²³⁴⁵⁶⁷⁸⁹")
 _PLAIN = str.maketrans("⁰¹²³⁴⁵⁶⁷⁸⁹", "0123456789")
 _MOST_SUMMANDS = 10**6

@@ -11,7 +11,7 @@ import networkx as nx
 from certify.exact.smith import Matrix, inverse
 from certify.exact.vectors import Entries
 
-__all__ = ["NATURAL", "Group", "Layout", "arrange"]
+__all__ = ["NATURAL", "Group", "Layout", "arrange", "is_natural"]
 
 
 @dataclass(frozen=True, slots=True)
@@ -54,9 +54,15 @@ class Layout:
 NATURAL = Layout(None, ())
 
 
-def arrange(
-    size: int, family: Sequence[tuple[Entries, int]], classes: Iterable[Sequence[int]] = ()
-) -> Layout:
+def is_natural(family: Iterable[tuple[Entries, int]]) -> bool:
+    """Tell whether each vector has its home as its largest cell, with coefficient ±1.
+
+    If the homes are all the cells, each once, then the natural order is a staircase.
+    """
+    return all(vector[-1][0] == home and vector[-1][1] in (1, -1) for vector, home in family)
+
+
+def arrange(size: int, family: Sequence[tuple[Entries, int]], classes: Iterable[Sequence[int]] = ()) -> Layout:
     """Return a staircase for a basis of ℤ^size.
 
     Parameters
@@ -81,12 +87,9 @@ def arrange(
 
     Examples
     --------
-    >>> arrange(2, [(((0, 1),), 0), (((0, 5), (1, -1)), 1)]).order is None
-    True
+    >>> arrange(2, [(((0, 1), (1, 5)), 0), (((1, -1),), 1)]).order
+    (0, 1)
     """
-    classes = list(classes)
-    if not classes and all(vector[-1][0] == home and vector[-1][1] in (1, -1) for vector, home in family):
-        return NATURAL
     lead_class = _joined(size, classes)
     relation: nx.DiGraph[int] = nx.DiGraph()
     relation.add_nodes_from(sorted(set(lead_class), reverse=True))
@@ -121,7 +124,7 @@ def _joined(size: int, classes: Iterable[Sequence[int]]) -> list[int]:
 def _in_order(relation: nx.DiGraph[int]) -> list[set[int]]:
     """Return the strongly connected components, each before those that it points to, largest cells first."""
     condensed = nx.condensation(relation)
-    members: dict[int, set[int]] = dict(condensed.nodes(data="members"))
+    members: dict[int, set[int]] = {node: condensed.nodes[node]["members"] for node in condensed}
     order = nx.lexicographical_topological_sort(condensed, key=lambda node: -max(members[node]))
     return [members[node] for node in order]
 

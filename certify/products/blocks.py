@@ -7,9 +7,9 @@ the vertices of I have been moved down to 1, 2, …, many K_I are the same compl
 
 from __future__ import annotations
 
-from collections import Counter
 from collections.abc import Iterator, Mapping
 from dataclasses import dataclass
+from itertools import pairwise
 
 from certify.exact import BasedComplex, Entries
 from certify.products.space import PolyhedralProduct
@@ -20,7 +20,7 @@ BATCH = 1 << 18
 """Faces that are merged together at most; a constant of the certificate format."""
 
 _Masks = tuple[int, ...]
-_States = dict[tuple[int, _Masks], tuple[str, Counter[int]]]
+_States = dict[tuple[int, _Masks], tuple[str, dict[int, int]]]
 
 
 @dataclass(frozen=True, slots=True)
@@ -66,22 +66,23 @@ class Block:
         for mask in self.faces:
             degrees[mask.bit_count()].append(mask)
         boundaries: list[tuple[Entries, ...]] = [((),)]
-        for degree in range(1, len(degrees)):
-            below = {mask: number for number, mask in enumerate(degrees[degree - 1])}
-            first = 1 if degree % 2 else -1
-            boundaries.append(tuple(_boundary(mask, below, first) for mask in degrees[degree]))
+        for below, faces in pairwise(degrees):
+            numbers = {mask: number for number, mask in enumerate(below)}
+            boundaries.append(tuple([_boundary(mask, numbers) for mask in faces]))
         return BasedComplex(tuple(boundaries))
 
 
-def _boundary(mask: int, below: Mapping[int, int], sign: int) -> Entries:
-    """Return the boundary of a face, entries ascending: leaving out a larger vertex gives a smaller mask."""
+def _boundary(mask: int, below: Mapping[int, int]) -> Entries:
+    """Return the boundary of a face, entries ascending: leaving out a smaller vertex gives a larger mask."""
     terms = []
     rest = mask
+    sign = 1
     while rest:
-        bit = 1 << (rest.bit_length() - 1)
+        bit = rest & -rest
         terms.append((below[mask ^ bit], sign))
         sign = -sign
         rest ^= bit
+    terms.reverse()
     return tuple(terms)
 
 
@@ -96,15 +97,15 @@ def block_classes(product: PolyhedralProduct, top: int | None = None) -> Iterato
 
     Notes
     -----
-    The vertices are decided one after the other; sets that leave the same complex on the vertices kept and undecided are
-    merged on the way, so the cost follows the number of different complexes and not the 2^m sets. A level with more
+    The vertices are decided one after the other; sets that leave the same complex on the vertices kept and undecided
+    are merged on the way, so the cost follows the number of different complexes and not the 2^m sets. A level with more
     than `BATCH` faces is cut into runs, finished one after the other, which bounds the memory.
     """
     m = product.complex.vertex_count
     masks = product.complex.face_masks()
     if top is not None:
-        masks = tuple(mask for mask in masks if mask.bit_count() <= top)
-    pending: list[tuple[int, _States]] = [(0, {(0, masks): ("", Counter({0: 1}))})]
+        masks = _skeleton(masks, top)
+    pending: list[tuple[int, _States]] = [(0, {(0, masks): ("", {0: 1})})]
     while pending:
         vertex, states = pending.pop()
         if vertex < m:
@@ -112,27 +113,33 @@ def block_classes(product: PolyhedralProduct, top: int | None = None) -> Iterato
             pending += [(vertex + 1, run) for run in reversed(_runs(level))]
             continue
         for (kept, faces), (name, shifts) in states.items():
-            if top is not None:
-                faces = tuple(mask for mask in faces if mask.bit_count() <= top - min(shifts))
-            yield Block(name, faces, kept, shifts)
+            yield Block(name, faces if top is None else _skeleton(faces, top - min(shifts)), kept, shifts)
+
+
+def _skeleton(faces: _Masks, most: int) -> _Masks:
+    """Return the faces of at most so many vertices."""
+    return tuple(mask for mask in faces if mask.bit_count() <= most)
 
 
 def _decide(states: _States, shift: int, top: int | None) -> _States:
     """Return the states after one more vertex has been left out of I, or taken in with this shift."""
     level: _States = {}
-
-    def merge(state: tuple[int, _Masks], name: str, shifts: Counter[int]) -> None:
-        if state in level:
-            level[state][1].update(shifts)
-        else:
-            level[state] = (name, Counter(shifts))
-
     for (kept, faces), (name, shifts) in states.items():
-        merge((kept, _without(faces, kept)), name + "0", shifts)
-        shifted = Counter({old + shift: n for old, n in shifts.items() if top is None or old + shift < top})
+        _merge(level, (kept, _without(faces, kept)), name + "0", shifts)
+        shifted = {old + shift: n for old, n in shifts.items() if top is None or old + shift < top}
         if shifted:
-            merge((kept + 1, faces), name + "1", shifted)
+            _merge(level, (kept + 1, faces), name + "1", shifted)
     return level
+
+
+def _merge(level: _States, state: tuple[int, _Masks], name: str, shifts: dict[int, int]) -> None:
+    """Add the sets of a state to a level; the first name stays."""
+    if state not in level:
+        level[state] = (name, dict(shifts))
+        return
+    known = level[state][1]
+    for shift, number in shifts.items():
+        known[shift] = known.get(shift, 0) + number
 
 
 def _without(faces: _Masks, place: int) -> _Masks:

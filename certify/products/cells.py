@@ -27,8 +27,8 @@ def cell_complex(space: PolyhedralProduct, top: int | None = None) -> BasedCompl
 
     Notes
     -----
-    Cells are tuples with a cell of X_i for each vertex i, ordered lexicographically in each degree; those vertices whose
-    cell is outside A_i form a face of K. The boundary is the Leibniz rule with sign
+    Cells are tuples with a cell of X_i for each vertex i, ordered lexicographically in each degree; those vertices
+    whose cell is outside A_i form a face of K. The boundary is the Leibniz rule with sign
     (-1)^(degree of the factors before). The number of cells is Σ_σ 2^(m - |σ|).
     """
     degrees: dict[int, list[_Cell]] = {0: []}

@@ -105,8 +105,9 @@ def deletion(k: SimplicialComplex, labels: Iterable[Label]) -> SimplicialComplex
 
     Notes
     -----
-    It has the same vertices as the link of these vertices, which lies inside it. For a vertex v, `k` is the
-    union of the star and the deletion of v, and their intersection is the link of v.
+    When the vertices form a face, their link has the same vertices as the deletion and lies inside it. For a
+    single vertex v that is no ghost, `k` is the union of the star and the deletion of v, and their
+    intersection is the link of v.
 
     Examples
     --------

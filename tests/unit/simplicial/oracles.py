@@ -3,7 +3,6 @@
 from __future__ import annotations
 
 from collections.abc import Iterable
-from itertools import combinations
 
 from flint import fmpz_mat
 from sympy.combinatorics.fp_groups import FpGroup

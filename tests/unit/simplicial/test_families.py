@@ -51,7 +51,7 @@ def test_the_boundary_of_a_point_is_a_ghost() -> None:
 
 @pytest.mark.parametrize(("m", "dim"), [(m, dim) for m in range(6) for dim in range(-1, m)])
 def test_a_skeleton_of_a_simplex_is_a_wedge_of_spheres(m: int, dim: int) -> None:
-    """It has C(m - 1, dim + 1) spheres (A. Björner, Topological methods, Handbook of Combinatorics 1995, from memory)."""
+    """It has C(m - 1, dim + 1) spheres: it is shellable, and its reduced Euler characteristic counts them."""
     k = simplex_skeleton(m, dim)
     assert k.f_vector() == tuple(comb(m, i) for i in range(dim + 2))
     count = comb(m - 1, dim + 1) if m else 1
@@ -186,4 +186,4 @@ def test_an_unknown_family_is_answered_with_the_known_ones() -> None:
 
 def test_a_parameter_may_even_be_called_name() -> None:
     with pytest.raises(BadInput, match="found the argument name"):
-        build("torus", **{"name": 1})
+        build("torus", name=1)

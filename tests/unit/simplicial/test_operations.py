@@ -182,6 +182,6 @@ def test_the_full_simplex_has_no_alexander_dual(k: SimplicialComplex) -> None:
 
 
 def test_the_projective_plane_is_its_own_alexander_dual() -> None:
-    """Of each ten-element set of triangles and its complements: exactly one of two complementary triangles is a face."""
+    """All 15 edges are faces, and of two complementary triangles exactly one is."""
     plane = build("projective-plane")
     assert alexander_dual(plane) == plane

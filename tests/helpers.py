@@ -1,0 +1,188 @@
+"""What many tests need: a certificate that the verifier accepted, and the algebra of graded groups around it."""
+
+from __future__ import annotations
+
+import json
+from argparse import Namespace
+from collections import Counter
+from collections.abc import Iterable, Mapping, Sequence
+from functools import cache
+from importlib.util import find_spec, module_from_spec, spec_from_file_location
+from math import gcd
+from pathlib import Path
+from tempfile import TemporaryDirectory
+from types import ModuleType
+from typing import Any
+
+from certify.certificate import Spool
+from certify.claims import HomologyClaim, prove
+from certify.claims.homology import Route
+from certify.exact import AbelianGroup
+from certify.products import DiscPair, PolyhedralProduct
+from certify.simplicial import SimplicialComplex
+
+__all__ = [
+    "Homology",
+    "accepted_homology",
+    "alternating_sum",
+    "blocks_apart",
+    "certificate_of",
+    "certified_homology",
+    "cohomology",
+    "disc_product",
+    "examined",
+    "graded",
+    "kunneth",
+    "limits",
+    "verifier",
+]
+
+Homology = dict[int, AbelianGroup]
+"""The groups that are not zero, by degree."""
+
+
+# -- certificates -------------------------------------------------------------------------------
+
+
+@cache
+def verifier() -> ModuleType:
+    """Return the verifier, loaded from its file as a referee would run it: under no name of the package."""
+    beside = find_spec("certify.verifier")
+    assert beside is not None
+    assert beside.origin is not None
+    spec = spec_from_file_location("verifier_of_the_tests", beside.origin)
+    assert spec is not None
+    assert spec.loader is not None
+    module = module_from_spec(spec)
+    spec.loader.exec_module(module)
+    return module
+
+
+def limits() -> Namespace:
+    """Return limits that no test reaches by accident."""
+    return Namespace(max_bytes=1 << 30, max_cells=50_000_000, max_bits=100_000, max_seconds=3600.0)
+
+
+def examined(path: Path) -> dict[str, Any]:
+    """Return the report of the verifier on a file."""
+    report: dict[str, Any] = verifier().examine(str(path), limits())
+    return report
+
+
+def disc_product(k: SimplicialComplex, n: int | Sequence[int]) -> PolyhedralProduct:
+    """Return the product over `k` of the pairs (Dⁿ, Sⁿ⁻¹): one n for all vertices, or one for each."""
+    sizes = [n] * k.vertex_count if isinstance(n, int) else n
+    return PolyhedralProduct(k, tuple(DiscPair(size) for size in sizes))
+
+
+def certificate_of(claim: HomologyClaim, jobs: int = 1) -> bytes:
+    """Return the bytes of the certificate of a claim."""
+    with TemporaryDirectory() as folder, Spool() as spool:
+        path = Path(folder) / "claim.cert.jsonl"
+        prove(claim, spool, jobs=jobs).write(path, {"claim": "claim"})
+        return path.read_bytes()
+
+
+def certified_homology(
+    space: PolyhedralProduct, degrees: Sequence[int] | None = None, *, route: Route = "blocks"
+) -> Homology:
+    """Prove, write, let the verifier check the file, and return the groups that the accepted statement holds."""
+    claim = HomologyClaim(space, degrees=None if degrees is None else tuple(degrees), route=route)
+    return accepted_homology(certificate_of(claim), space, degrees)
+
+
+def accepted_homology(certificate: bytes, space: PolyhedralProduct, degrees: Sequence[int] | None = None) -> Homology:
+    """Return the groups of a certificate, after the verifier has accepted it and its statement is that of the space.
+
+    The statement is read from the file and compared with the space here, so that neither a prover that writes down
+    another space nor one that keeps other groups in memory than in the file goes unnoticed.
+    """
+    with TemporaryDirectory() as folder:
+        path = Path(folder) / "claim.cert.jsonl"
+        path.write_bytes(certificate)
+        report = examined(path)
+    assert report["verdict"] == "accepted", report
+    statement = json.loads(certificate.splitlines()[0])["statement"]
+    groups = {degree: AbelianGroup.of(int(rank), map(int, torsion)) for degree, rank, torsion in statement["groups"]}
+    k = space.complex
+    assert statement == {
+        "degrees": None if degrees is None else sorted(set(degrees)),
+        "facets": sorted([vertex + 1 for vertex in facet] for facet in k.facets),
+        "groups": statement["groups"],
+        "kind": "homology",
+        "pairs": [f"(D{pair.n}, S{pair.n - 1})" for pair in space.pairs],
+        "vertices": len(k.labels),
+    }
+    return groups
+
+
+def blocks_apart(k: SimplicialComplex) -> dict[int, Homology]:
+    """Return the reduced homology of all full subcomplexes K_I, by the mask of I, as one certified product gives it.
+
+    With (Dⁿ, Sⁿ⁻¹), n - 1 = (m + 1) 2^i, at vertex i, the block of I lies in degrees from (m + 1) I to (m + 1) I + m,
+    so that no two blocks share a degree. Its degree k is the reduced homology in degree k - 1.
+    """
+    width = k.vertex_count + 1
+    space = disc_product(k, [width * 2**i + 1 for i in range(k.vertex_count)])
+    apart: dict[int, Homology] = {mask: {} for mask in range(2**k.vertex_count)}
+    for degree, group in certified_homology(space).items():
+        apart[degree // width][degree % width - 1] = group
+    return apart
+
+
+# -- graded groups ------------------------------------------------------------------------------
+
+
+def graded(values: Mapping[str, str | int] | Mapping[int, str | int]) -> Homology:
+    """Return groups that are given as texts, or as ranks of free groups; the degrees may be texts as well."""
+    return {
+        int(degree): AbelianGroup.of(value) if isinstance(value, int) else AbelianGroup.parse(value)
+        for degree, value in values.items()
+    }
+
+
+def cohomology(homology: Homology) -> Homology:
+    """Return the integral cohomology of a space with this homology: Hᵏ ≅ free part of H_k plus torsion of H_(k-1).
+
+    Universal coefficients: A. Hatcher, Algebraic Topology, Cambridge 2002, corollary 3.3 (from memory).
+    """
+    groups: Homology = {}
+    for degree, group in homology.items():
+        groups[degree] = groups.get(degree, AbelianGroup()) + AbelianGroup.of(group.rank)
+        groups[degree + 1] = groups.get(degree + 1, AbelianGroup()) + AbelianGroup.of(0, group.torsion)
+    return {degree: group for degree, group in groups.items() if group}
+
+
+def kunneth(left: Homology, right: Homology) -> Homology:
+    """Return the homology of a product of spaces with these groups.
+
+    H_n is the sum of H_i ⊗ H_j over i + j = n and of Tor(H_i, H_j) over i + j = n - 1: A. Hatcher, Algebraic Topology,
+    Cambridge 2002, theorem 3B.6 (from memory).
+    """
+    groups: Homology = {}
+    for i, a in left.items():
+        for j, b in right.items():
+            for above, torsion in ((0, False), (1, True)):
+                degree = i + j + above
+                groups[degree] = groups.get(degree, AbelianGroup()) + _pairwise(a, b, torsion=torsion)
+    return {degree: group for degree, group in groups.items() if group}
+
+
+def _pairwise(a: AbelianGroup, b: AbelianGroup, *, torsion: bool) -> AbelianGroup:
+    """Return Tor(a, b), or a ⊗ b: on cyclic groups both are ℤ/gcd, with ℤ as ℤ/0, but Tor vanishes on ℤ."""
+    orders: Counter[int] = Counter()
+    for order, times in _cyclic(a).items():
+        for other, often in _cyclic(b).items():
+            if not torsion or (order and other):
+                orders[gcd(order, other)] += times * often
+    rank = orders.pop(0, 0)
+    return AbelianGroup.of(rank, orders.elements())
+
+
+def _cyclic(group: AbelianGroup) -> Counter[int]:
+    return Counter({0: group.rank}) + Counter(group.torsion)
+
+
+def alternating_sum(terms: Iterable[tuple[int, int]]) -> int:
+    """Return Σ (-1)^degree · number over pairs of a degree and a number."""
+    return sum((-1) ** degree * number for degree, number in terms)
