@@ -55,32 +55,26 @@ class Failure(Exception):
         self.line = line
 
 
+def require(holds: bool, code: str, sentence: str) -> None:
+    """Check that something holds."""
+    if not holds:
+        raise Failure(code, sentence)
+
+
 class Budget:
     """What may still be spent on a file; a limit that is reached makes it undecided, never accepted."""
 
     def __init__(self, limits: argparse.Namespace) -> None:
-        self.max_bytes: int = limits.max_bytes
-        self.max_cells: int = limits.max_cells
-        self.max_bits: int = limits.max_bits
-        self.max_seconds: float = limits.max_seconds
-        self.bytes = self.max_bytes
-        self.cells = self.max_cells
-        self.deadline = time.monotonic() + self.max_seconds
+        self.limits = {"bytes": limits.max_bytes, "cells": limits.max_cells, "bits": limits.max_bits}
+        self.left = dict(self.limits)
+        self.deadline = time.monotonic() + limits.max_seconds
 
-    def spend_cells(self, number: int) -> None:
-        self.cells -= number
-        if self.cells < 0:
-            raise Failure("limit", f"more than {self.max_cells} cells to rebuild; raise --max-cells")
-        self.look_at_clock()
-
-    def spend_bytes(self, number: int) -> None:
-        self.bytes -= number
-        if self.bytes < 0:
-            raise Failure("limit", f"more than {self.max_bytes} bytes; raise --max-bytes")
+    def spend(self, what: str, number: int) -> None:
+        self.left[what] -= number
+        require(self.left[what] >= 0, "limit", f"more than {self.limits[what]} {what} are needed; raise --max-{what}")
 
     def look_at_clock(self) -> None:
-        if time.monotonic() > self.deadline:
-            raise Failure("limit", f"not done after {self.max_seconds:g} seconds; raise --max-seconds")
+        require(time.monotonic() <= self.deadline, "limit", "not done within the time allowed; raise --max-seconds")
 
 
 # ---- the file: lines, canonical JSON, integers ----------------------------------------------------------------------
@@ -91,7 +85,7 @@ def plain_bytes(path: str, budget: Budget) -> Iterator[bytes]:
     with open(path, "rb") as file:
         pieces = iter(lambda: file.read(CHUNK), b"")
         for data in inflated(pieces) if path.endswith(".gz") else pieces:
-            budget.spend_bytes(len(data))
+            budget.spend("bytes", len(data))
             yield data
 
 
@@ -101,15 +95,13 @@ def inflated(pieces: Iterable[bytes]) -> Iterator[bytes]:
     try:
         for piece in pieces:
             rest = piece
-            while rest or inflate.unconsumed_tail:
-                if inflate.eof:
-                    raise Failure("gzip", "bytes follow the first gzip member")
+            while rest:
+                require(not inflate.eof, "gzip", "bytes follow the first gzip member")
                 yield inflate.decompress(rest, CHUNK)
                 rest = inflate.unconsumed_tail or inflate.unused_data
-        if not inflate.eof:
-            raise Failure("gzip", "the gzip stream ends too early")
     except zlib.error as error:
         raise Failure("gzip", "the file is not a gzip stream") from error
+    require(inflate.eof, "gzip", "the gzip stream ends too early")
 
 
 class Lines:
@@ -132,8 +124,7 @@ class Lines:
             start = len(self.pending)
             piece = next(self.pieces, None)
             if piece is None:
-                if self.pending:
-                    raise Failure("truncated", "the last line has no line feed")
+                require(not self.pending, "truncated", "the last line has no line feed")
                 return None
             self.pending += piece
         self.line = bytes(self.pending[: end + 1])
@@ -142,8 +133,7 @@ class Lines:
 
     def next(self) -> object:
         """Return the value of the next line."""
-        if self.raw() is None:
-            raise Failure("truncated", "the file ends without its end record")
+        require(self.raw() is not None, "truncated", "the file ends without its end record")
         self.budget.look_at_clock()
         return value_of(self.line)
 
@@ -168,8 +158,7 @@ def value_of(line: bytes) -> object:
         raise Failure("encoding", "the line is not UTF-8") from error
     except ValueError as error:
         raise Failure("json", "the line is not JSON") from error
-    if spelled != line:
-        raise Failure("spelling", "the line is not in canonical form (sorted unique keys, no spaces, shortest numbers)")
+    require(spelled == line, "spelling", "the line is not canonical (sorted unique keys, no spaces, plain integers)")
     return value
 
 
@@ -178,11 +167,9 @@ def record(value: object, required: Sequence[str], optional: Sequence[str] = ())
     if type(value) is not dict:
         raise Failure("shape", "an object is expected")
     for key in required:
-        if key not in value:
-            raise Failure("missing-key", f"the key {key!r} is missing")
+        require(key in value, "missing-key", f"the key {key!r} is missing")
     for key in value:
-        if key not in required and key not in optional:
-            raise Failure("unknown-key", f"the key {key[:40]!r} is unknown here")
+        require(key in required or key in optional, "unknown-key", f"the key {key[:40]!r} is unknown here")
     return value
 
 
@@ -196,26 +183,23 @@ def sequence(value: object) -> list[object]:
 def integer(value: object, budget: Budget) -> int:
     """Return an integer; beyond ±(2^53 - 1) it is spelled as a decimal string."""
     if type(value) is int:
-        if -LARGEST <= value <= LARGEST:
-            return value
-        raise Failure("number", "an integer beyond ±(2^53 - 1) must be a decimal string")
+        require(-LARGEST <= value <= LARGEST, "number", "an integer beyond ±(2^53 - 1) must be a decimal string")
+        return value
     if type(value) is not str or not re.fullmatch(r"-?[1-9][0-9]*", value, re.ASCII):
         raise Failure("number", "an integer is expected")
-    if len(value) > budget.max_bits * 0.30103 + 2:
-        raise Failure("limit", f"an integer of more than {budget.max_bits} bits; raise --max-bits")
-    number = int(value)
-    if -LARGEST <= number <= LARGEST:
-        raise Failure("number", "an integer within ±(2^53 - 1) must be a JSON number")
-    return number
+    most = budget.limits["bits"]
+    require(len(value) <= most * 0.30103 + 2, "limit", f"an integer of more than {most} bits; raise --max-bits")
+    require(abs(int(value)) > LARGEST, "number", "an integer within ±(2^53 - 1) must be a JSON number")
+    return int(value)
 
 
 def numbers(value: object, start: int, stop: int) -> list[int]:
     """Return a list of strictly ascending integers from `start` to below `stop`."""
     found = [number for number in sequence(value) if type(number) is int]
-    if len(found) != len(sequence(value)) or any(map(ge, found, found[1:])):
-        raise Failure("index", "integers in ascending order are expected, each once")
-    if found and not start <= found[0] <= found[-1] < stop:
-        raise Failure("index", f"integers from {start} to {stop - 1} are expected")
+    ascending = len(found) == len(sequence(value)) and not any(map(ge, found, found[1:]))
+    require(ascending, "index", "integers in ascending order are expected, each once")
+    if found:
+        require(start <= found[0] and found[-1] < stop, "index", f"integers from {start} to {stop - 1} are expected")
     return found
 
 
@@ -232,44 +216,39 @@ class Statement:
         self.vertices = integer(value["vertices"], budget)
         self.facets = [numbers(facet, 1, self.vertices + 1) for facet in sequence(value["facets"])]
         self.discs = [disc(name) for name in sequence(value["pairs"])]
-        if len(self.discs) != self.vertices:
-            raise Failure("statement", "one pair for each vertex is expected")
+        require(len(self.discs) == self.vertices, "statement", "one pair for each vertex is expected")
         self.degrees = None if value["degrees"] is None else numbers(value["degrees"], 0, LARGEST)
-        if self.degrees == []:
-            raise Failure("statement", "at least one degree is expected")
+        require(self.degrees != [], "statement", "at least one degree is expected")
         self.top = self.degrees[-1] + 1 if self.degrees else None
         self.check_facets()
         self.groups = self.read_groups(value["groups"], budget)
 
     def check_facets(self) -> None:
         """Require the facets to be in order, and none to lie in another."""
-        if not self.facets:
-            raise Failure("statement", "a complex has at least one facet, and the complex {∅} has the empty one")
-        if any(map(ge, self.facets, self.facets[1:])):
-            raise Failure("statement", "the facets must stand in ascending order, each once")
+        require(bool(self.facets), "statement", "a complex has a facet; the complex {∅} has the empty one")
+        require(not any(map(ge, self.facets, self.facets[1:])), "statement", "the facets must ascend, each once")
         holders = dict.fromkeys(range(1, self.vertices + 1), 0)
         for number, facet in enumerate(self.facets):
             for vertex in facet:
                 holders[vertex] |= 1 << number
         for number, facet in enumerate(self.facets):
-            if reduce(and_, (holders[vertex] for vertex in facet), (1 << len(self.facets)) - 1) != 1 << number:
-                raise Failure("statement", "a facet lies in another one")
+            common = reduce(and_, (holders[vertex] for vertex in facet), (1 << len(self.facets)) - 1)
+            require(common == 1 << number, "statement", "a facet lies in another one")
 
     def read_groups(self, value: object, budget: Budget) -> Groups:
         """Return the groups that are stated."""
         groups: Groups = {}
         last = -1
         for entry in map(sequence, sequence(value)):
-            if len(entry) != 3:
-                raise Failure("shape", "a group is a list of degree, rank and torsion")
+            require(len(entry) == 3, "shape", "a group is a list of degree, rank and torsion")
             degree, rank = integer(entry[0], budget), integer(entry[1], budget)
             torsion = tuple(integer(order, budget) for order in sequence(entry[2]))
-            if degree <= last or rank < 0 or not (rank or torsion):
-                raise Failure("statement", "groups stand in ascending degrees, with ranks from 0 and no zero group")
-            if any(order < 2 for order in torsion) or any(b % a for a, b in pairwise(torsion)):
-                raise Failure("statement", "torsion is a list of invariant factors above 1, each dividing the next")
-            if self.degrees is not None and degree not in self.degrees:
-                raise Failure("statement", "a group is stated in a degree that the claim leaves out")
+            require(degree > last, "statement", "groups stand in ascending degrees")
+            require(rank >= 0 and (rank > 0 or bool(torsion)), "statement", "a rank is negative, or a group is zero")
+            factors = all(order > 1 for order in torsion) and not any(b % a for a, b in pairwise(torsion))
+            require(factors, "statement", "torsion is a list of invariant factors above 1, each dividing the next")
+            spoken_of = self.degrees is None or degree in self.degrees
+            require(spoken_of, "statement", "a group is stated in a degree that the claim leaves out")
             groups[degree] = (rank, torsion)
             last = degree
         return groups
@@ -333,7 +312,7 @@ def face_masks(statement: Statement, budget: Budget) -> Faces:
         for size in sizes:
             for face in combinations(facet, size):
                 masks[size].add(sum(1 << vertex - 1 for vertex in face))
-                budget.spend_cells(1)
+                budget.spend("cells", 1)
     return tuple(tuple(sorted(found)) for found in masks)
 
 
@@ -367,7 +346,7 @@ def block_classes(statement: Statement, budget: Budget) -> Iterator[tuple[str, F
         shift = statement.discs[vertex] - 1
         level: dict[tuple[int, Faces], tuple[str, dict[int, int]]] = {}
         for (kept, faces), (name, shifts) in states.items():
-            budget.spend_cells(sum(map(len, faces)))
+            budget.spend("cells", sum(map(len, faces)))
             moved = {s + shift: n for s, n in shifts.items() if statement.top is None or s + shift < statement.top}
             for state, word, counts in (
                 ((kept, without(faces, kept)), name + "0", shifts),
@@ -405,21 +384,7 @@ def is_cone(faces: Faces, vertices: int, most: int) -> bool:
     return False
 
 
-class Space:
-    """A based complex that was rebuilt from the statement: cells numbered from 0 in each degree, and d."""
-
-    sizes: list[int]
-
-    def leads(self, degree: int, cells: list[int]) -> list[int]:
-        """Return the last cell in d of each of these cells; d has ±1 there."""
-        raise NotImplementedError
-
-    def boundary(self, degree: int, vector: Vector) -> Vector:
-        """Return d of a vector of this degree."""
-        raise NotImplementedError
-
-
-class Simplices(Space):
+class Simplices:
     """The augmented oriented chain complex of a simplicial complex; degree k is spanned by the faces of k vertices."""
 
     def __init__(self, faces: Faces) -> None:
@@ -428,12 +393,12 @@ class Simplices(Space):
         self.sizes = [len(masks) for masks in faces]
 
     def leads(self, degree: int, cells: list[int]) -> list[int]:
-        """Leaving out the first vertex of a face gives the largest mask, with sign +."""
+        """Return the last cell in d of each of these cells, where d has ±1: the face without its first vertex."""
         masks, below = self.faces[degree], self.index[degree - 1]
         return [below[masks[cell] & masks[cell] - 1] for cell in cells]
 
     def boundary(self, degree: int, vector: Vector) -> Vector:
-        """The facets of a face with alternating signs, + where the first vertex is left out."""
+        """Return d of a vector: the facets of each face with alternating signs, + where the first vertex is left out."""
         masks = self.faces[degree]
         total: dict[int, int] = {}
         for cell, coefficient in vector:
@@ -447,7 +412,7 @@ class Simplices(Space):
         return sorted((below[mask], coefficient) for mask, coefficient in total.items() if coefficient)
 
 
-class Cells(Space):
+class Cells:
     """The cellular chain complex of the whole product (X, A)^K: cells are words, one letter for each vertex.
 
     Letters of (D^n, S^{n-1}): for n = 1 the points 0, 1 and the edge 2 with d 2 = 1 - 0; otherwise a point 0, a cell 1
@@ -466,7 +431,7 @@ class Cells(Space):
                 for letter, bit, more in letters
                 if support | bit in faces and (statement.top is None or degree + more <= statement.top)
             ]
-            budget.spend_cells(len(words))
+            budget.spend("cells", len(words))
         self.words: list[list[str]] = [[] for _ in range(max(degree for _, _, degree in words) + 1)]
         for word, _, degree in words:
             self.words[degree].append(word)
@@ -474,17 +439,16 @@ class Cells(Space):
         self.sizes = [len(words) for words in self.words]
 
     def leads(self, degree: int, cells: list[int]) -> list[int]:
-        """The last 2 becomes a 1."""
+        """Return the last cell in d of each of these cells, where d has ±1: the last 2 becomes a 1."""
         leads = []
         for cell in cells:
             start, two, rest = self.words[degree][cell].rpartition("2")
-            if not two:
-                raise Failure("boundary", f"cell {cell} of degree {degree} is no a of a pair, it is a cycle")
+            require(bool(two), "boundary", f"cell {cell} of degree {degree} is no a of a pair, it is a cycle")
             leads.append(self.index[degree - 1][f"{start}1{rest}"])
         return leads
 
     def boundary(self, degree: int, vector: Vector) -> Vector:
-        """The Leibniz rule, with the sign of the degrees of the letters before."""
+        """Return d of a vector, by the Leibniz rule with the sign of the degrees of the letters before."""
         total: dict[str, int] = {}
         for cell, coefficient in vector:
             word = self.words[degree][cell]
@@ -505,8 +469,7 @@ class Cells(Space):
 def vector(value: object, size: int, budget: Budget) -> Vector:
     """Return a sparse vector, read from the list of its cells and coefficients in turn, cells ascending."""
     flat = sequence(value)
-    if len(flat) % 2 or not flat:
-        raise Failure("vector", "a vector lists cells and coefficients in turn, at least one of each")
+    require(bool(flat) and not len(flat) % 2, "vector", "a vector lists cells and coefficients in turn")
     terms = []
     last = -1
     for cell, given in zip(flat[::2], flat[1::2], strict=True):
@@ -520,11 +483,10 @@ def vector(value: object, size: int, budget: Budget) -> Vector:
     return terms
 
 
-def homology(space: Space, basis: object, budget: Budget) -> list[tuple[int, list[int]]]:
+def homology(space: Simplices | Cells, basis: object, budget: Budget) -> list[tuple[int, list[int]]]:
     """Return (rank, orders of cyclic summands) of H_k for each degree k, proved by an adapted basis (Lemma A)."""
     entries = sequence(basis)
-    if len(entries) != len(space.sizes):
-        raise Failure("degrees", f"a basis in each of {len(space.sizes)} degrees is expected, {len(entries)} are given")
+    require(len(entries) == len(space.sizes), "degrees", f"a basis in each of {len(space.sizes)} degrees is expected")
     groups: list[tuple[int, list[int]]] = []
     matched_above: list[int] = []
     boundaries: list[Vector] = []
@@ -532,23 +494,20 @@ def homology(space: Space, basis: object, budget: Budget) -> list[tuple[int, lis
     for degree in reversed(range(len(space.sizes))):
         size = space.sizes[degree]
         entry = record(entries[degree], (), ("cycles", "groups", "matched", "order", "pairs"))
-        if not all(map(sequence, entry.values())):
-            raise Failure("shape", "an empty list is written by leaving out its key")
+        require(all(map(sequence, entry.values())), "shape", "an empty list is written by leaving out its key")
         matched = numbers(entry.get("matched", []), 0, size)
         pairs = [read_pair(sequence(pair), degree, space, budget) for pair in sequence(entry.get("pairs", []))]
-        if degree == 0 and (matched or pairs):
-            raise Failure("boundary", "degree 0 has a pair, but there is nothing below it")
+        require(degree > 0 or not (matched or pairs), "boundary", "degree 0 has a pair, but nothing is below it")
         cycles = [vector(cycle, size, budget) for cycle in sequence(entry.get("cycles", []))]
-        if degree and any(space.boundary(degree, cycle) for cycle in cycles):
-            raise Failure("cycle", f"a vector listed as a cycle in degree {degree} has a boundary")
+        closed = degree == 0 or not any(space.boundary(degree, cycle) for cycle in cycles)
+        require(closed, "cycle", f"a vector listed as a cycle in degree {degree} has a boundary")
         vectors = [a for a, _, _ in pairs] + cycles
         if "order" in entry:
             family: list[Vector] = [[(cell, 1)] for cell in matched] + vectors
             family += [space.boundary(degree + 1, [(cell, 1)]) for cell in matched_above] + boundaries
             check_staircase(size, family, entry, budget)
-        elif "groups" in entry:
-            raise Failure("order", "groups need an order")
         else:
+            require("groups" not in entry, "order", "groups need an order")
             leads = matched + (space.leads(degree + 1, matched_above) if matched_above else [])
             check_natural(size, leads, vectors + boundaries)
         groups.append((len(cycles), orders))
@@ -558,20 +517,18 @@ def homology(space: Space, basis: object, budget: Budget) -> list[tuple[int, lis
     return groups[::-1]
 
 
-def read_pair(value: list[object], degree: int, space: Space, budget: Budget) -> tuple[Vector, int, Vector]:
+def read_pair(value: list[object], degree: int, space: Simplices | Cells, budget: Budget) -> tuple[Vector, int, Vector]:
     """Return a, e, b with d a = e b; where e is 1 only a is written, and b is d a."""
-    if len(value) not in (1, 3):
-        raise Failure("shape", "a pair is [a], or [a, e, b]")
+    require(len(value) in (1, 3), "shape", "a pair is [a], or [a, e, b]")
     a = vector(value[0], space.sizes[degree], budget)
     image = space.boundary(degree, a) if degree else []
     if len(value) == 1:
         return a, 1, image
     e = integer(value[1], budget)
-    if e < 2:
-        raise Failure("torsion", "the e of a pair that lists its b is at least 2")
+    require(e > 1, "torsion", "the e of a pair that lists its b is at least 2")
     b = vector(value[2], space.sizes[degree - 1] if degree else 0, budget)
-    if image != [(cell, e * coefficient) for cell, coefficient in b]:
-        raise Failure("boundary", f"d a is not e b for a pair in degree {degree}")
+    multiple = [(cell, e * coefficient) for cell, coefficient in b]
+    require(image == multiple, "boundary", f"d a is not e b for a pair in degree {degree}")
     return a, e, b
 
 
@@ -580,30 +537,28 @@ def check_natural(size: int, leads: list[int], vectors: list[Vector]) -> None:
 
     `leads` are the largest cells of those vectors for which the coefficient is known to be ±1 by construction.
     """
-    if not all(terms and terms[-1][1] in (1, -1) for terms in vectors):
-        raise Failure("basis", "a vector is zero, or its coefficient on its largest cell is not ±1")
+    units = all(terms and terms[-1][1] in (1, -1) for terms in vectors)
+    require(units, "basis", "a vector is zero, or its coefficient on its largest cell is not ±1")
     found = leads + [terms[-1][0] for terms in vectors]
-    if len(found) != size or len(set(found)) != size:
-        raise Failure("basis", f"the vectors do not lead each of the {size} cells once")
+    each_once = len(found) == size == len(set(found))
+    require(each_once, "basis", f"the vectors do not lead each of the {size} cells once")
 
 
 def check_staircase(size: int, family: list[Vector], entry: dict[str, object], budget: Budget) -> None:
     """Require the family to be a basis of Z^size, in staircase form for the order and groups given (Lemma B)."""
     order = [cell for cell in sequence(entry["order"]) if type(cell) is int]
-    if len(order) != len(sequence(entry["order"])) or sorted(order) != list(range(size)):
-        raise Failure("order", "the order must list every cell once")
-    if len(family) != size or not all(family):
-        raise Failure("basis", f"{size} vectors other than zero are expected")
+    whole = len(order) == len(sequence(entry["order"])) and sorted(order) == list(range(size))
+    require(whole, "order", "the order must list every cell once")
+    require(len(family) == size and all(family), "basis", f"{size} vectors other than zero are expected")
     place = {cell: n for n, cell in enumerate(order)}
     group_of: dict[int, int] = {}
     members: list[tuple[list[int], list[dict[int, int]], object]] = []
     for value in sequence(entry.get("groups", [])):
         group = record(value, ("cells", "inverse"))
         cells = [cell for cell in sequence(group["cells"]) if type(cell) is int and cell in place]
-        if len(cells) < 2 or order[place[cells[0]] :][: len(cells)] != cells or cells != group["cells"]:
-            raise Failure("group", "a group has two cells or more, as they follow one another in the order")
-        if any(cell in group_of for cell in cells):
-            raise Failure("group", "a cell is in two groups")
+        run = len(cells) > 1 and cells == group["cells"] == order[place[cells[0]] :][: len(cells)]
+        require(run, "group", "a group has two cells or more, as they follow one another in the order")
+        require(not any(cell in group_of for cell in cells), "group", "a cell is in two groups")
         group_of.update(dict.fromkeys(cells, len(members)))
         members.append((cells, [], group["inverse"]))
     seen: set[int] = set()
@@ -611,9 +566,10 @@ def check_staircase(size: int, family: list[Vector], entry: dict[str, object], b
         cell, coefficient = min(terms, key=lambda term: place[term[0]])
         if cell in group_of:
             members[group_of[cell]][1].append(dict(terms))
-        elif cell in seen or coefficient not in (1, -1):
-            raise Failure("basis", f"cell {cell} leads two vectors, or one with a coefficient that is not ±1")
-        seen.add(cell)
+        else:
+            alone = cell not in seen and coefficient in (1, -1)
+            require(alone, "basis", f"cell {cell} leads two vectors, or one with a coefficient that is not ±1")
+            seen.add(cell)
     for cells, vectors, inverse in members:
         check_inverse(cells, vectors, sequence(inverse), budget)
 
@@ -621,41 +577,40 @@ def check_staircase(size: int, family: list[Vector], entry: dict[str, object], b
 def check_inverse(cells: list[int], vectors: list[dict[int, int]], inverse: list[object], budget: Budget) -> None:
     """Require the square matrix of a group (a row for each cell, a column for each vector) to have this inverse."""
     size = len(cells)
-    if len(vectors) != size or len(inverse) != size:
-        raise Failure("group", "a group has as many cells as vectors, and so many rows in its inverse")
+    require(len(vectors) == size == len(inverse), "group", f"{size} vectors and rows of an inverse are expected")
     for i, line in enumerate(inverse):
         row = [integer(entry, budget) for entry in sequence(line)]
-        if len(row) != size:
-            raise Failure("group", "the inverse of a group is a square matrix")
+        require(len(row) == size, "group", "the inverse of a group is a square matrix")
         budget.look_at_clock()
         for j, terms in enumerate(vectors):
-            if sum(entry * terms.get(cell, 0) for entry, cell in zip(row, cells, strict=True)) != (i == j):
-                raise Failure("group", "the matrix given as the inverse of a group is not its inverse")
+            entry = sum(factor * terms.get(cell, 0) for factor, cell in zip(row, cells, strict=True))
+            require(entry == (i == j), "group", "the matrix given as the inverse of a group is not its inverse")
 
 
 # ---- the claim -------------------------------------------------------------------------------------------------------
 
 
-class Total:
-    """The homology that has been proved so far, summed over the blocks."""
+Total = Counter[
+    tuple[int, int]
+]  # for each degree the number of summands: of Z under (degree, 0), of Z/e under (degree, e)
 
-    def __init__(self) -> None:
-        self.ranks: Counter[int] = Counter()
-        self.torsion: dict[int, Counter[int]] = {}
 
-    def add(self, groups: list[tuple[int, list[int]]], shift: int, times: int) -> None:
-        for degree, (rank, orders) in enumerate(groups):
-            self.ranks[degree + shift] += rank * times
-            for order in orders:
-                self.torsion.setdefault(degree + shift, Counter())[order] += times
+def add(total: Total, groups: list[tuple[int, list[int]]], shift: int, times: int) -> None:
+    """Add groups by degree to a total, shifted, so many times."""
+    for degree, (rank, orders) in enumerate(groups):
+        total[degree + shift, 0] += rank * times
+        for order in orders:
+            total[degree + shift, order] += times
 
-    def groups(self) -> Groups:
-        found: Groups = {}
-        for degree in self.ranks.keys() | self.torsion.keys():
-            torsion = invariant_factors(self.torsion.get(degree, Counter()))
-            if self.ranks[degree] or torsion:
-                found[degree] = (self.ranks[degree], torsion)
-        return found
+
+def groups_of(total: Total) -> Groups:
+    """Return the groups of a total in canonical form."""
+    found: Groups = {}
+    for degree in {degree for degree, _ in total}:
+        torsion = invariant_factors(Counter({e: n for (k, e), n in total.items() if k == degree and e}))
+        if total[degree, 0] or torsion:
+            found[degree] = (total[degree, 0], torsion)
+    return found
 
 
 def invariant_factors(orders: Counter[int]) -> tuple[int, ...]:
@@ -677,25 +632,24 @@ def invariant_factors(orders: Counter[int]) -> tuple[int, ...]:
 
 def prove_by_blocks(statement: Statement, lines: Lines, budget: Budget) -> Total:
     """Check one record for each class of blocks that is no cone, and return the total (stable splitting)."""
-    total = Total()
+    total: Total = Counter()
     for name, all_faces, vertices, shifts in block_classes(statement, budget):
         most = statement.vertices if statement.top is None else statement.top - min(shifts)
         faces = all_faces[: most + 1]
         if is_cone(faces, vertices, most):
             continue
         value = next_record(lines, ("basis", "block"))
-        if value["block"] != name:
-            raise Failure("block", f"the record of block {name} is expected here")
+        require(value["block"] == name, "block", f"the record of block {name} is expected here")
         groups = homology(Simplices(faces), value["basis"], budget)
         for shift, times in shifts.items():
-            total.add(groups, shift, times)
+            add(total, groups, shift, times)
     return total
 
 
 def prove_by_cells(statement: Statement, lines: Lines, budget: Budget) -> Total:
     """Check the one record of the whole product, and return the total."""
-    total = Total()
-    total.add(homology(Cells(statement, budget), next_record(lines, ("basis",))["basis"], budget), 0, 1)
+    total: Total = Counter()
+    add(total, homology(Cells(statement, budget), next_record(lines, ("basis",))["basis"], budget), 0, 1)
     return total
 
 
@@ -704,8 +658,8 @@ ROUTES = {"blocks": prove_by_blocks, "cells": prove_by_cells}
 
 def next_record(lines: Lines, keys: Sequence[str]) -> dict[str, object]:
     value = lines.next()
-    if type(value) is dict and "end" in value:
-        raise Failure("missing-record", "the end record stands where another record is needed")
+    ended = type(value) is dict and "end" in value
+    require(not ended, "missing-record", "the end record stands where another record is needed")
     return record(value, keys)
 
 
@@ -715,31 +669,26 @@ def read_header(lines: Lines) -> tuple[str, str, object]:
     if first is None or b'"format"' not in first:
         raise Failure("not-a-certificate", "the first line is no certificate header")
     value = value_of(first)
-    if type(value) is dict and value.get("format") != FORMAT:
-        raise Failure("unknown-format", f"format {str(value.get('format'))[:40]} is unknown here, {FORMAT} is known")
     header = record(value, ("about", "format", "route", "statement"))
-    if type(header["format"]) is not int:
-        raise Failure("number", "the format is an integer")
+    known = type(header["format"]) is int and header["format"] == FORMAT
+    require(known, "unknown-format", f"format {str(header['format'])[:40]} is unknown here, {FORMAT} is known")
     about = record(header["about"], ("claim",), ("labels", "source", "title"))
     texts = [about["claim"], about.get("source", ""), about.get("title", ""), header["route"]]
-    if not all(type(text) is str for text in texts + sequence(about.get("labels", []))):
-        raise Failure("shape", "the claim's name, source, title, labels and route are texts")
-    if not re.fullmatch(r"[A-Za-z0-9][A-Za-z0-9._-]{0,99}", str(about["claim"]), re.ASCII):
-        raise Failure("claim-name", "a claim's name has 1 to 100 letters, digits, dots, dashes and underscores")
-    if header["route"] not in ROUTES:
-        raise Failure("route", f"the route is {' or '.join(map(repr, ROUTES))}")
+    prose = all(type(text) is str for text in texts + sequence(about.get("labels", [])))
+    require(prose, "shape", "the claim's name, source, title, labels and route are texts")
+    named = re.fullmatch(r"[A-Za-z0-9][A-Za-z0-9._-]{0,99}", str(about["claim"]), re.ASCII) is not None
+    require(named, "claim-name", "a claim's name has 1 to 100 letters, digits, dots, dashes and underscores")
+    require(header["route"] in ROUTES, "route", f"the route is {' or '.join(map(repr, ROUTES))}")
     return str(about["claim"]), str(header["route"]), header["statement"]
 
 
 def check_end(lines: Lines) -> None:
     """Require the end record, with the right count and digest, and nothing behind it."""
     end = record(record(lines.next(), ("end",))["end"], ("records", "sha256"))
-    if type(end["records"]) is not int or end["records"] != lines.number - 2:
-        raise Failure("end", "the end record gives another number of records")
-    if end["sha256"] != lines.digest.hexdigest():
-        raise Failure("digest", "the end record gives another digest of the lines before it")
-    if lines.raw() is not None:
-        raise Failure("trailing", "something follows the end record")
+    counted = type(end["records"]) is int and end["records"] == lines.number - 2
+    require(counted, "end", "the end record gives another number of records")
+    require(end["sha256"] == lines.digest.hexdigest(), "digest", "the digest of the lines before the end is another")
+    require(lines.raw() is None, "trailing", "something follows the end record")
 
 
 def compare(statement: Statement, found: Groups) -> None:
@@ -766,7 +715,7 @@ def examine(path: str, limits: argparse.Namespace) -> dict[str, str | None]:
         statement = Statement(raw, budget)
         total = ROUTES[route](statement, lines, budget)
         check_end(lines)
-        compare(statement, total.groups())
+        compare(statement, groups_of(total))
         text, fingerprint = statement.text(), hashlib.sha256(canonical(raw)).hexdigest()
         report |= {"statement": text, "fingerprint": fingerprint, "sentence": "every record was checked"}
         report |= {"verdict": "accepted", "reason": "proved"}
