@@ -46,14 +46,22 @@ class NamedClaim:
         The name that the sheet gives to K.
     claim : HomologyClaim
     about : mapping
-        What the certificate says about the claim besides its statement: its name under ``claim``, ``title`` and
-        ``source`` if the sheet has them, and ``labels`` of the vertices where these are not 1, 2, ….
+        What the certificate says besides the statement: the claim's name under ``claim``, ``title`` and ``source`` if
+        the sheet has them, and ``labels`` of the vertices where these are not 1, 2, ….
     """
 
     id: str
     complex: str
     claim: HomologyClaim
     about: Mapping[str, str | list[str]]
+
+    @classmethod
+    def of(cls, id: str, complex: str, claim: HomologyClaim, prose: Mapping[str, str]) -> NamedClaim:
+        """Return a claim with what its certificate says about it; `prose` may hold ``title`` and ``source``."""
+        labels = claim.product.complex.labels
+        plain = labels == tuple(range(1, len(labels) + 1))
+        named = {} if plain else {"labels": [str(label) for label in labels]}
+        return cls(id, complex, claim, {"claim": id, **prose, **named})
 
 
 @dataclass(frozen=True, slots=True)
@@ -193,13 +201,8 @@ def _claim(table: Table, complexes: Mapping[str, SimplicialComplex]) -> NamedCla
     if kind not in KINDS:
         raise table.fault("kind", expected=f"one of the claim kinds {', '.join(KINDS)}", found=shown(kind))
     table.only((*_COMMON, *KINDS[kind].keys))
-    about: dict[str, str | list[str]] = {"claim": name}
-    about |= {key: table.text(key) for key in ("title", "source") if key in table.values}
-    claim = KINDS[kind].read(table, complexes)
-    labels = claim.product.complex.labels
-    if labels != tuple(range(1, len(labels) + 1)):
-        about["labels"] = [str(label) for label in labels]
-    return NamedClaim(name, table.text("complex"), claim, about)
+    prose = {key: table.text(key) for key in ("title", "source") if key in table.values}
+    return NamedClaim.of(name, table.text("complex"), KINDS[kind].read(table, complexes), prose)
 
 
 # -- lines --------------------------------------------------------------------------------------

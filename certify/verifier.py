@@ -19,6 +19,7 @@ from __future__ import annotations
 
 import argparse
 import hashlib
+import io
 import json
 import os
 import re
@@ -26,10 +27,10 @@ import sys
 import time
 import zlib
 from collections import Counter
-from collections.abc import Iterable, Iterator, Sequence
+from collections.abc import Iterator, Sequence
 from functools import reduce
 from itertools import combinations, pairwise
-from math import gcd
+from math import comb, gcd, lcm
 from operator import and_, ge
 
 FORMAT = 1
@@ -41,18 +42,14 @@ UNDECIDED = {"limit", "unknown-format", "unknown-kind", "unknown-pair", "not-a-c
 
 
 Vector = list[tuple[int, int]]  # cells with coefficients, cells ascending
-Groups = dict[int, tuple[int, tuple[int, ...]]]  # degree: rank and invariant factors, zero groups left out
 Faces = tuple[tuple[int, ...], ...]  # for each number of vertices the faces as ascending bit masks
+States = dict[tuple[int, Faces], tuple[str, Counter[int]]]  # |I| so far, and K on I and the undecided: name, shifts
+Group = Counter[int]  # how often Z (under 0) and Z/e (under e) are summands
+Total = dict[int, Group]  # a group for each degree; a degree that is missing has the group 0
 
 
 class Failure(Exception):
-    """The one way in which a check fails: a stable code, a sentence, and the line of the file where known."""
-
-    def __init__(self, code: str, sentence: str, line: int | None = None) -> None:
-        super().__init__(sentence)
-        self.code = code
-        self.sentence = sentence
-        self.line = line
+    """The one way in which a check fails, with a stable code and a sentence."""
 
 
 def require(holds: bool, code: str, sentence: str) -> None:
@@ -72,69 +69,58 @@ class Budget:
     def spend(self, what: str, number: int) -> None:
         self.left[what] -= number
         require(self.left[what] >= 0, "limit", f"more than {self.limits[what]} {what} are needed; raise --max-{what}")
-
-    def look_at_clock(self) -> None:
         require(time.monotonic() <= self.deadline, "limit", "not done within the time allowed; raise --max-seconds")
 
 
 # ---- the file: lines, canonical JSON, integers ----------------------------------------------------------------------
 
 
-def plain_bytes(path: str, budget: Budget) -> Iterator[bytes]:
-    """Yield the bytes of a file, decompressed if its name ends in .gz, in pieces of bounded size."""
-    with open(path, "rb") as file:
-        pieces = iter(lambda: file.read(CHUNK), b"")
-        for data in inflated(pieces) if path.endswith(".gz") else pieces:
-            budget.spend("bytes", len(data))
-            yield data
+class Inflated(io.RawIOBase):
+    """The content of a file that holds one gzip member and nothing else."""
 
+    def __init__(self, file: io.BufferedReader) -> None:
+        self.file = file
+        self.inflate = zlib.decompressobj(31)
 
-def inflated(pieces: Iterable[bytes]) -> Iterator[bytes]:
-    """Yield the content of the one gzip member in these bytes, at most CHUNK bytes at a time."""
-    inflate = zlib.decompressobj(31)
-    try:
-        for piece in pieces:
-            rest = piece
-            while rest:
-                require(not inflate.eof, "gzip", "bytes follow the first gzip member")
-                yield inflate.decompress(rest, CHUNK)
-                rest = inflate.unconsumed_tail or inflate.unused_data
-    except zlib.error as error:
-        raise Failure("gzip", "the file is not a gzip stream") from error
-    require(inflate.eof, "gzip", "the gzip stream ends too early")
+    def readable(self) -> bool:
+        return True
+
+    def readinto(self, buffer: memoryview, /) -> int:  # type: ignore[override]
+        data = b""
+        while not data:
+            piece = self.inflate.unconsumed_tail or self.inflate.unused_data or self.file.read(CHUNK)
+            require(not (piece and self.inflate.eof), "gzip", "bytes follow the first gzip member")
+            if not piece:
+                break
+            data = self.inflate.decompress(piece, len(buffer))
+        require(bool(data) or self.inflate.eof, "gzip", "the gzip stream ends too early")
+        buffer[: len(data)] = data
+        return len(data)
 
 
 class Lines:
     """The lines of a certificate, one by one, with a running digest of all lines before the one at hand."""
 
     def __init__(self, path: str, budget: Budget) -> None:
-        self.pieces = plain_bytes(path, budget)
-        self.pending = bytearray()
-        self.number = 0
-        self.digest = hashlib.sha256()
-        self.line = b""
+        file = open(path, "rb")  # noqa: SIM115 - it ends with the process
+        self.file = io.BufferedReader(Inflated(file), CHUNK) if path.endswith(".gz") else file
         self.budget = budget
+        self.number = 0
+        self.line = b""
+        self.digest = hashlib.sha256()
 
-    def raw(self) -> bytes | None:
-        """Return the next line with its line feed, or None at the end of the file."""
+    def raw(self) -> bytes:
+        """Return the next line with its line feed, or nothing at the end of the file."""
         self.digest.update(self.line)
         self.number += 1
-        start = 0
-        while (end := self.pending.find(b"\n", start)) < 0:
-            start = len(self.pending)
-            piece = next(self.pieces, None)
-            if piece is None:
-                require(not self.pending, "truncated", "the last line has no line feed")
-                return None
-            self.pending += piece
-        self.line = bytes(self.pending[: end + 1])
-        del self.pending[: end + 1]
+        self.line = self.file.readline(self.budget.left["bytes"] + 1)
+        self.budget.spend("bytes", len(self.line))
+        require(self.line[-1:] in (b"", b"\n"), "truncated", "the last line has no line feed")
         return self.line
 
     def next(self) -> object:
         """Return the value of the next line."""
-        require(self.raw() is not None, "truncated", "the file ends without its end record")
-        self.budget.look_at_clock()
+        require(self.raw() != b"", "truncated", "the file ends without its end record")
         return value_of(self.line)
 
 
@@ -152,12 +138,8 @@ def value_of(line: bytes) -> object:
     try:
         value = json.loads(line.decode("utf-8"), parse_float=refuse_float, parse_constant=refuse_float)
         spelled = canonical(value) + b"\n"
-    except RecursionError as error:
-        raise Failure("nesting", "the line is nested too deeply") from error
-    except UnicodeError as error:
-        raise Failure("encoding", "the line is not UTF-8") from error
-    except ValueError as error:
-        raise Failure("json", "the line is not JSON") from error
+    except (RecursionError, ValueError) as error:
+        raise Failure("json", "the line is not JSON in UTF-8, or nested too deeply") from error
     require(spelled == line, "spelling", "the line is not canonical (sorted unique keys, no spaces, plain integers)")
     return value
 
@@ -166,10 +148,8 @@ def record(value: object, required: Sequence[str], optional: Sequence[str] = ())
     """Return a JSON object after checking its keys."""
     if type(value) is not dict:
         raise Failure("shape", "an object is expected")
-    for key in required:
-        require(key in value, "missing-key", f"the key {key!r} is missing")
-    for key in value:
-        require(key in required or key in optional, "unknown-key", f"the key {key[:40]!r} is unknown here")
+    if not value.keys() >= set(required) or not value.keys() <= {*required, *optional}:
+        raise Failure("keys", f"the keys {', '.join([*required, *optional])} are expected, not {', '.join(value)[:60]}")
     return value
 
 
@@ -187,8 +167,8 @@ def integer(value: object, budget: Budget) -> int:
         return value
     if type(value) is not str or not re.fullmatch(r"-?[1-9][0-9]*", value, re.ASCII):
         raise Failure("number", "an integer is expected")
-    most = budget.limits["bits"]
-    require(len(value) <= most * 0.30103 + 2, "limit", f"an integer of more than {most} bits; raise --max-bits")
+    short = len(value) <= budget.limits["bits"] * 0.30103 + 2
+    require(short, "limit", f"an integer of more than {budget.limits['bits']} bits; raise --max-bits")
     require(abs(int(value)) > LARGEST, "number", "an integer within ±(2^53 - 1) must be a JSON number")
     return int(value)
 
@@ -219,7 +199,7 @@ class Statement:
         require(len(self.discs) == self.vertices, "statement", "one pair for each vertex is expected")
         self.degrees = None if value["degrees"] is None else numbers(value["degrees"], 0, LARGEST)
         require(self.degrees != [], "statement", "at least one degree is expected")
-        self.top = self.degrees[-1] + 1 if self.degrees else None
+        self.top = self.degrees[-1] + 1 if self.degrees else LARGEST  # cells of larger degree do not matter
         self.check_facets()
         self.groups = self.read_groups(value["groups"], budget)
 
@@ -235,46 +215,36 @@ class Statement:
             common = reduce(and_, (holders[vertex] for vertex in facet), (1 << len(self.facets)) - 1)
             require(common == 1 << number, "statement", "a facet lies in another one")
 
-    def read_groups(self, value: object, budget: Budget) -> Groups:
+    def read_groups(self, value: object, budget: Budget) -> Total:
         """Return the groups that are stated."""
-        groups: Groups = {}
-        last = -1
+        groups: Total = {}
         for entry in map(sequence, sequence(value)):
             require(len(entry) == 3, "shape", "a group is a list of degree, rank and torsion")
             degree, rank = integer(entry[0], budget), integer(entry[1], budget)
-            torsion = tuple(integer(order, budget) for order in sequence(entry[2]))
-            require(degree > last, "statement", "groups stand in ascending degrees")
-            require(rank >= 0 and (rank > 0 or bool(torsion)), "statement", "a rank is negative, or a group is zero")
+            torsion = [integer(order, budget) for order in sequence(entry[2])]
+            proper = degree > next(reversed(groups), -1) and rank >= 0 and (rank > 0 or bool(torsion))
+            require(proper, "statement", "groups stand in ascending degrees, with ranks from 0 and no zero group")
             factors = all(order > 1 for order in torsion) and not any(b % a for a, b in pairwise(torsion))
             require(factors, "statement", "torsion is a list of invariant factors above 1, each dividing the next")
             spoken_of = self.degrees is None or degree in self.degrees
             require(spoken_of, "statement", "a group is stated in a degree that the claim leaves out")
-            groups[degree] = (rank, torsion)
-            last = degree
+            groups[degree] = Counter(torsion) + Counter({0: rank})
         return groups
 
     def text(self) -> str:
         """Render the statement in the notation of mathematics."""
         names = sorted(set(self.discs))
-        if len(names) == 1:
-            space, pairs = f"({disc_text(names[0])})^K", ""
-        else:
-            space = "(X,A)^K"
-            where = [(n, ", ".join(str(i + 1) for i, d in enumerate(self.discs) if d == n)) for n in names]
-            pairs = "".join(f", (X_i,A_i) = ({disc_text(n)}) for i = {places}" for n, places in where)
+        places = [", ".join(str(i) for i, m in enumerate(self.discs, 1) if m == n) for n in names]
+        mixed = [f", (X_i,A_i) = {disc_text(n)} for i = {at}" for n, at in zip(names, places, strict=True)]
+        space, pairs = (disc_text(names[0]), "") if len(names) == 1 else ("(X,A)", "".join(mixed))
         degrees = sorted(self.groups) if self.degrees is None else self.degrees
-        parts = [f"H_{k} ≅ {group_text(*self.groups.get(k, (0, ())))}" for k in degrees]
-        if parts:
-            first, _, rest = parts[0].partition(" ")
-            parts[0] = f"{first}({space}; ℤ) {rest}"
+        parts = [f"H_{k} ≅ {group_text(self.groups.get(k, Counter()))}" for k in degrees]
+        parts[0] = parts[0].replace(" ", f"({space}^K; ℤ) ", 1)
         if self.degrees is None:
-            parts.append("H_k = 0 for all other k" if parts else f"H_k({space}; ℤ) = 0 for all k")
+            parts.append("H_k = 0 for all other k")
         comma = "," if self.vertices > 9 else ""
         facets = " ".join(comma.join(map(str, facet)) or "∅" for facet in self.facets)
-        ghosts = sorted(set(range(1, self.vertices + 1)).difference(*self.facets))
-        ghost_text = f" (no face holds {', '.join(map(str, ghosts))})" if ghosts else ""
-        plural = "vertex" if self.vertices == 1 else "vertices"
-        return f"{', '.join(parts)}; K on {self.vertices} {plural} with facets {facets}{ghost_text}{pairs}"
+        return f"{', '.join(parts)}; K on {self.vertices} vertices with facets {facets}{pairs}"
 
 
 def disc(name: object) -> int:
@@ -290,12 +260,13 @@ def raised(number: int) -> str:
 
 
 def disc_text(n: int) -> str:
-    return f"D{raised(n)},S{raised(n - 1)}"
+    return f"(D{raised(n)},S{raised(n - 1)})"
 
 
-def group_text(rank: int, torsion: Sequence[int]) -> str:
+def group_text(group: Group) -> str:
+    rank = group[0]
     terms = ["ℤ" + (raised(rank) if rank > 1 else "")] if rank else []
-    for order, count in sorted(Counter(torsion).items()):
+    for order, count in sorted((group - Counter({0: rank})).items()):
         terms.append(f"ℤ/{order}" if count == 1 else f"(ℤ/{order}){raised(count)}")
     return " ⊕ ".join(terms) or "0"
 
@@ -305,29 +276,26 @@ def group_text(rank: int, torsion: Sequence[int]) -> str:
 
 def face_masks(statement: Statement, budget: Budget) -> Faces:
     """Return the faces of K as ascending bit masks, bit i for vertex i + 1, as far as their size matters."""
-    longest = max(map(len, statement.facets))
-    sizes = range(min(longest, longest if statement.top is None else statement.top) + 1)
+    sizes = range(min(statement.top, max(map(len, statement.facets))) + 1)
     masks: list[set[int]] = [set() for _ in sizes]
     for facet in statement.facets:
         for size in sizes:
-            for face in combinations(facet, size):
-                masks[size].add(sum(1 << vertex - 1 for vertex in face))
-                budget.spend("cells", 1)
+            budget.spend("cells", comb(len(facet), size))
+            masks[size].update(sum(1 << vertex - 1 for vertex in face) for face in combinations(facet, size))
     return tuple(tuple(sorted(found)) for found in masks)
 
 
 def without(faces: Faces, place: int) -> Faces:
     """Return the faces that avoid the vertex at `place`, with the vertices above it moved down by one."""
     bit = 1 << place
-    below = bit - 1
-    above = ~below
+    below, above = bit - 1, -bit
     left = [tuple([mask & below | mask >> 1 & above for mask in masks if not mask & bit]) for masks in faces]
     while not left[-1]:
         left.pop()
     return tuple(left)
 
 
-def block_classes(statement: Statement, budget: Budget) -> Iterator[tuple[str, Faces, int, dict[int, int]]]:
+def block_classes(statement: Statement, budget: Budget) -> Iterator[tuple[str, Faces, int, Counter[int]]]:
     """Yield the full subcomplexes K_I, equal ones (after moving I down to 1, 2, …) together.
 
     Yields (name, faces, vertices, shifts): the 0/1 word of the first I of the class, the faces of K_I, |I|, and
@@ -335,8 +303,7 @@ def block_classes(statement: Statement, budget: Budget) -> Iterator[tuple[str, F
     one after the other, and subsets that lead to the same remaining complex are merged on the way (Lemma D); a level
     of more than BATCH faces is cut into runs that are finished one after the other.
     """
-    start = (0, face_masks(statement, budget))
-    pending = [(0, {start: ("", {0: 1})})]
+    pending: list[tuple[int, States]] = [(0, {(0, face_masks(statement, budget)): ("", Counter({0: 1}))})]
     while pending:
         vertex, states = pending.pop()
         if vertex == statement.vertices:
@@ -344,21 +311,14 @@ def block_classes(statement: Statement, budget: Budget) -> Iterator[tuple[str, F
                 yield name, faces, kept, shifts
             continue
         shift = statement.discs[vertex] - 1
-        level: dict[tuple[int, Faces], tuple[str, dict[int, int]]] = {}
+        level: States = {}
         for (kept, faces), (name, shifts) in states.items():
             budget.spend("cells", sum(map(len, faces)))
-            moved = {s + shift: n for s, n in shifts.items() if statement.top is None or s + shift < statement.top}
-            for state, word, counts in (
-                ((kept, without(faces, kept)), name + "0", shifts),
-                ((kept + 1, faces), name + "1", moved),
-            ):
-                if state in level:
-                    known = level[state][1]
-                    for s, n in counts.items():
-                        known[s] = known.get(s, 0) + n
-                elif counts:
-                    level[state] = (word, dict(counts))
-        runs: list[dict[tuple[int, Faces], tuple[str, dict[int, int]]]] = []
+            up = Counter({old + shift: n for old, n in shifts.items() if old + shift < statement.top})
+            for digit, state, counts in ("0", (kept, without(faces, kept)), shifts), ("1", (kept + 1, faces), up):
+                if counts:
+                    level.setdefault(state, (name + digit, Counter()))[1].update(counts)
+        runs: list[States] = []
         room = 0
         for state, entry in level.items():
             size = sum(map(len, state[1]))
@@ -384,83 +344,74 @@ def is_cone(faces: Faces, vertices: int, most: int) -> bool:
     return False
 
 
-class Simplices:
-    """The augmented oriented chain complex of a simplicial complex; degree k is spanned by the faces of k vertices."""
+class Space:
+    """A based complex that was rebuilt from the statement: in each degree ascending words of bits, and d.
 
-    def __init__(self, faces: Faces) -> None:
-        self.faces = faces
-        self.index = [{mask: i for i, mask in enumerate(masks)} for masks in faces]
-        self.sizes = [len(masks) for masks in faces]
-
-    def leads(self, degree: int, cells: list[int]) -> list[int]:
-        """Return the last cell in d of each of these cells, where d has ±1: the face without its first vertex."""
-        masks, below = self.faces[degree], self.index[degree - 1]
-        return [below[masks[cell] & masks[cell] - 1] for cell in cells]
-
-    def boundary(self, degree: int, vector: Vector) -> Vector:
-        """Return d of a vector: the facets of each face with alternating signs, + where the first vertex is left out."""
-        masks = self.faces[degree]
-        total: dict[int, int] = {}
-        for cell, coefficient in vector:
-            mask = rest = masks[cell]
-            while rest:
-                bit = rest & -rest
-                total[mask ^ bit] = total.get(mask ^ bit, 0) + coefficient
-                coefficient = -coefficient  # noqa: PLW2901 - the sign alternates along the vertices
-                rest ^= bit
-        below = self.index[degree - 1]
-        return sorted((below[mask], coefficient) for mask, coefficient in total.items() if coefficient)
-
-
-class Cells:
-    """The cellular chain complex of the whole product (X, A)^K: cells are words, one letter for each vertex.
-
-    Letters of (D^n, S^{n-1}): for n = 1 the points 0, 1 and the edge 2 with d 2 = 1 - 0; otherwise a point 0, a cell 1
-    of degree n - 1, and a cell 2 of degree n with d 2 = 1. The places with a 2 form a face of K.
+    A word holds two sets of vertices, `upper` (shifted up by `width`) and `lower`. d is the sum over the vertices of
+    `upper`, with the sign of the odd ones before: the vertex moves down to `lower`, or out where `width` is 0; and for
+    the vertices of `points`, minus the same with the vertex moved out.
     """
 
-    def __init__(self, statement: Statement, budget: Budget) -> None:
-        faces = set().union(*face_masks(statement, budget))
-        words = [("", 0, 0)]
-        self.discs = statement.discs
-        for vertex, n in enumerate(self.discs):
-            letters = (("0", 0, 0), ("1", 0, n - 1), ("2", 1 << vertex, n))
-            words = [
-                (word + letter, support | bit, degree + more)
-                for word, support, degree in words
-                for letter, bit, more in letters
-                if support | bit in faces and (statement.top is None or degree + more <= statement.top)
-            ]
-            budget.spend("cells", len(words))
-        self.words: list[list[str]] = [[] for _ in range(max(degree for _, _, degree in words) + 1)]
-        for word, _, degree in words:
-            self.words[degree].append(word)
-        self.index = [{word: i for i, word in enumerate(words)} for words in self.words]
-        self.sizes = [len(words) for words in self.words]
+    def __init__(self, words: Sequence[Sequence[int]], width: int, odd: int, points: int) -> None:
+        self.words, self.width, self.odd, self.points = words, width, odd, points
+        self.index = [{word: number for number, word in enumerate(degree)} for degree in words]
+        self.sizes = [len(degree) for degree in words]
 
     def leads(self, degree: int, cells: list[int]) -> list[int]:
-        """Return the last cell in d of each of these cells, where d has ±1: the last 2 becomes a 1."""
-        leads = []
-        for cell in cells:
-            start, two, rest = self.words[degree][cell].rpartition("2")
-            require(bool(two), "boundary", f"cell {cell} of degree {degree} is no a of a pair, it is a cycle")
-            leads.append(self.index[degree - 1][f"{start}1{rest}"])
-        return leads
+        """Return the last cell in d of each of these cells, where d has ±1: the first vertex of `upper` moves."""
+        words, width, below = self.words[degree], self.width, self.index[degree - 1]
+        if width == 0:
+            return [below[words[cell] & words[cell] - 1] for cell in cells]
+        uppers = [words[cell] >> width for cell in cells]
+        require(all(uppers), "boundary", f"a cell matched in degree {degree} has no boundary")
+        firsts = [upper & -upper for upper in uppers]
+        return [below[words[cell] ^ bit << width | bit] for cell, bit in zip(cells, firsts, strict=True)]
 
     def boundary(self, degree: int, vector: Vector) -> Vector:
-        """Return d of a vector, by the Leibniz rule with the sign of the degrees of the letters before."""
-        total: dict[str, int] = {}
+        """Return d of a vector of this degree."""
+        total: dict[int, int] = {}
         for cell, coefficient in vector:
             word = self.words[degree][cell]
-            for place, (letter, n) in enumerate(zip(word, self.discs, strict=True)):
-                if letter == "2":
-                    for end, sign in (("1", 1), ("0", -1)) if n == 1 else (("1", 1),):
-                        face = word[:place] + end + word[place + 1 :]
-                        total[face] = total.get(face, 0) + sign * coefficient
-                if (letter == "2" and n % 2) or (letter == "1" and not n % 2):
-                    coefficient = -coefficient  # noqa: PLW2901 - the sign of the letters so far
+            rest = word >> self.width
+            odd = rest & self.odd | word & ~self.odd & (1 << self.width) - 1
+            while rest:
+                bit = rest & -rest
+                rest ^= bit
+                signed = -coefficient if (odd & bit - 1).bit_count() & 1 else coefficient
+                out = word ^ bit << self.width
+                down = out | bit if self.width else out
+                total[down] = total.get(down, 0) + signed
+                if bit & self.points:
+                    total[out] = total.get(out, 0) - signed
         below = self.index[degree - 1]
-        return sorted((below[face], coefficient) for face, coefficient in total.items() if coefficient)
+        return sorted((below[word], coefficient) for word, coefficient in total.items() if coefficient)
+
+
+def simplices(faces: Faces) -> Space:
+    """Return the augmented oriented chain complex of a simplicial complex; degree k has the faces of k vertices."""
+    return Space(faces, 0, -1, 0)
+
+
+def whole_product(statement: Statement, budget: Budget) -> Space:
+    """Return the cellular chain complex of (X, A)^K, a cell of X for each vertex, those outside A on a face of K.
+
+    The cells of (D^n, S^{n-1}) are a point, a cell t of degree n - 1 (`lower`), and a cell e of degree n (`upper`) with
+    d e = t, and for n = 1 d e = t - point. The sign of the Leibniz rule counts the cells of odd degree before.
+    """
+    m = statement.vertices
+    faces = set().union(*face_masks(statement, budget))
+    words = [(0, 0)]
+    for vertex, n in enumerate(statement.discs):
+        letters = ((0, 0), (1 << vertex, n - 1), (1 << vertex + m, n))
+        grown = ((word | bit, degree + more) for word, degree in words for bit, more in letters)
+        words = [(word, degree) for word, degree in grown if degree <= statement.top and word >> m in faces]
+        budget.spend("cells", len(words))
+    degrees: list[list[int]] = [[] for _ in range(max(degree for _, degree in words) + 1)]
+    for word, degree in sorted(words):
+        degrees[degree].append(word)
+    odd = sum(1 << vertex for vertex, n in enumerate(statement.discs) if n % 2)
+    points = sum(1 << vertex for vertex, n in enumerate(statement.discs) if n == 1)
+    return Space(degrees, m, odd, points)
 
 
 # ---- the proof: Lemma A and Lemma B ----------------------------------------------------------------------------------
@@ -483,14 +434,12 @@ def vector(value: object, size: int, budget: Budget) -> Vector:
     return terms
 
 
-def homology(space: Simplices | Cells, basis: object, budget: Budget) -> list[tuple[int, list[int]]]:
-    """Return (rank, orders of cyclic summands) of H_k for each degree k, proved by an adapted basis (Lemma A)."""
+def homology(space: Space, basis: object, budget: Budget) -> list[Group]:
+    """Return H_k for each degree k, proved by an adapted basis (Lemma A)."""
     entries = sequence(basis)
     require(len(entries) == len(space.sizes), "degrees", f"a basis in each of {len(space.sizes)} degrees is expected")
-    groups: list[tuple[int, list[int]]] = []
-    matched_above: list[int] = []
-    boundaries: list[Vector] = []
-    orders: list[int] = []
+    groups: list[Group] = []
+    above: tuple[list[int], list[Vector], list[int]] = ([], [], [])  # matched cells; the b, and the e > 1, of pairs
     for degree in reversed(range(len(space.sizes))):
         size = space.sizes[degree]
         entry = record(entries[degree], (), ("cycles", "groups", "matched", "order", "pairs"))
@@ -502,6 +451,7 @@ def homology(space: Simplices | Cells, basis: object, budget: Budget) -> list[tu
         closed = degree == 0 or not any(space.boundary(degree, cycle) for cycle in cycles)
         require(closed, "cycle", f"a vector listed as a cycle in degree {degree} has a boundary")
         vectors = [a for a, _, _ in pairs] + cycles
+        matched_above, boundaries, orders = above
         if "order" in entry:
             family: list[Vector] = [[(cell, 1)] for cell in matched] + vectors
             family += [space.boundary(degree + 1, [(cell, 1)]) for cell in matched_above] + boundaries
@@ -510,14 +460,13 @@ def homology(space: Simplices | Cells, basis: object, budget: Budget) -> list[tu
             require("groups" not in entry, "order", "groups need an order")
             leads = matched + (space.leads(degree + 1, matched_above) if matched_above else [])
             check_natural(size, leads, vectors + boundaries)
-        groups.append((len(cycles), orders))
-        matched_above, boundaries = matched, [b for _, _, b in pairs]
-        orders = [e for _, e, _ in pairs if e > 1]
-        budget.look_at_clock()
+        groups.append(Counter([0] * len(cycles) + orders))
+        above = (matched, [b for _, _, b in pairs], [e for _, e, _ in pairs if e > 1])
+        budget.spend("cells", size)
     return groups[::-1]
 
 
-def read_pair(value: list[object], degree: int, space: Simplices | Cells, budget: Budget) -> tuple[Vector, int, Vector]:
+def read_pair(value: list[object], degree: int, space: Space, budget: Budget) -> tuple[Vector, int, Vector]:
     """Return a, e, b with d a = e b; where e is 1 only a is written, and b is d a."""
     require(len(value) in (1, 3), "shape", "a pair is [a], or [a, e, b]")
     a = vector(value[0], space.sizes[degree], budget)
@@ -571,76 +520,48 @@ def check_staircase(size: int, family: list[Vector], entry: dict[str, object], b
             require(alone, "basis", f"cell {cell} leads two vectors, or one with a coefficient that is not ±1")
             seen.add(cell)
     for cells, vectors, inverse in members:
-        check_inverse(cells, vectors, sequence(inverse), budget)
-
-
-def check_inverse(cells: list[int], vectors: list[dict[int, int]], inverse: list[object], budget: Budget) -> None:
-    """Require the square matrix of a group (a row for each cell, a column for each vector) to have this inverse."""
-    size = len(cells)
-    require(len(vectors) == size == len(inverse), "group", f"{size} vectors and rows of an inverse are expected")
-    for i, line in enumerate(inverse):
-        row = [integer(entry, budget) for entry in sequence(line)]
-        require(len(row) == size, "group", "the inverse of a group is a square matrix")
-        budget.look_at_clock()
-        for j, terms in enumerate(vectors):
-            entry = sum(factor * terms.get(cell, 0) for factor, cell in zip(row, cells, strict=True))
-            require(entry == (i == j), "group", "the matrix given as the inverse of a group is not its inverse")
+        rows = [[integer(entry, budget) for entry in sequence(row)] for row in sequence(inverse)]
+        square = len(vectors) == len(cells) == len(rows) and all(len(row) == len(cells) for row in rows)
+        require(square, "group", f"{len(cells)} vectors and the inverse of their square matrix are expected")
+        for i, row in enumerate(rows):
+            budget.spend("cells", len(cells))
+            for j, member in enumerate(vectors):
+                product = sum(entry * member.get(cell, 0) for entry, cell in zip(row, cells, strict=True))
+                require(product == (i == j), "group", "what is given as the inverse of a group is not its inverse")
 
 
 # ---- the claim -------------------------------------------------------------------------------------------------------
 
 
-Total = Counter[
-    tuple[int, int]
-]  # for each degree the number of summands: of Z under (degree, 0), of Z/e under (degree, e)
-
-
-def add(total: Total, groups: list[tuple[int, list[int]]], shift: int, times: int) -> None:
+def add(total: Total, groups: list[Group], shift: int, times: int) -> None:
     """Add groups by degree to a total, shifted, so many times."""
-    for degree, (rank, orders) in enumerate(groups):
-        total[degree + shift, 0] += rank * times
-        for order in orders:
-            total[degree + shift, order] += times
+    for degree, counts in enumerate(groups):
+        for order, count in counts.items():
+            total.setdefault(degree + shift, Counter())[order] += count * times
 
 
-def groups_of(total: Total) -> Groups:
-    """Return the groups of a total in canonical form."""
-    found: Groups = {}
-    for degree in {degree for degree, _ in total}:
-        torsion = invariant_factors(Counter({e: n for (k, e), n in total.items() if k == degree and e}))
-        if total[degree, 0] or torsion:
-            found[degree] = (total[degree, 0], torsion)
-    return found
-
-
-def invariant_factors(orders: Counter[int]) -> tuple[int, ...]:
-    """Return the invariant factors of a sum of cyclic groups, by Z/a + Z/b = Z/gcd + Z/lcm, equal ones together."""
-    counts = Counter(orders)
-    while True:
-        clash = next(((a, b) for a, b in combinations(sorted(counts), 2) if b % a), None)
-        if clash is None:
-            return tuple(order for order in sorted(counts) for _ in range(counts[order]) if order > 1)
-        a, b = clash
-        times = min(counts[a], counts[b])
-        common = gcd(a, b)
-        counts[common] += times
-        counts[a // common * b] += times
-        counts[a] -= times
-        counts[b] -= times
-        counts = +counts
+def invariant_factors(group: Group) -> Group:
+    """Return the same group with torsion orders that divide one another, by Z/a + Z/b = Z/gcd + Z/lcm, many at once."""
+    counts = +group
+    while clash := next(((a, b) for a, b in combinations(sorted(counts), 2) if a and b % a), None):
+        times = min(counts[order] for order in clash)
+        counts += Counter({gcd(*clash): times, lcm(*clash): times})
+        counts -= Counter(dict.fromkeys(clash, times))
+        counts -= Counter({1: counts[1]})
+    return counts
 
 
 def prove_by_blocks(statement: Statement, lines: Lines, budget: Budget) -> Total:
     """Check one record for each class of blocks that is no cone, and return the total (stable splitting)."""
-    total: Total = Counter()
+    total: Total = {}
     for name, all_faces, vertices, shifts in block_classes(statement, budget):
-        most = statement.vertices if statement.top is None else statement.top - min(shifts)
+        most = statement.top - min(shifts)
         faces = all_faces[: most + 1]
         if is_cone(faces, vertices, most):
             continue
-        value = next_record(lines, ("basis", "block"))
+        value = record(lines.next(), ("basis", "block"))
         require(value["block"] == name, "block", f"the record of block {name} is expected here")
-        groups = homology(Simplices(faces), value["basis"], budget)
+        groups = homology(simplices(faces), value["basis"], budget)
         for shift, times in shifts.items():
             add(total, groups, shift, times)
     return total
@@ -648,28 +569,18 @@ def prove_by_blocks(statement: Statement, lines: Lines, budget: Budget) -> Total
 
 def prove_by_cells(statement: Statement, lines: Lines, budget: Budget) -> Total:
     """Check the one record of the whole product, and return the total."""
-    total: Total = Counter()
-    add(total, homology(Cells(statement, budget), next_record(lines, ("basis",))["basis"], budget), 0, 1)
+    total: Total = {}
+    add(total, homology(whole_product(statement, budget), record(lines.next(), ("basis",))["basis"], budget), 0, 1)
     return total
 
 
 ROUTES = {"blocks": prove_by_blocks, "cells": prove_by_cells}
 
 
-def next_record(lines: Lines, keys: Sequence[str]) -> dict[str, object]:
-    value = lines.next()
-    ended = type(value) is dict and "end" in value
-    require(not ended, "missing-record", "the end record stands where another record is needed")
-    return record(value, keys)
-
-
 def read_header(lines: Lines) -> tuple[str, str, object]:
     """Return the claim's name, the route and the raw statement."""
-    first = lines.raw()
-    if first is None or b'"format"' not in first:
-        raise Failure("not-a-certificate", "the first line is no certificate header")
-    value = value_of(first)
-    header = record(value, ("about", "format", "route", "statement"))
+    require(b'"format"' in lines.raw(), "not-a-certificate", "the first line is no certificate header")
+    header = record(value_of(lines.line), ("about", "format", "route", "statement"))
     known = type(header["format"]) is int and header["format"] == FORMAT
     require(known, "unknown-format", f"format {str(header['format'])[:40]} is unknown here, {FORMAT} is known")
     about = record(header["about"], ("claim",), ("labels", "source", "title"))
@@ -688,45 +599,40 @@ def check_end(lines: Lines) -> None:
     counted = type(end["records"]) is int and end["records"] == lines.number - 2
     require(counted, "end", "the end record gives another number of records")
     require(end["sha256"] == lines.digest.hexdigest(), "digest", "the digest of the lines before the end is another")
-    require(lines.raw() is None, "trailing", "something follows the end record")
+    require(lines.raw() == b"", "trailing", "something follows the end record")
 
 
-def compare(statement: Statement, found: Groups) -> None:
+def compare(statement: Statement, total: Total) -> None:
     """Require the groups that were proved to be those that are stated, in every degree of the claim."""
-    degrees = sorted(found.keys() | statement.groups.keys()) if statement.degrees is None else statement.degrees
+    degrees = sorted(total.keys() | statement.groups.keys()) if statement.degrees is None else statement.degrees
     for degree in degrees:
-        proved, stated = found.get(degree, (0, ())), statement.groups.get(degree, (0, ()))
-        if proved != stated:
-            sentence = f"H_{degree} is stated as {group_text(*stated)}, but the records prove {group_text(*proved)}"
-            raise Failure("false", sentence, line=1)
+        proved, stated = invariant_factors(total.get(degree, Counter())), statement.groups.get(degree, Counter())
+        sentence = f"H_{degree} is stated as {group_text(stated)}, but the records prove {group_text(proved)}"
+        require(proved == stated, "false", sentence)
 
 
 def examine(path: str, limits: argparse.Namespace) -> dict[str, str | None]:
     """Return the report on one file. Only the last step of the try block accepts, after every check has passed."""
-    report: dict[str, str | None] = {"path": path, "verdict": "undecided", "reason": "internal", "where": None}
-    report |= {"claim": None, "statement": None, "fingerprint": None, "sentence": ""}
+    report: dict[str, str | None] = dict.fromkeys(("path", "verdict", "reason", "where", "claim", "statement"))
+    report |= {"path": path, "verdict": "undecided", "fingerprint": None}
     lines = None
     try:
+        require(path.endswith(ENDINGS), "not-a-certificate", f"a certificate's name ends in {' or '.join(ENDINGS)}")
         budget = Budget(limits)
-        if not path.endswith(ENDINGS):
-            raise Failure("not-a-certificate", f"the name of a certificate ends in {' or '.join(ENDINGS)}")
         lines = Lines(path, budget)
         report["claim"], route, raw = read_header(lines)
         statement = Statement(raw, budget)
         total = ROUTES[route](statement, lines, budget)
         check_end(lines)
-        compare(statement, groups_of(total))
-        text, fingerprint = statement.text(), hashlib.sha256(canonical(raw)).hexdigest()
-        report |= {"statement": text, "fingerprint": fingerprint, "sentence": "every record was checked"}
-        report |= {"verdict": "accepted", "reason": "proved"}
+        compare(statement, total)
+        report |= {"statement": statement.text(), "fingerprint": hashlib.sha256(canonical(raw)).hexdigest()}
+        report |= {"verdict": "accepted", "reason": "proved", "sentence": "every record was checked"}
     except Failure as failure:
-        report["verdict"] = "undecided" if failure.code in UNDECIDED else "rejected"
-        report["where"] = f"line {failure.line or lines.number}" if lines else None
-        report |= {"reason": failure.code, "sentence": failure.sentence}
-    except OSError as error:
-        report |= {"reason": "unreadable", "sentence": f"the file cannot be read ({error.strerror})"}
-    except MemoryError:
-        report |= {"reason": "limit", "sentence": "the memory of this machine does not suffice"}
+        report["reason"], report["sentence"] = failure.args
+        report["verdict"] = "undecided" if report["reason"] in UNDECIDED else "rejected"
+        report["where"] = f"line {lines.number}" if lines else None
+    except (OSError, MemoryError, zlib.error) as error:
+        report |= {"reason": "unreadable", "sentence": f"the file cannot be read ({type(error).__name__})"}
     return report
 
 
@@ -735,11 +641,8 @@ def examine(path: str, limits: argparse.Namespace) -> dict[str, str | None]:
 
 def certificates_in(path: str) -> list[str]:
     """Return the certificates at a path: the file itself, or all below a folder, in the order of their names."""
-    if not os.path.isdir(path):
-        return [path]
-    return sorted(
-        os.path.join(folder, name) for folder, _, names in os.walk(path) for name in names if name.endswith(ENDINGS)
-    )
+    below = [os.path.join(folder, name) for folder, _, names in os.walk(path) for name in names]
+    return sorted(file for file in below if file.endswith(ENDINGS)) if os.path.isdir(path) else [path]
 
 
 def printable(text: str | None) -> str:
@@ -755,14 +658,6 @@ def show(report: dict[str, str | None]) -> None:
     else:
         where = f"{report['where']}, " if report["where"] else ""
         print(f"           {where}{report['reason']}: {printable(report['sentence'])}")
-
-
-def exit_code(reports: list[dict[str, str | None]]) -> int:
-    """Return the exit code for these reports; 0 needs at least one, all accepted."""
-    verdicts = {report["verdict"] for report in reports}
-    if "rejected" in verdicts:
-        return 1
-    return 0 if verdicts == {"accepted"} else 3
 
 
 def main(arguments: list[str] | None = None) -> int:
@@ -782,13 +677,13 @@ def main(arguments: list[str] | None = None) -> int:
         if not limits.json:
             show(reports[-1])
             sys.stdout.flush()
-    code = exit_code(reports)
+    verdicts = Counter(report["verdict"] for report in reports)
+    code = 1 if verdicts["rejected"] else 0 if reports and verdicts["accepted"] == len(reports) else 3
     if limits.json:
         verdict = {0: "accepted", 1: "rejected"}.get(code, "undecided")
         print(json.dumps({"verdict": verdict, "files": reports}, ensure_ascii=False, indent=1))
     else:
-        counts = Counter(report["verdict"] for report in reports)
-        print(", ".join(f"{counts[verdict]} {verdict}" for verdict in ("accepted", "rejected", "undecided")))
+        print(", ".join(f"{verdicts[verdict]} {verdict}" for verdict in ("accepted", "rejected", "undecided")))
     return code
 
 

@@ -3,8 +3,10 @@
 from __future__ import annotations
 
 import re
+from collections.abc import Iterator
+from contextlib import contextmanager
 from pathlib import Path
-from typing import TYPE_CHECKING, Any, Literal
+from typing import TYPE_CHECKING, Literal
 
 import click
 
@@ -34,16 +36,14 @@ _EPILOG = """For example:
 _CERTIFICATE = re.compile(r"([A-Za-z0-9][A-Za-z0-9._-]{0,99})\.cert\.jsonl(\.gz)?", re.ASCII)
 
 
-class _Degrees(click.ParamType):
-    """Degrees, separated by commas or blanks."""
-
-    name = "degrees"
-
-    def convert(self, value: Any, param: click.Parameter | None, ctx: click.Context | None) -> tuple[int, ...]:
-        words = value.replace(",", " ").split()
-        if not words or not all(re.fullmatch("[0-9]{1,9}", word, re.ASCII) for word in words):
-            self.fail(f"expected degrees like 0,1, found {value!r}", param, ctx)
-        return tuple(map(int, words))
+def _degrees(context: click.Context, option: click.Parameter, value: str | None) -> tuple[int, ...] | None:
+    """Return degrees that are separated by commas or blanks."""
+    if value is None:
+        return None
+    words = value.replace(",", " ").split()
+    if not words or not all(re.fullmatch("[0-9]{1,9}", word, re.ASCII) for word in words):
+        raise click.BadParameter(f"expected degrees like 0,1, found {value!r}", context, option)
+    return tuple(map(int, words))
 
 
 @click.command(help=_HELP, epilog=_EPILOG)
@@ -57,7 +57,7 @@ class _Degrees(click.ParamType):
     required=True,
     help='The pair (X, A), like "(D1, S0)"; give it once for all vertices, or once for each in order.',
 )
-@click.option("--degrees", type=_Degrees(), metavar="DEGREES", help="Only these degrees, like 0,1.  [default: all]")
+@click.option("--degrees", callback=_degrees, metavar="DEGREES", help="Only these degrees, like 0,1.  [default: all]")
 @click.option(
     "--route",
     type=click.Choice(["blocks", "cells"]),
@@ -83,17 +83,57 @@ def compute(
     """Compute, print, and write the certificate if there is to be one."""
     from certify.certificate import Spool
     from certify.claims import HomologyClaim, prove
-    from certify.commands.results import homology_lines, homology_value, say_json
+    from certify.commands.results import homology_lines, homology_value, pair_lines, say_json
     from certify.products import PolyhedralProduct, parse_pairs
+    from certify.sheet import NamedClaim
 
     name = _claim_name(certificate)
     k = _complex(file, facets)
-    with _command_line("--pair"):
+    with _blaming("--pair"):
         product = PolyhedralProduct(k, parse_pairs(pairs[0] if len(pairs) == 1 else pairs, k.vertex_count))
-    claim = HomologyClaim(product, degrees, route=route)
+    item = NamedClaim.of(name, "K", HomologyClaim(product, degrees, route=route), {})
     with Spool() as spool:
         with progress("computing") as report:
-            proof = prove(claim, spool, jobs=jobs, progress=report)
-        size = proof.write(certificate, {"claim": name}) if certificate else None
-    ...
+            proof = prove(item.claim, spool, jobs=jobs, progress=report)
+        size = proof.write(certificate, item.about) if certificate else 0
+    if as_json:
+        say_json({"homology": homology_value(proof.groups)})
+        return codes.DONE
+    lines = [*homology_lines(item.claim, proof.groups), f"where K has {k}", *pair_lines(item.claim)]
+    if certificate:
+        lines += [f"certificate {certificate}, {counted(size, 'byte')}", f"fingerprint {proof.fingerprint}"]
+    for line in lines:
+        click.echo(printable(line))
     return codes.DONE
+
+
+def _claim_name(certificate: Path | None) -> str:
+    """Return the name of the claim, which is that of its file."""
+    match = _CERTIFICATE.fullmatch(certificate.name) if certificate else None
+    if certificate and not match:
+        raise _wrong("--certificate", f"expected a file NAME.cert.jsonl or NAME.cert.jsonl.gz, found {certificate}")
+    return match[1] if match else ""
+
+
+def _complex(file: Path | None, facets: str | None) -> SimplicialComplex:
+    from certify.simplicial import read_complex_file, read_facets
+
+    if file is not None and facets is None:
+        return read_complex_file(file)
+    if facets is None or file is not None:
+        raise click.UsageError("Give either --facets or FILE.", click.get_current_context())
+    with _blaming("--facets"):
+        return read_facets(facets)
+
+
+@contextmanager
+def _blaming(option: str) -> Iterator[None]:
+    """Turn bad input into a fault of the command line."""
+    try:
+        yield
+    except BadInput as fault:
+        raise _wrong(option, str(fault)) from fault
+
+
+def _wrong(option: str, message: str) -> click.BadParameter:
+    return click.BadParameter(message, click.get_current_context(), param_hint=f"'{option}'")

@@ -26,7 +26,7 @@ __all__ = ["cli", "main"]
 _HELP = """Compute the integral homology of polyhedral products (X, A)^K, and prove it.
 
 An author writes claims into a sheet, and `certify prove` makes a certificate of each: data from which the claim
-follows by arithmetic with whole numbers. A referee checks the certificates with `certify verify`, or with the one
+follows by arithmetic with integers. A referee checks the certificates with `certify verify`, or with the one
 file that it runs, which needs nothing but Python.
 
 New here? Say `certify demo`.
@@ -37,10 +37,20 @@ command line is wrong; 3 undecided, unreadable, or nothing to do; 70 an internal
 """
 
 
+class _Verbs(click.Group):
+    """A group that lists its verbs in the order of the work, not of the alphabet."""
+
+    def list_commands(self, ctx: click.Context) -> list[str]:  # noqa: ARG002 - click calls it with one
+        """Return the names of the verbs."""
+        return list(self.commands)
+
+
 @click.group(
+    cls=_Verbs,
     help=_HELP,
     epilog=_CODES,
     invoke_without_command=True,
+    subcommand_metavar="VERB ...",
     context_settings={"help_option_names": ["-h", "--help"]},
 )
 @click.version_option(__version__, message="certify %(version)s")
@@ -105,7 +115,7 @@ def _speak_utf8() -> None:
 
 
 def _let_go_of_output() -> None:
-    """Send what is still to be printed nowhere: the output is full or closed, and Python would fail again at its end."""
+    """Send what is left to print nowhere: the output is full or closed, and Python would fail again at its end."""
     with suppress(OSError):
         os.dup2(os.open(os.devnull, os.O_WRONLY), sys.stdout.fileno())
 

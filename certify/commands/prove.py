@@ -20,7 +20,7 @@ if TYPE_CHECKING:
 
 __all__ = ["JOBS", "Outcome", "outcomes", "prove", "say_outcomes"]
 
-_HELP = """Prove every claim of a claim sheet, and write a certificate of each.
+_HELP = """Prove the claims of a sheet, and write their certificates.
 
 A certificate holds the statement in full and the data from which it follows: check it with `certify verify`, publish
 it beside your table, and print its fingerprint beside the theorem. A claim that is false gets none; you are told the
@@ -48,7 +48,12 @@ _EPILOG = """A sheet is a TOML file. The smallest one:
 _CODE = {"proved": codes.DONE, "false": codes.REFUSED, "undecided": codes.UNDECIDED}
 
 JOBS = click.option(
-    "--jobs", type=click.IntRange(min=1), default=1, show_default=True, help="The number of processes that compute."
+    "--jobs",
+    metavar="N",
+    type=click.IntRange(min=1),
+    default=1,
+    show_default=True,
+    help="Compute in N processes; the certificates are the same.",
 )
 
 
@@ -87,7 +92,11 @@ class Outcome:
 @click.command(help=_HELP, epilog=_EPILOG)
 @click.argument("sheet", type=click.Path(path_type=Path))
 @click.option(
-    "--out", type=click.Path(path_type=Path), help="Folder of the certificates.  [default: certificates, beside SHEET]"
+    "--out",
+    metavar="DIR",
+    type=click.Path(path_type=Path),
+    show_default="certificates, beside SHEET",
+    help="The folder for the certificates.",
 )
 @JOBS
 @click.option("--gzip", "packed", is_flag=True, help="Write compressed certificates (*.cert.jsonl.gz).")
@@ -103,9 +112,6 @@ def prove(sheet: Path, out: Path | None, jobs: int, packed: bool, as_json: bool)
     if not as_json:
         return say_outcomes(claims, results)
     done = list(results)
-    for outcome in done:
-        if outcome.verdict != "proved":
-            tell_fault(f"claim {outcome.item.id}: {outcome.sentence}")
     code = codes.worst(outcome.code for outcome in done)
     verdict = next(verdict for verdict, its_code in _CODE.items() if its_code == code)
     say_json({"verdict": verdict, "claims": [_value(outcome) for outcome in done]})
@@ -113,7 +119,7 @@ def prove(sheet: Path, out: Path | None, jobs: int, packed: bool, as_json: bool)
 
 
 def outcomes(sheet: Sheet, folder: Path, *, jobs: int, packed: bool = False) -> Iterator[Outcome]:
-    """Prove the claims of a sheet one after the other, and yield what became of each.
+    """Prove the claims of a sheet one after the other, and yield what became of each; faults are told at once.
 
     Raises
     ------
@@ -122,7 +128,10 @@ def outcomes(sheet: Sheet, folder: Path, *, jobs: int, packed: bool = False) -> 
     """
     _require_folder(folder)
     for item in sheet.claims:
-        yield _outcome(item, folder, jobs, packed)
+        outcome = _outcome(item, folder, jobs, packed)
+        if outcome.verdict == "undecided":
+            tell_fault(f"claim {item.id}: {outcome.sentence}")
+        yield outcome
 
 
 def _outcome(item: NamedClaim, folder: Path, jobs: int, packed: bool) -> Outcome:
@@ -162,7 +171,8 @@ def say_outcomes(sheet: Sheet, results: Iterator[Outcome]) -> int:
     names = [item.id for item in sheet.claims]
     done = []
     for outcome in results:
-        say_row(outcome.item.id, list(_lines(outcome)), names)
+        if outcome.verdict != "undecided":
+            say_row(outcome.item.id, list(_lines(outcome)), names)
         done.append(outcome)
     counts = {verdict: sum(outcome.verdict == verdict for outcome in done) for verdict in _CODE}
     rest = [f"{count} {verdict}" for verdict, count in counts.items() if count and verdict != "proved"]
@@ -175,7 +185,7 @@ def _lines(outcome: Outcome) -> Iterator[str]:
 
     claim = outcome.item.claim
     if outcome.groups is None:
-        yield f"{outcome.verdict}: {outcome.sentence}"
+        yield f"false: {outcome.sentence}"
         if outcome.path.exists():
             yield f"no certificate was written; {outcome.path} is of an earlier run"
         return
@@ -189,12 +199,12 @@ def _lines(outcome: Outcome) -> Iterator[str]:
 def _value(outcome: Outcome) -> dict[str, Any]:
     from certify.commands.results import homology_value
 
-    proved = outcome.groups is not None
+    proved = outcome.verdict == "proved"
     return {
         "claim": outcome.item.id,
         "verdict": outcome.verdict,
         "sentence": outcome.sentence,
-        "homology": homology_value(outcome.groups) if outcome.groups is not None else None,
+        "homology": homology_value(outcome.groups or {}) if proved else None,
         "path": str(outcome.path) if proved else None,
         "bytes": outcome.size,
         "fingerprint": outcome.fingerprint,

@@ -37,9 +37,7 @@ def homology_lines(claim: HomologyClaim, groups: Groups) -> list[str]:
     """
     space = str(claim.product)
     degrees: Sequence[int] = sorted(groups) if claim.degrees is None else claim.degrees
-    lines = [
-        f"H_{k}({space}; ℤ) ≅ {groups[k]}" if groups.get(k) else f"H_{k}({space}; ℤ) = 0" for k in degrees
-    ]
+    lines = [f"H_{k}({space}; ℤ) ≅ {groups[k]}" if groups.get(k) else f"H_{k}({space}; ℤ) = 0" for k in degrees]
     return lines if claim.degrees is not None else [*lines, f"H_k({space}; ℤ) = 0 for all other k"]
 
 

@@ -73,7 +73,7 @@ def say_row(name: str, lines: Sequence[str], names: Sequence[str]) -> None:
         click.secho(head, bold=True)
         head = ""
     for piece in pieces:
-        click.echo(f"{click.style(head, bold=True)}{' ' * (column - len(head))}{piece}")
+        click.echo((click.style(head, bold=True) if head else "") + " " * (column - len(head)) + piece)
         head = ""
     click.echo()
 
@@ -117,9 +117,15 @@ class _Bar:
         from rich.console import Console
         from rich.progress import BarColumn, Progress, TaskProgressColumn, TextColumn, TimeElapsedColumn
 
-        columns = (TextColumn("{task.description}", markup=False), BarColumn(), TaskProgressColumn(), TimeElapsedColumn())
         bar = Progress(
-            *columns, console=Console(stderr=True), transient=True, redirect_stdout=False, redirect_stderr=False
+            TextColumn("{task.description}", markup=False),
+            BarColumn(30, style="dim", complete_style="default", finished_style="default", pulse_style="default"),
+            TaskProgressColumn("{task.percentage:>3.0f} %", style="default"),
+            TimeElapsedColumn(),
+            console=Console(stderr=True),
+            transient=True,
+            redirect_stdout=False,
+            redirect_stderr=False,
         )
         bar.add_task(self._what, total=None)
         bar.start()

@@ -22,6 +22,8 @@ PATH is a certificate (*.cert.jsonl or *.cert.jsonl.gz) or a folder to search fo
 it is accepted, rejected or undecided; if it is accepted, the statement that was proved, written from the checked data
 and not from anybody's prose; otherwise the reason, and the line of the file.
 
+Limits keep a file from taking all your memory or time; a file that reaches one is undecided. Each has a default.
+
 The work is done by one file that shares no code with the rest of certify and runs in a process of its own, with
 nothing but the standard library of Python.
 """
@@ -32,10 +34,14 @@ _VERDICTS = {codes.DONE, codes.REFUSED, codes.USAGE, codes.UNDECIDED, codes.INTE
 @click.command(help=_HELP)
 @click.argument("paths", metavar="PATH...", nargs=-1, required=True)
 @click.option("--json", "as_json", is_flag=True, help="Print one JSON object instead of text.")
-@click.option("--max-bytes", type=click.IntRange(min=1), help="Give up on a file of more bytes, decompressed.")
-@click.option("--max-cells", type=click.IntRange(min=1), help="Give up on a space of more cells.")
-@click.option("--max-bits", type=click.IntRange(min=1), help="Give up on an integer of more bits.")
-@click.option("--max-seconds", type=click.FloatRange(min=0), help="Give up on a file after so many seconds.")
+@click.option(
+    "--max-bytes", metavar="N", type=click.IntRange(min=1), help="Give up on a file of more bytes, decompressed."
+)
+@click.option("--max-cells", metavar="N", type=click.IntRange(min=1), help="Give up on a space of more cells.")
+@click.option("--max-bits", metavar="N", type=click.IntRange(min=1), help="Give up on an integer of more bits.")
+@click.option(
+    "--max-seconds", metavar="N", type=click.FloatRange(min=0), help="Give up on a file after so many seconds."
+)
 def verify(paths: tuple[str, ...], as_json: bool, **limits: float | None) -> int:
     """Pass the command line on to the verifier."""
     options = ["--json"] if as_json else []

@@ -27,8 +27,8 @@ def cell_complex(space: PolyhedralProduct, top: int | None = None) -> BasedCompl
 
     Notes
     -----
-    Cells are tuples with a cell of X_i for each vertex i, ordered lexicographically in each degree; those vertices
-    whose cell is outside A_i form a face of K. The boundary is the Leibniz rule with sign
+    Cells are tuples with a cell of X_i for each vertex i; those vertices whose cell is outside A_i form a face of K. In
+    each degree they are ordered by that face as a bit mask, then by the mask of the vertices with cell t. The boundary is the Leibniz rule with sign
     (-1)^(degree of the factors before). The number of cells is Σ_σ 2^(m - |σ|).
     """
     degrees: dict[int, list[_Cell]] = {0: []}
@@ -44,10 +44,16 @@ def cell_complex(space: PolyhedralProduct, top: int | None = None) -> BasedCompl
     boundaries: list[tuple[Entries, ...]] = []
     below: dict[_Cell, int] = {}
     for degree in range(max(degrees) + 1):
-        cells = sorted(degrees.get(degree, []))
+        cells = sorted(degrees.get(degree, []), key=_masks)
         boundaries.append(tuple(_boundary(space, cell, below) for cell in cells))
         below = {cell: number for number, cell in enumerate(cells)}
     return BasedComplex(tuple(boundaries))
+
+
+def _masks(cell: _Cell) -> tuple[int, int]:
+    """Return the vertices with cell e, and those with cell t, as bit masks."""
+    uppers = sum(1 << place for place, letter in enumerate(cell) if letter == _UPPER)
+    return uppers, sum(1 << place for place, letter in enumerate(cell) if letter == _LOWER)
 
 
 def _degree(pair: DiscPair, letter: int) -> int:

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from itertools import pairwise
 from math import gcd, prod
 
 from hypothesis import given
@@ -32,7 +33,7 @@ def test_the_torsion_is_that_of_the_smith_form(rank: int, orders: list[int]) -> 
 @given(cyclic_orders())
 def test_invariant_factors_divide_one_another_and_keep_the_order(orders: list[int]) -> None:
     torsion = AbelianGroup.of(0, orders).torsion
-    assert all(b % a == 0 for a, b in zip(torsion, torsion[1:], strict=False))
+    assert all(b % a == 0 for a, b in pairwise(torsion))
     assert all(factor > 1 for factor in torsion)
     assert prod(torsion) == prod(orders)
 

@@ -77,7 +77,7 @@ class _Space:
 
 @given(based_complexes())
 def test_the_verifier_proves_that_homology_from_the_record(known: Known) -> None:
-    """Whatever the complex and the size of its coefficients, prover and verifier agree through the bytes of a record."""
+    """Whatever the complex and the size of its coefficients, prover and verifier agree through a record."""
     complex_, homology = known
     record = json.loads(canonical_line(basis_value(adapted_basis(complex_))))
     proved = verifier().homology(_Space(complex_), record, verifier().Budget(limits()))

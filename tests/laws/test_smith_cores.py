@@ -11,7 +11,9 @@ from tests.strategies import integer_matrices, unimodular_matrices
 
 
 def _product(left: Matrix, right: Matrix) -> Matrix:
-    return [[sum(a * b for a, b in zip(row, column, strict=True)) for column in zip(*right, strict=True)] for row in left]
+    return [
+        [sum(a * b for a, b in zip(row, column, strict=True)) for column in zip(*right, strict=True)] for row in left
+    ]
 
 
 def _identity(size: int) -> Matrix:

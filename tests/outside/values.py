@@ -44,9 +44,9 @@ def entry(name: str) -> Entry:
 def bigraded_ranks(k: SimplicialComplex) -> dict[tuple[int, int], int]:
     """Return rank β^(-i,2j) of Tor of the face ring by (i, j), as a certified product gives it.
 
-    With (Dⁿ, Sⁿ⁻¹), n - 1 = m + 1, at every vertex, the blocks of the sets of j vertices lie in degrees from (m + 1) j to
-    (m + 1) j + m. There degree k is reduced homology in degree k - 1 of full subcomplexes, which by Hochster's formula
-    belongs to i = j - k.
+    With (Dⁿ, Sⁿ⁻¹), n - 1 = m + 1, at every vertex, the blocks of the sets of j vertices lie in degrees from (m + 1) j
+    to (m + 1) j + m. Degree k above (m + 1) j is reduced homology in degree k - 1 of full subcomplexes, which by
+    Hochster's formula belongs to i = j - k.
     """
     width = k.vertex_count + 1
     groups = certified_homology(disc_product(k, width + 1))

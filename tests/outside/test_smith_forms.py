@@ -1,0 +1,62 @@
+"""Our certified answers against the Smith normal forms of two general-purpose libraries, on dense boundary matrices."""
+
+from __future__ import annotations
+
+import pytest
+from flint import fmpz_mat
+from hypothesis import given, settings
+from sympy import ZZ
+from sympy.polys.matrices import DomainMatrix
+from sympy.polys.matrices.normalforms import invariant_factors
+
+from certify.claims.homology import Route
+from certify.products import PolyhedralProduct
+from tests.helpers import certified_homology
+from tests.outside.dense import Matrix, boundary_matrices, homology_from_factors
+from tests.strategies import disc_products, disc_products_with_torsion
+
+both_routes = pytest.mark.parametrize("route", ["blocks", "cells"])
+
+
+def _factors_by_flint(matrix: Matrix) -> list[int]:
+    """Return the non-zero invariant factors by python-flint (FLINT)."""
+    if not matrix or not matrix[0]:
+        return []
+    smith = fmpz_mat(matrix).snf()
+    diagonal = (abs(int(smith[i, i])) for i in range(min(len(matrix), len(matrix[0]))))
+    return [factor for factor in diagonal if factor]
+
+
+def _factors_by_sympy(matrix: Matrix) -> list[int]:
+    """Return the non-zero invariant factors by SymPy, which computes them in Python."""
+    if not matrix or not matrix[0]:
+        return []
+    found = invariant_factors(DomainMatrix(matrix, (len(matrix), len(matrix[0])), ZZ).convert_to(ZZ))
+    return [abs(int(factor)) for factor in found if factor]
+
+
+def _ours(space: PolyhedralProduct, route: Route) -> dict[int, tuple[int, tuple[int, ...]]]:
+    return {degree: (group.rank, group.torsion) for degree, group in certified_homology(space, route=route).items()}
+
+
+@both_routes
+@given(disc_products(max_vertices=4))
+def test_against_the_smith_form_of_flint(route: Route, space: PolyhedralProduct) -> None:
+    sizes, matrices = boundary_matrices(space.complex.facets, [pair.n for pair in space.pairs])
+    assert _ours(space, route) == homology_from_factors(sizes, [_factors_by_flint(matrix) for matrix in matrices])
+
+
+@settings(max_examples=4)
+@given(disc_products_with_torsion())
+def test_against_the_smith_form_of_flint_where_there_is_torsion(space: PolyhedralProduct) -> None:
+    sizes, matrices = boundary_matrices(space.complex.facets, [pair.n for pair in space.pairs])
+    expected = homology_from_factors(sizes, [_factors_by_flint(matrix) for matrix in matrices])
+    assert any(torsion for _, torsion in expected.values())
+    assert _ours(space, "blocks") == expected
+
+
+@settings(max_examples=25)
+@given(disc_products(max_vertices=3, max_n=4))
+def test_against_the_smith_form_of_sympy(space: PolyhedralProduct) -> None:
+    sizes, matrices = boundary_matrices(space.complex.facets, [pair.n for pair in space.pairs])
+    assert _ours(space, "blocks") == homology_from_factors(sizes, [_factors_by_sympy(matrix) for matrix in matrices])
