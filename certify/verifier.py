@@ -43,7 +43,7 @@ UNDECIDED = {"limit", "unknown-format", "unknown-kind", "unknown-pair", "not-a-c
 
 Vector = list[tuple[int, int]]  # cells with coefficients, cells ascending
 Faces = tuple[tuple[int, ...], ...]  # for each number of vertices the faces as ascending bit masks
-States = dict[tuple[int, Faces], tuple[str, Counter[int]]]  # |I| so far, and K on I and the undecided: name, shifts
+States = dict[tuple[int, Faces], tuple[str, dict[int, int]]]  # |I| so far, and K on I and the undecided: name, shifts
 Group = Counter[int]  # how often Z (under 0) and Z/e (under e) are summands
 Total = dict[int, Group]  # a group for each degree; a degree that is missing has the group 0
 
@@ -68,7 +68,8 @@ class Budget:
 
     def spend(self, what: str, number: int) -> None:
         self.left[what] -= number
-        require(self.left[what] >= 0, "limit", f"more than {self.limits[what]} {what} are needed; raise --max-{what}")
+        if self.left[what] < 0:  # a sentence is only put together when it is needed, since this runs often
+            raise Failure("limit", f"more than {self.limits[what]} {what} are needed; raise --max-{what}")
         require(time.monotonic() <= self.deadline, "limit", "not done within the time allowed; raise --max-seconds")
 
 
@@ -295,7 +296,7 @@ def without(faces: Faces, place: int) -> Faces:
     return tuple(left)
 
 
-def block_classes(statement: Statement, budget: Budget) -> Iterator[tuple[str, Faces, int, Counter[int]]]:
+def block_classes(statement: Statement, budget: Budget) -> Iterator[tuple[str, Faces, int, dict[int, int]]]:
     """Yield the full subcomplexes K_I, equal ones (after moving I down to 1, 2, …) together.
 
     Yields (name, faces, vertices, shifts): the 0/1 word of the first I of the class, the faces of K_I, |I|, and
@@ -303,7 +304,7 @@ def block_classes(statement: Statement, budget: Budget) -> Iterator[tuple[str, F
     one after the other, and subsets that lead to the same remaining complex are merged on the way (Lemma D); a level
     of more than BATCH faces is cut into runs that are finished one after the other.
     """
-    pending: list[tuple[int, States]] = [(0, {(0, face_masks(statement, budget)): ("", Counter({0: 1}))})]
+    pending: list[tuple[int, States]] = [(0, {(0, face_masks(statement, budget)): ("", {0: 1})})]
     while pending:
         vertex, states = pending.pop()
         if vertex == statement.vertices:
@@ -314,10 +315,11 @@ def block_classes(statement: Statement, budget: Budget) -> Iterator[tuple[str, F
         level: States = {}
         for (kept, faces), (name, shifts) in states.items():
             budget.spend("cells", sum(map(len, faces)))
-            up = Counter({old + shift: n for old, n in shifts.items() if old + shift < statement.top})
+            up = {old + shift: n for old, n in shifts.items() if old + shift < statement.top}
             for digit, state, counts in ("0", (kept, without(faces, kept)), shifts), ("1", (kept + 1, faces), up):
                 if counts:
-                    level.setdefault(state, (name + digit, Counter()))[1].update(counts)
+                    known = level.setdefault(state, (name + digit, {}))[1]
+                    known.update((s, n + known.get(s, 0)) for s, n in counts.items())
         runs: list[States] = []
         room = 0
         for state, entry in level.items():
@@ -363,7 +365,7 @@ class Space:
         if width == 0:
             return [below[words[cell] & words[cell] - 1] for cell in cells]
         uppers = [words[cell] >> width for cell in cells]
-        require(all(uppers), "boundary", f"a cell matched in degree {degree} has no boundary")
+        require(all(uppers), "boundary", "a matched cell has no boundary")
         firsts = [upper & -upper for upper in uppers]
         return [below[words[cell] ^ bit << width | bit] for cell, bit in zip(cells, firsts, strict=True)]
 
@@ -434,11 +436,11 @@ def vector(value: object, size: int, budget: Budget) -> Vector:
     return terms
 
 
-def homology(space: Space, basis: object, budget: Budget) -> list[Group]:
-    """Return H_k for each degree k, proved by an adapted basis (Lemma A)."""
+def homology(space: Space, basis: object, budget: Budget) -> list[tuple[int, list[int]]]:
+    """Return rank and orders of cyclic summands of H_k for each degree k, proved by an adapted basis (Lemma A)."""
     entries = sequence(basis)
     require(len(entries) == len(space.sizes), "degrees", f"a basis in each of {len(space.sizes)} degrees is expected")
-    groups: list[Group] = []
+    groups: list[tuple[int, list[int]]] = []
     above: tuple[list[int], list[Vector], list[int]] = ([], [], [])  # matched cells; the b, and the e > 1, of pairs
     for degree in reversed(range(len(space.sizes))):
         size = space.sizes[degree]
@@ -449,7 +451,7 @@ def homology(space: Space, basis: object, budget: Budget) -> list[Group]:
         require(degree > 0 or not (matched or pairs), "boundary", "degree 0 has a pair, but nothing is below it")
         cycles = [vector(cycle, size, budget) for cycle in sequence(entry.get("cycles", []))]
         closed = degree == 0 or not any(space.boundary(degree, cycle) for cycle in cycles)
-        require(closed, "cycle", f"a vector listed as a cycle in degree {degree} has a boundary")
+        require(closed, "cycle", "a vector listed as a cycle has a boundary")
         vectors = [a for a, _, _ in pairs] + cycles
         matched_above, boundaries, orders = above
         if "order" in entry:
@@ -460,7 +462,7 @@ def homology(space: Space, basis: object, budget: Budget) -> list[Group]:
             require("groups" not in entry, "order", "groups need an order")
             leads = matched + (space.leads(degree + 1, matched_above) if matched_above else [])
             check_natural(size, leads, vectors + boundaries)
-        groups.append(Counter([0] * len(cycles) + orders))
+        groups.append((len(cycles), orders))
         above = (matched, [b for _, _, b in pairs], [e for _, e, _ in pairs if e > 1])
         budget.spend("cells", size)
     return groups[::-1]
@@ -477,7 +479,7 @@ def read_pair(value: list[object], degree: int, space: Space, budget: Budget) ->
     require(e > 1, "torsion", "the e of a pair that lists its b is at least 2")
     b = vector(value[2], space.sizes[degree - 1] if degree else 0, budget)
     multiple = [(cell, e * coefficient) for cell, coefficient in b]
-    require(image == multiple, "boundary", f"d a is not e b for a pair in degree {degree}")
+    require(image == multiple, "boundary", "d a is not e b for a pair")
     return a, e, b
 
 
@@ -490,7 +492,7 @@ def check_natural(size: int, leads: list[int], vectors: list[Vector]) -> None:
     require(units, "basis", "a vector is zero, or its coefficient on its largest cell is not ±1")
     found = leads + [terms[-1][0] for terms in vectors]
     each_once = len(found) == size == len(set(found))
-    require(each_once, "basis", f"the vectors do not lead each of the {size} cells once")
+    require(each_once, "basis", "the vectors do not lead each cell once")
 
 
 def check_staircase(size: int, family: list[Vector], entry: dict[str, object], budget: Budget) -> None:
@@ -533,11 +535,11 @@ def check_staircase(size: int, family: list[Vector], entry: dict[str, object], b
 # ---- the claim -------------------------------------------------------------------------------------------------------
 
 
-def add(total: Total, groups: list[Group], shift: int, times: int) -> None:
+def add(total: Total, groups: list[tuple[int, list[int]]], shift: int, times: int) -> None:
     """Add groups by degree to a total, shifted, so many times."""
-    for degree, counts in enumerate(groups):
-        for order, count in counts.items():
-            total.setdefault(degree + shift, Counter())[order] += count * times
+    for degree, (rank, orders) in enumerate(groups, shift):
+        for order, count in ((0, rank), *((order, 1) for order in orders)):
+            total.setdefault(degree, Counter())[order] += count * times
 
 
 def invariant_factors(group: Group) -> Group:

@@ -92,7 +92,8 @@ def main(arguments: Sequence[str] | None = None) -> int:
         code = codes.INTERRUPTED
     except OSError as error:
         _let_go_of_output()
-        tell_fault(f"the output cannot be written, or the system refused something else: {error}")
+        where = f"{error.filename}: " if error.filename else "the output cannot be written: "
+        tell_fault(f"{where}{error.strerror or error}")
         code = codes.UNDECIDED
     except MemoryError:
         tell_fault("the memory of this machine does not suffice")

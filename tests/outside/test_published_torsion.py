@@ -103,8 +103,8 @@ _TRIANGLES = list(combinations(range(6), 3))
 
 def _triangle_permutation(images: list[int]) -> list[int]:
     """Return where a permutation of the six vertices takes each triangle."""
-    place = {triangle: number for number, triangle in enumerate(_TRIANGLES)}
-    return [place[tuple(sorted(images[vertex] for vertex in triangle))] for triangle in _TRIANGLES]
+    place = {frozenset(triangle): number for number, triangle in enumerate(_TRIANGLES)}
+    return [place[frozenset(images[vertex] for vertex in triangle)] for triangle in _TRIANGLES]
 
 
 def _halves(permutation: list[int]) -> tuple[list[int], list[int]]:
