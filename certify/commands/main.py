@@ -19,7 +19,7 @@ from certify.commands.demo import demo
 from certify.commands.prove import prove
 from certify.commands.terminal import tell_fault
 from certify.commands.verify import verify
-from certify.errors import CertifyError, InternalError
+from certify.errors import BadInput, LimitReached
 
 __all__ = ["cli", "main"]
 
@@ -83,29 +83,33 @@ def main(arguments: Sequence[str] | None = None) -> int:
         sys.stdout.flush()
     except click.exceptions.Exit as end:
         code = end.exit_code
-    except click.UsageError as error:
-        command = error.ctx.command_path if error.ctx else "certify"
-        tell_fault(f"{error.format_message()} ({command} --help says more.)")
-        code = codes.USAGE
-    except KeyboardInterrupt:
-        tell_fault("interrupted")
-        code = codes.INTERRUPTED
-    except OSError as error:
-        _let_go_of_output()
-        where = f"{error.filename}: " if error.filename else "the output cannot be written: "
-        tell_fault(f"{where}{error.strerror or error}")
-        code = codes.UNDECIDED
-    except MemoryError:
-        tell_fault("the memory of this machine does not suffice")
-        code = codes.UNDECIDED
-    except InternalError as error:
-        code = _own_fault(error)
-    except CertifyError as error:
-        tell_fault(f"{error}")
-        code = codes.UNDECIDED
-    except Exception as error:  # noqa: BLE001 - a crash must not look like a verdict
-        code = _own_fault(error)
+    except (KeyboardInterrupt, Exception) as error:  # noqa: BLE001 - a crash must not look like a verdict
+        code, sentence = _end(error)
+        if isinstance(error, OSError):
+            _let_go_of_output()
+        tell_fault(sentence)
     return code
+
+
+def _end(error: BaseException) -> tuple[int, str]:
+    """Return the exit code and the sentence for an error that nobody has caught."""
+    match error:
+        case click.UsageError():
+            command = error.ctx.command_path if error.ctx else "certify"
+            return codes.USAGE, f"{error.format_message()} ({command} --help says more.)"
+        case BadInput() | LimitReached():
+            return codes.UNDECIDED, str(error)
+        case OSError():
+            return codes.UNDECIDED, f"{error.filename or 'the output cannot be written'}: {error.strerror or error}"
+        case MemoryError():
+            return codes.UNDECIDED, "the memory of this machine does not suffice"
+        case KeyboardInterrupt():
+            return codes.INTERRUPTED, "interrupted"
+        case _:
+            last = extract_tb(error.__traceback__)[-1]
+            place = f"{type(error).__name__} in {Path(last.filename).name}, line {last.lineno}"
+            what = f"internal error, no verdict ({place}: {error})"
+            return codes.INTERNAL, f"{what}; please report it, with what you gave to certify"
 
 
 def _speak_utf8() -> None:
@@ -119,10 +123,3 @@ def _let_go_of_output() -> None:
     """Send what is left to print nowhere: the output is full or closed, and Python would fail again at its end."""
     with suppress(OSError):
         os.dup2(os.open(os.devnull, os.O_WRONLY), sys.stdout.fileno())
-
-
-def _own_fault(error: Exception) -> int:
-    last = extract_tb(error.__traceback__)[-1]
-    place = f"{type(error).__name__} in {Path(last.filename).name}, line {last.lineno}"
-    tell_fault(f"internal error, no verdict ({place}: {error}); please report it, with what you gave to certify")
-    return codes.INTERNAL

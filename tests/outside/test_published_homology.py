@@ -168,7 +168,7 @@ def _nested_sets(graph: nx.Graph[Hashable]) -> SimplicialComplex:
         for tube in combinations(nodes, size)
         if nx.is_connected(graph.subgraph(tube))
     ]
-    fits: nx.Graph[int] = nx.Graph()
+    fits: nx.Graph[Hashable] = nx.Graph()
     fits.add_nodes_from(range(len(tubes)))
     for (i, a), (j, b) in combinations(enumerate(tubes), 2):
         apart = not a & b and not nx.is_connected(graph.subgraph(a | b))
