@@ -202,7 +202,8 @@ def _claim(table: Table, complexes: Mapping[str, SimplicialComplex]) -> NamedCla
         raise table.fault("kind", expected=f"one of the claim kinds {', '.join(KINDS)}", found=shown(kind))
     table.only((*_COMMON, *KINDS[kind].keys))
     prose = {key: table.text(key) for key in ("title", "source") if key in table.values}
-    return NamedClaim.of(name, table.text("complex"), KINDS[kind].read(table, complexes), prose)
+    claim = KINDS[kind].read(table, complexes)
+    return NamedClaim.of(name, table.text("complex"), claim, prose)
 
 
 # -- lines --------------------------------------------------------------------------------------
@@ -250,7 +251,8 @@ def line_of(text: str, keys: Keys) -> int:
 def _prefix(lines: list[str], number: int) -> dict[str, object] | None:
     """Return what the first lines say, or None where they end within a value."""
     text = "\n".join(lines[:number])
-    for ending in ("", "]", "]]"):
+    # On a line of its own, because the last line may end in a comment.
+    for ending in ("", "\n]", "\n]]"):
         try:
             return tomllib.loads(text + ending)
         except tomllib.TOMLDecodeError:

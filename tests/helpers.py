@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import json
+import warnings
 from argparse import Namespace
 from collections import Counter
 from collections.abc import Iterable, Mapping, Sequence
@@ -65,7 +66,10 @@ def limits() -> Namespace:
 
 def examined(path: Path) -> dict[str, Any]:
     """Return the report of the verifier on a file."""
-    report: dict[str, Any] = verifier().examine(str(path), limits())
+    with warnings.catch_warnings():
+        # The verifier runs in a process of its own, and leaves it to the end of the process to close its files.
+        warnings.simplefilter("ignore", ResourceWarning)
+        report: dict[str, Any] = verifier().examine(str(path), limits())
     return report
 
 

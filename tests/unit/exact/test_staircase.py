@@ -4,13 +4,14 @@ import pytest
 
 from certify.errors import InternalError
 from certify.exact import Entries, Group
-from certify.exact.staircase import NATURAL, Layout, arrange
+from certify.exact.staircase import Layout, arrange, is_natural
 
 Family = list[tuple[Entries, int]]
 
 
 def test_nothing_to_arrange() -> None:
-    assert arrange(0, []) == NATURAL == Layout(None, ())
+    assert is_natural([])
+    assert arrange(0, []) == Layout((), ())
 
 
 @pytest.mark.parametrize(
@@ -22,7 +23,21 @@ def test_nothing_to_arrange() -> None:
     ],
 )
 def test_vectors_that_end_in_a_unit_need_no_order(family: Family) -> None:
-    assert arrange(len(family), family) == NATURAL
+    """The natural order is from the largest cell down, and writing it out gives the same."""
+    assert is_natural(family)
+    assert arrange(len(family), family) == Layout(tuple(reversed(range(len(family)))), ())
+
+
+@pytest.mark.parametrize(
+    "family",
+    [
+        [(((0, 2),), 0)],
+        [(((0, 1), (1, 2)), 1)],
+        [(((0, 1), (1, 1)), 0)],
+    ],
+)
+def test_vectors_that_do_not_end_in_a_unit_at_home(family: Family) -> None:
+    assert not is_natural(family)
 
 
 def test_a_vector_that_leads_with_a_smaller_cell_gives_an_order() -> None:
@@ -34,9 +49,7 @@ def test_a_vector_that_leads_with_a_smaller_cell_gives_an_order() -> None:
 def test_cells_without_a_relation_stand_from_the_largest_down() -> None:
     """The order is 0 before 2, and otherwise from the largest cell down."""
     family: Family = [(((0, 1), (2, 1)), 0), (((1, 1),), 1), (((2, 1),), 2), (((3, -1),), 3)]
-    order = arrange(4, family).order
-    assert order is not None
-    assert order == (3, 1, 0, 2)
+    assert arrange(4, family).order == (3, 1, 0, 2)
 
 
 def test_cells_that_must_be_leads_together() -> None:
@@ -58,9 +71,9 @@ def test_overlapping_classes_are_joined_and_others_left_alone() -> None:
 
 
 def test_a_circle_of_relations_becomes_a_group() -> None:
-    """(1, 1) at home in 0 and (1, 2) at home in 1 each need the other's cell."""
+    """(1, 1) at home in 0 and (1, 2) at home in 1 each need the other's cell. Rows are the cells 1, 0: (1, 2), (1, 1)."""
     family: Family = [(((0, 1), (1, 1)), 0), (((0, 1), (1, 2)), 1)]
-    assert arrange(2, family) == Layout((1, 0), (Group((1, 0), [[1, -1], [-1, 2]]),))
+    assert arrange(2, family) == Layout((1, 0), (Group((1, 0), [[-1, 2], [1, -1]]),))
 
 
 @pytest.mark.parametrize(

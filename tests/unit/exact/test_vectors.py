@@ -35,7 +35,7 @@ def test_adding_a_multiple_does_not_change_the_other_vector() -> None:
 
 def test_combinations() -> None:
     assert combination([]) == {}
-    assert combination([(2, ((0, 1), (1, 3))), (-3, ((1, 2),)), (0, ((7, 1),))]) == {0: 2, 1: -3}
+    assert combination([(2, ((0, 1), (1, 3), (2, 3))), (-3, ((1, 3), (2, 2))), (0, ((7, 1),))]) == {0: 2, 1: -3}
     assert combination([(HUGE, ((0, HUGE),)), (-1, ((0, HUGE**2 - 1),))]) == {0: 1}
 
 
