@@ -2,21 +2,29 @@
 
 from __future__ import annotations
 
+from itertools import combinations
+
+import networkx as nx
 from hypothesis import strategies as st
 
 from certify.exact import AbelianGroup, BasedComplex
 from certify.products import DiscPair, PolyhedralProduct
-from certify.simplicial import FAMILIES, Label, SimplicialComplex, build, face_of, join
+from certify.simplicial import Label, SimplicialComplex, build, face_of, join
 
 __all__ = [
     "based_complexes",
     "complexes",
     "complexes_with_face",
+    "complexes_with_large_face",
+    "complexes_with_multiplicities",
+    "complexes_with_parts",
     "complexes_with_torsion",
     "complexes_with_vertices",
+    "connected_graphs",
     "cyclic_orders",
     "disc_products",
     "disc_products_with_torsion",
+    "graphs",
     "integer_matrices",
     "products_with_degrees",
     "relabelled_products",
@@ -56,6 +64,53 @@ def complexes_with_vertices(draw: st.DrawFn, max_vertices: int = 6) -> tuple[Sim
     k = draw(complexes(max_vertices))
     chosen = draw(st.permutations(k.labels))
     return k, list(chosen[: draw(st.integers(0, len(chosen)))])
+
+
+@st.composite
+def complexes_with_large_face(draw: st.DrawFn, max_vertices: int = 6) -> tuple[SimplicialComplex, list[Label]]:
+    """Draw a complex and the labels of a face with at least two vertices."""
+    k = draw(complexes(max_vertices - 2))
+    chosen = face_of(draw(st.integers(1, 2**max_vertices - 1)) | 0b11)
+    labels = range(1, max(k.vertex_count, chosen[-1] + 1) + 1)
+    return SimplicialComplex.from_faces(labels, [*k.facets, chosen]), [vertex + 1 for vertex in chosen]
+
+
+@st.composite
+def complexes_with_multiplicities(draw: st.DrawFn, max_vertices: int = 4) -> tuple[SimplicialComplex, list[int]]:
+    """Draw a complex and a whole number from 1 to 3 for each of its vertices."""
+    k = draw(complexes(max_vertices))
+    return k, draw(st.lists(st.integers(1, 3), min_size=k.vertex_count, max_size=k.vertex_count))
+
+
+@st.composite
+def complexes_with_parts(draw: st.DrawFn, max_vertices: int = 3) -> tuple[SimplicialComplex, list[SimplicialComplex]]:
+    """Draw a complex and another one for each of its vertices."""
+    k = draw(complexes(max_vertices))
+    return k, draw(st.lists(complexes(max_vertices), min_size=k.vertex_count, max_size=k.vertex_count))
+
+
+# -- graphs -------------------------------------------------------------------------------------
+
+
+@st.composite
+def graphs(draw: st.DrawFn, max_nodes: int = 7) -> nx.Graph[int]:
+    """Draw a graph on nodes 1, ..., n in any order, perhaps without nodes or edges."""
+    nodes = draw(st.permutations(range(1, draw(st.integers(0, max_nodes)) + 1)))
+    graph: nx.Graph[int] = nx.Graph()
+    graph.add_nodes_from(nodes)
+    graph.add_edges_from(pair for pair in combinations(nodes, 2) if draw(st.booleans()))
+    return graph
+
+
+@st.composite
+def connected_graphs(draw: st.DrawFn, max_nodes: int = 5) -> nx.Graph[int]:
+    """Draw a connected graph on nodes 1, ..., n, at least one of them: a tree with more edges."""
+    n = draw(st.integers(1, max_nodes))
+    graph: nx.Graph[int] = nx.Graph()
+    graph.add_nodes_from(range(1, n + 1))
+    graph.add_edges_from((draw(st.integers(1, node - 1)), node) for node in range(2, n + 1))
+    graph.add_edges_from(pair for pair in combinations(range(1, n + 1), 2) if draw(st.booleans()))
+    return graph
 
 
 # -- abelian groups and integer matrices --------------------------------------------------------
@@ -195,21 +250,13 @@ def disc_products_with_torsion(draw: st.DrawFn, max_n: int = 3) -> PolyhedralPro
 @st.composite
 def spheres(draw: st.DrawFn) -> SimplicialComplex:
     """Draw a complex on at most 8 vertices that triangulates a sphere; the empty one is the sphere of dimension -1."""
-    family = st.sampled_from(
-        [("simplex-boundary", m, 0) for m in range(1, 6)]
-        + [("polygon", n, 0) for n in range(3, 8)]
-        + [("cross-polytope", n, 0) for n in range(4)]
-        + [("cyclic-polytope", m, d) for d in range(2, 5) for m in range(d + 1, 9)]
-    )
-    k = _member(*draw(family))
-    if k.vertex_count < 4 and draw(st.booleans()):
-        return join(k, _member("simplex-boundary", draw(st.integers(1, 4)), 0))
-    return k
-
-
-def _member(name: str, size: int, dimension: int) -> SimplicialComplex:
-    parameters = FAMILIES[name].parameters
-    return build(name, **dict(zip(parameters, (size, dimension), strict=False)))
+    boundaries = [build("simplex-boundary", m=m) for m in range(1, 6)]
+    polygons = [build("polygon", n=n) for n in range(3, 8)]
+    cross_polytopes = [build("cross-polytope", n=n) for n in range(4)]
+    cyclic_polytopes = [build("cyclic-polytope", m=m, d=d) for d in range(2, 5) for m in range(d + 1, 9)]
+    k = draw(st.sampled_from(boundaries + polygons + cross_polytopes + cyclic_polytopes))
+    small = k.vertex_count < 4
+    return join(k, draw(st.sampled_from(boundaries[:4]))) if small and draw(st.booleans()) else k
 
 
 def _with_pairs(k: SimplicialComplex, max_n: int) -> st.SearchStrategy[PolyhedralProduct]:

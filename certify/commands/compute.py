@@ -11,7 +11,7 @@ from typing import TYPE_CHECKING, Literal
 import click
 
 from certify.commands import codes
-from certify.commands.prove import JOBS
+from certify.commands.options import JOBS, JSON, PATH
 from certify.commands.terminal import counted, printable, progress
 from certify.errors import BadInput
 
@@ -47,7 +47,7 @@ def _degrees(context: click.Context, option: click.Parameter, value: str | None)
 
 
 @click.command(help=_HELP, epilog=_EPILOG)
-@click.argument("file", required=False, type=click.Path(path_type=Path))
+@click.argument("file", required=False, type=PATH)
 @click.option("--facets", metavar="TEXT", help='Facets like "1 2; 2 3", instead of FILE.')
 @click.option(
     "--pair",
@@ -65,11 +65,9 @@ def _degrees(context: click.Context, option: click.Parameter, value: str | None)
     show_default=True,
     help="Work with the blocks of the stable splitting, or with the cells of the whole product.",
 )
-@click.option(
-    "--certificate", type=click.Path(path_type=Path), metavar="FILE", help="Write a certificate too, NAME.cert.jsonl."
-)
+@click.option("--certificate", type=PATH, metavar="FILE", help="Write a certificate too, NAME.cert.jsonl.")
 @JOBS
-@click.option("--json", "as_json", is_flag=True, help="Print one JSON object instead of text.")
+@JSON
 def compute(
     file: Path | None,
     facets: str | None,
@@ -119,11 +117,22 @@ def _complex(file: Path | None, facets: str | None) -> SimplicialComplex:
     from certify.simplicial import read_complex_file, read_facets
 
     if file is not None and facets is None:
-        return read_complex_file(file)
+        k = read_complex_file(file)
+        _require_text(k, str(file))
+        return k
     if facets is None or file is not None:
         raise click.UsageError("Give either --facets or FILE.", click.get_current_context())
     with _blaming("--facets"):
-        return read_facets(facets)
+        k = read_facets(facets)
+        _require_text(k, "the vertices")
+        return k
+
+
+def _require_text(k: SimplicialComplex, where: str) -> None:
+    """Refuse labels that UTF-8 cannot write, so that certificates can: JSON and command lines may hold such ones."""
+    for label in map(str, k.labels):
+        if label.encode("utf-8", "replace").decode() != label:
+            raise BadInput(where=where, expected="labels that are text", found=ascii(label))
 
 
 @contextmanager

@@ -9,7 +9,8 @@ from pathlib import Path
 import click
 
 from certify.commands import codes
-from certify.commands.prove import JOBS, outcomes, say_outcomes
+from certify.commands.options import JOBS, PATH
+from certify.commands.prove import outcomes, say_outcomes
 from certify.commands.terminal import printable, say_row
 from certify.commands.verify import run_verifier
 from certify.errors import BadInput
@@ -26,7 +27,7 @@ sheet, which explains itself, and the certificates. A sheet that you have change
 @click.command(help=_HELP)
 @click.option(
     "--out",
-    type=click.Path(path_type=Path),
+    type=PATH,
     default=Path("certify-demo"),
     metavar="DIR",
     show_default=True,
@@ -75,7 +76,7 @@ def _head(text: str) -> None:
 
 
 def _explain(sheet: Path, certificates: Path) -> None:
-    shown, folder = shlex.quote(str(sheet)), shlex.quote(str(certificates))
+    shown, folder = (printable(shlex.quote(str(path))) for path in (sheet, certificates))
     _head("What the files are for")
     rows = {
         "sheet": [str(sheet), "Your claims: you write and keep it. Its comments explain how."],
@@ -86,13 +87,13 @@ def _explain(sheet: Path, certificates: Path) -> None:
         "fingerprint": ["It belongs to one statement and no other: you print it beside the theorem."],
         "verifier": [
             str(files("certify") / "verifier.py"),
-            "The one file that a referee runs, and may read: it needs nothing but Python.",
+            "The one file that a referee runs, and may read: python3 -I -S verifier.py certificates",
         ],
     }
     for name, lines in rows.items():
         say_row(name, lines, list(rows))
     _head("What to do next")
-    click.echo(f"Read {sheet}, change Z^34 in it to Z^35, and see how a false claim ends:\n")
+    click.echo(f"Read {printable(str(sheet))}, change Z^34 in it to Z^35, and see how a false claim ends:\n")
     click.echo(f"    certify prove {shown}\n")
     click.echo("Change a digit in a certificate, and see what a referee would be told:\n")
     click.echo(f"    certify verify {folder}")

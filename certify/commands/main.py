@@ -16,10 +16,10 @@ from certify import __version__
 from certify.commands import codes
 from certify.commands.compute import compute
 from certify.commands.demo import demo
+from certify.commands.faults import OUTSIDE, sentence_of
 from certify.commands.prove import prove
 from certify.commands.terminal import tell_fault
 from certify.commands.verify import verify
-from certify.errors import BadInput, LimitReached
 
 __all__ = ["cli", "main"]
 
@@ -97,14 +97,10 @@ def _end(error: BaseException) -> tuple[int, str]:
         case click.UsageError():
             command = error.ctx.command_path if error.ctx else "certify"
             return codes.USAGE, f"{error.format_message()} ({command} --help says more.)"
-        case BadInput() | LimitReached():
-            return codes.UNDECIDED, str(error)
-        case OSError():
-            return codes.UNDECIDED, f"{error.filename or 'the output cannot be written'}: {error.strerror or error}"
-        case MemoryError():
-            return codes.UNDECIDED, "the memory of this machine does not suffice"
         case KeyboardInterrupt():
             return codes.INTERRUPTED, "interrupted"
+        case _ if isinstance(error, OUTSIDE):
+            return codes.UNDECIDED, sentence_of(error)
         case _:
             last = extract_tb(error.__traceback__)[-1]
             place = f"{type(error).__name__} in {Path(last.filename).name}, line {last.lineno}"
@@ -122,4 +118,6 @@ def _speak_utf8() -> None:
 def _let_go_of_output() -> None:
     """Send what is left to print nowhere: the output is full or closed, and Python would fail again at its end."""
     with suppress(OSError):
-        os.dup2(os.open(os.devnull, os.O_WRONLY), sys.stdout.fileno())
+        nowhere = os.open(os.devnull, os.O_WRONLY)
+        os.dup2(nowhere, sys.stdout.fileno())
+        os.close(nowhere)

@@ -11,14 +11,16 @@ from typing import TYPE_CHECKING, Any, Literal
 import click
 
 from certify.commands import codes
+from certify.commands.faults import OUTSIDE, sentence_of
+from certify.commands.options import JOBS, JSON, PATH
 from certify.commands.terminal import counted, printable, progress, say_row, tell_fault
-from certify.errors import BadInput, ClaimIsFalse, LimitReached
+from certify.errors import BadInput, ClaimIsFalse
 
 if TYPE_CHECKING:
     from certify.exact import AbelianGroup
     from certify.sheet import NamedClaim, Sheet
 
-__all__ = ["JOBS", "Outcome", "outcomes", "prove", "say_outcomes"]
+__all__ = ["Outcome", "outcomes", "prove", "say_outcomes"]
 
 _HELP = """Prove the claims of a sheet, and write their certificates.
 
@@ -46,15 +48,6 @@ _EPILOG = """A sheet is a TOML file. The smallest one:
 """
 
 _CODE = {"proved": codes.DONE, "false": codes.REFUSED, "undecided": codes.UNDECIDED}
-
-JOBS = click.option(
-    "--jobs",
-    metavar="N",
-    type=click.IntRange(min=1),
-    default=1,
-    show_default=True,
-    help="Compute in N processes; the certificates are the same.",
-)
 
 
 @dataclass(frozen=True, slots=True)
@@ -90,17 +83,17 @@ class Outcome:
 
 
 @click.command(help=_HELP, epilog=_EPILOG)
-@click.argument("sheet", type=click.Path(path_type=Path))
+@click.argument("sheet", type=PATH)
 @click.option(
     "--out",
     metavar="DIR",
-    type=click.Path(path_type=Path),
+    type=PATH,
     show_default="certificates, beside SHEET",
     help="The folder for the certificates.",
 )
 @JOBS
 @click.option("--gzip", "packed", is_flag=True, help="Write compressed certificates (*.cert.jsonl.gz).")
-@click.option("--json", "as_json", is_flag=True, help="Print one JSON object instead of text.")
+@JSON
 def prove(sheet: Path, out: Path | None, jobs: int, packed: bool, as_json: bool) -> int:
     """Read the sheet, prove its claims, and say what came of them."""
     from certify.commands.results import say_json
@@ -119,7 +112,7 @@ def prove(sheet: Path, out: Path | None, jobs: int, packed: bool, as_json: bool)
 
 
 def outcomes(sheet: Sheet, folder: Path, *, jobs: int, packed: bool = False) -> Iterator[Outcome]:
-    """Prove the claims of a sheet one after the other, and yield what became of each; faults are told at once.
+    """Return what becomes of each claim of a sheet, one after the other as they are proved; faults are told at once.
 
     Raises
     ------
@@ -127,18 +120,22 @@ def outcomes(sheet: Sheet, folder: Path, *, jobs: int, packed: bool = False) -> 
         If the folder cannot hold files; this is looked at before the work starts.
     """
     _require_folder(folder)
-    for item in sheet.claims:
-        outcome = _outcome(item, folder, jobs, packed)
-        if outcome.verdict == "undecided":
-            tell_fault(f"claim {item.id}: {outcome.sentence}")
-        yield outcome
+    return (_outcome(item, folder, jobs, packed) for item in sheet.claims)
 
 
 def _outcome(item: NamedClaim, folder: Path, jobs: int, packed: bool) -> Outcome:
-    from certify.certificate import Spool, certificate_name
+    from certify.certificate import certificate_name
+
+    outcome = _attempt(item, folder / certificate_name(item.id, packed=packed), jobs)
+    if outcome.verdict == "undecided":
+        tell_fault(f"claim {item.id}: {outcome.sentence}")
+    return outcome
+
+
+def _attempt(item: NamedClaim, path: Path, jobs: int) -> Outcome:
+    from certify.certificate import Spool
     from certify.claims import prove as prove_claim
 
-    path = folder / certificate_name(item.id, packed=packed)
     try:
         with progress(item.id) as report, Spool() as spool:
             proof = prove_claim(item.claim, spool, jobs=jobs, progress=report)
@@ -146,13 +143,8 @@ def _outcome(item: NamedClaim, folder: Path, jobs: int, packed: bool) -> Outcome
         return Outcome(item, path, "proved", "", proof.groups, size, proof.fingerprint)
     except ClaimIsFalse as fault:
         return Outcome(item, path, "false", str(fault))
-    except (BadInput, LimitReached) as fault:
-        return Outcome(item, path, "undecided", str(fault))
-    except OSError as error:
-        # The records wait in a temporary file, and that disk may be full too.
-        return Outcome(item, path, "undecided", f"the system refused to go on: {error.strerror or error}")
-    except MemoryError:
-        return Outcome(item, path, "undecided", "the memory of this machine does not suffice")
+    except OUTSIDE as error:
+        return Outcome(item, path, "undecided", sentence_of(error))
 
 
 def _require_folder(folder: Path) -> None:

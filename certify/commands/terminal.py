@@ -128,8 +128,8 @@ class _Bar:
             redirect_stderr=False,
         )
         bar.add_task(self._what, total=None)
-        bar.start()
         self._shown = bar
+        bar.start()
 
     def advance(self, done: int, whole: int) -> None:
         """Take note of the work that is done; a whole of one step shows movement and no share."""

@@ -12,6 +12,7 @@ from importlib.resources import as_file, files
 import click
 
 from certify.commands import codes
+from certify.commands.options import JSON
 from certify.commands.terminal import tell_fault
 
 __all__ = ["run_verifier", "verify"]
@@ -33,7 +34,7 @@ _VERDICTS = {codes.DONE, codes.REFUSED, codes.USAGE, codes.UNDECIDED, codes.INTE
 
 @click.command(help=_HELP)
 @click.argument("paths", metavar="PATH...", nargs=-1, required=True)
-@click.option("--json", "as_json", is_flag=True, help="Print one JSON object instead of text.")
+@JSON
 @click.option(
     "--max-bytes", metavar="N", type=click.IntRange(min=1), help="Give up on a file of more bytes, decompressed."
 )

@@ -2,21 +2,16 @@
 
 from __future__ import annotations
 
-from collections.abc import Hashable, Iterable, Mapping, Sequence
+from collections.abc import Iterable, Mapping, Sequence
 from dataclasses import dataclass
 from itertools import chain
 from math import comb
-from typing import TypeVar
 
 from certify.errors import BadInput
+from certify.simplicial.arguments import Label, check_known, distinct_labels, items, natural_order
 from certify.simplicial.masks import Face, face_of, levels, mask_of, maximal, minimal_non_faces
 
-__all__ = ["Face", "Label", "SimplicialComplex", "distinct_labels"]
-
-Label = Hashable
-"""What a person calls a vertex: any hashable value except a truth value."""
-
-_Item = TypeVar("_Item")
+__all__ = ["Face", "Label", "SimplicialComplex"]
 
 
 @dataclass(frozen=True, slots=True)
@@ -75,8 +70,10 @@ class SimplicialComplex:
         >>> SimplicialComplex.from_facets([[]])
         SimplicialComplex(labels=(), facets=((),))
         """
-        given = [distinct_labels(facet, f"facet {n}") for n, facet in enumerate(_items(facets, "facets"), start=1)]
-        labels = _natural_order(given) if vertices is None else distinct_labels(vertices, "vertices")
+        given = [distinct_labels(facet, f"facet {n}") for n, facet in enumerate(items(facets, "facets"), start=1)]
+        labels = (
+            natural_order(chain.from_iterable(given)) if vertices is None else distinct_labels(vertices, "vertices")
+        )
         number = {label: i for i, label in enumerate(labels)}
         return cls.from_faces(labels, [_numbers(facet, number, f"facet {n}") for n, facet in enumerate(given, start=1)])
 
@@ -243,69 +240,7 @@ class SimplicialComplex:
         return f"{count}, facets {facets}" + (f", ghosts {ghosts}" if ghosts else "")
 
 
-def distinct_labels(labels: Iterable[Label], where: str) -> tuple[Label, ...]:
-    """Return a list of distinct labels as a tuple, in the order given.
-
-    Parameters
-    ----------
-    labels : iterable of labels
-        A facet, or any other set of vertices.
-    where : str
-        How a message names the list, for example ``"facet 3"``.
-
-    Raises
-    ------
-    BadInput
-        If it is a string or no list at all, or has a label twice, a truth value, or something that cannot be
-        hashed.
-
-    Examples
-    --------
-    >>> distinct_labels([2, "a"], "facet 3")
-    (2, 'a')
-    >>> distinct_labels("ab", "facet 3")
-    Traceback (most recent call last):
-    certify.errors.BadInput: facet 3: expected a list, found 'ab'
-    """
-    seen: dict[Label, None] = {}
-    for label in _items(labels, where):
-        # A truth value equals 0 or 1, so it would silently be taken for the vertex of that name.
-        if isinstance(label, bool) or not _is_hashable(label):
-            raise BadInput(where=where, expected="numbers or names as labels", found=repr(label))
-        if label in seen:
-            raise BadInput(where=where, expected="each vertex once", found=f"vertex {label!r} twice")
-        seen[label] = None
-    return tuple(seen)
-
-
-def _items(given: Iterable[_Item], where: str) -> Iterable[_Item]:
-    """Return what was given if it is a list of some kind; a string is one name and no list of letters."""
-    if isinstance(given, str | bytes) or not isinstance(given, Iterable):
-        raise BadInput(where=where, expected="a list", found=repr(given))
-    return given
-
-
-def _is_hashable(label: object) -> bool:
-    try:
-        hash(label)
-    except TypeError:
-        return False
-    return True
-
-
-def _numbers(facet: Iterable[Label], number: Mapping[Label, int], where: str) -> list[int]:
+def _numbers(facet: Sequence[Label], number: Mapping[Label, int], where: str) -> list[int]:
     """Return the numbers of the given vertices, in the order given."""
-    for label in facet:
-        if label not in number:
-            raise BadInput(where=where, expected="vertices of the complex", found=f"vertex {label!r}, which is none")
+    check_known(facet, number, where)
     return [number[label] for label in facet]
-
-
-def _natural_order(facets: Iterable[tuple[Label, ...]]) -> tuple[Label, ...]:
-    """Return the labels used: sorted if all are numbers or all are strings, else by first appearance."""
-    labels = tuple(dict.fromkeys(chain.from_iterable(facets)))
-    numbers = [label for label in labels if isinstance(label, int)]
-    names = [label for label in labels if isinstance(label, str)]
-    if len(numbers) == len(labels):
-        return tuple(sorted(numbers))
-    return tuple(sorted(names)) if len(names) == len(labels) else labels

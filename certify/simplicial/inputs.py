@@ -6,12 +6,27 @@ import json
 import re
 import tomllib
 from collections.abc import Callable, Iterable, Iterator, Mapping
+from contextlib import contextmanager
 from pathlib import Path
+from typing import TypeVar
 
 from certify.errors import BadInput
-from certify.simplicial.complexes import Label, SimplicialComplex, distinct_labels
+from certify.simplicial.arguments import Label, distinct_labels
+from certify.simplicial.complexes import SimplicialComplex
+from certify.tables import KeyFault, Keys, Table
 
-__all__ = ["complex_from_table", "read_complex_file", "read_facets"]
+__all__ = [
+    "complex_from_table",
+    "label_of",
+    "pieces_of",
+    "placed",
+    "plain_labels",
+    "read_by_ending",
+    "read_complex_file",
+    "read_facets",
+]
+
+_Read = TypeVar("_Read")
 
 # Longer runs of digits stay names: nobody numbers vertices so, and Python refuses to read very long ones.
 _NUMBER = re.compile(r"-?[0-9]{1,15}")
@@ -43,7 +58,7 @@ def read_facets(text: str) -> SimplicialComplex:
     certify.errors.BadInput: line 1, facet 2: expected each vertex once, found vertex 3 twice
     """
     # The facets are checked here first, so that a message can name the line.
-    return SimplicialComplex.from_facets([distinct_labels(facet, where) for where, facet in _facets_in(text)])
+    return SimplicialComplex.from_facets([_facet_of(piece, where) for where, piece in pieces_of(text, "facet")])
 
 
 def complex_from_table(table: Mapping[str, object]) -> SimplicialComplex:
@@ -70,8 +85,8 @@ def complex_from_table(table: Mapping[str, object]) -> SimplicialComplex:
             raise BadInput(where=f"key {key}", expected="only the keys facets and vertices", found="another key")
     if "facets" not in table:
         raise BadInput(where="key facets", expected="a list of facets", found="no such key")
-    facets = [_plain_labels(facet, f"facet {n}") for n, facet in enumerate(_a_list(table["facets"], "facets"), start=1)]
-    vertices = _plain_labels(table["vertices"], "vertices") if "vertices" in table else None
+    facets = [plain_labels(facet, f"facet {n}") for n, facet in enumerate(_a_list(table["facets"], "facets"), start=1)]
+    vertices = plain_labels(table["vertices"], "vertices") if "vertices" in table else None
     return SimplicialComplex.from_facets(facets, vertices)
 
 
@@ -90,14 +105,81 @@ def read_complex_file(path: str | Path) -> SimplicialComplex:
         If the file cannot be read, its name has another ending, or what it holds is no complex; the message
         starts with the path, and names the line or the key.
     """
+    return read_by_ending(path, _READERS)
+
+
+def read_by_ending(path: str | Path, readers: Mapping[str, Callable[[str], _Read]]) -> _Read:
+    """Return what one of the readers makes of the text in a UTF-8 file.
+
+    Parameters
+    ----------
+    path : str or Path
+        The file.
+    readers : mapping
+        At least two readers, by the ending of the file's name in small letters.
+
+    Raises
+    ------
+    BadInput
+        If there is no reader for the name, the file cannot be read, or the reader finds a fault; the message starts
+        with the path.
+    """
     path = Path(path)
-    reader = _READERS.get(path.suffix.lower())
+    reader = readers.get(path.suffix.lower())
     if reader is None:
-        raise BadInput(where=str(path), expected="a file name ending in .txt, .json or .toml", found="another ending")
+        *endings, last = readers
+        expected = f"a file name ending in {', '.join(endings)} or {last}"
+        raise BadInput(where=str(path), expected=expected, found="another ending")
     try:
         return reader(_text_of(path))
     except BadInput as fault:
         raise fault.inside(str(path)) from None
+
+
+def plain_labels(value: object, where: str) -> list[Label]:
+    """Return a list of labels as files and sheets may hold them: whole numbers and strings.
+
+    Raises
+    ------
+    BadInput
+        If it is no list, or holds something else; `where` is its place.
+    """
+    labels: list[Label] = []
+    for label in _a_list(value, where):
+        if isinstance(label, bool) or not isinstance(label, int | str):
+            raise BadInput(where=where, expected="whole numbers or strings as labels", found=repr(label))
+        labels.append(label)
+    return labels
+
+
+@contextmanager
+def placed(table: Table, key: str, item: str = "") -> Iterator[None]:
+    """Give a fault that is found below, where tables are unknown, its place in the table.
+
+    Parameters
+    ----------
+    table : Table
+        The table that is read.
+    key : str
+        The key under which the fault lies, unless it says better.
+    item : str
+        What faults call an item of the list under the key, for example ``"facet"``.
+
+    Notes
+    -----
+    By a convention of this room, a fault's `where` ends in ``facet 3`` for the third facet, and in ``n`` or
+    ``argument n`` when it lies in the argument n.
+    """
+    try:
+        yield
+    except KeyFault:
+        raise
+    except BadInput as fault:
+        name, _, last = fault.where.rpartition(", ")[2].rpartition(" ")
+        keys: Keys = (last,) if last in table.values else (key,)
+        if name == item and last.isdecimal():
+            keys = (key, int(last) - 1)
+        raise table.fault(*keys, expected=fault.expected, found=fault.found) from fault
 
 
 def _text_of(path: Path) -> str:
@@ -110,38 +192,51 @@ def _text_of(path: Path) -> str:
         raise BadInput(where="file", expected="UTF-8 text", found=f"other bytes at position {fault.start}") from fault
 
 
-def _facets_in(text: str) -> Iterator[tuple[str, list[Label]]]:
-    """Yield each facet with its place; empty lines and empty pieces between semicolons are no facets."""
+def pieces_of(text: str, item: str) -> Iterator[tuple[str, str]]:
+    """Yield what stands between semicolons, line ends and comments, with its place; what is blank is passed over.
+
+    Parameters
+    ----------
+    text : str
+        A list of items in plain text, with comments from ``#`` to the end of the line.
+    item : str
+        What a message calls an item.
+
+    Examples
+    --------
+    >>> list(pieces_of("1 2;; 2 3 # left", "facet"))
+    [('line 1, facet 1', '1 2'), ('line 1, facet 2', ' 2 3 ')]
+    """
     number = 0
     for line_number, line in enumerate(text.splitlines(), start=1):
         for piece in line.partition("#")[0].split(";"):
-            tokens = piece.replace(",", " ").split()
-            if tokens:
+            if piece.strip():
                 number += 1
-                where = f"line {line_number}, facet {number}"
-                yield where, [] if tokens == ["{}"] else [_label(token, where) for token in tokens]
+                yield f"line {line_number}, {item} {number}", piece
 
 
-def _label(token: str, where: str) -> Label:
+def label_of(token: str, where: str) -> Label:
+    """Return the label that a word of plain text stands for: a number if it is one, otherwise the word itself.
+
+    Raises
+    ------
+    BadInput
+        If there is a bracket or a brace in it.
+    """
     if re.search(r"[][(){}]", token):
         raise BadInput(where=where, expected="labels without brackets, as in 1 2; 2 3", found=token)
     return int(token) if _NUMBER.fullmatch(token) else token
+
+
+def _facet_of(piece: str, where: str) -> tuple[Label, ...]:
+    tokens = piece.replace(",", " ").split()
+    return () if tokens == ["{}"] else distinct_labels([label_of(token, where) for token in tokens], where)
 
 
 def _a_list(value: object, where: str) -> list[object]:
     if not isinstance(value, list):
         raise BadInput(where=where, expected="a list", found=repr(value))
     return value
-
-
-def _plain_labels(value: object, where: str) -> list[Label]:
-    """Return a list of labels as files may hold them: whole numbers and strings."""
-    labels: list[Label] = []
-    for label in _a_list(value, where):
-        if isinstance(label, bool) or not isinstance(label, int | str):
-            raise BadInput(where=where, expected="whole numbers or strings as labels", found=repr(label))
-        labels.append(label)
-    return labels
 
 
 def _from_json(text: str) -> SimplicialComplex:

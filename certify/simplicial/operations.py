@@ -1,4 +1,4 @@
-"""New complexes from old: joins, unions, full subcomplexes, links, skeleta and the Alexander dual.
+"""New complexes from old: joins, unions and sums, full subcomplexes, links, skeleta and the Alexander dual.
 
 Ghost vertices are never dropped on the way. A polyhedral product sees them, and the results below are the
 complexes that occur in statements about polyhedral products as they stand.
@@ -6,14 +6,17 @@ complexes that occur in statements about polyhedral products as they stand.
 
 from __future__ import annotations
 
-from collections.abc import Iterable
+from collections.abc import Iterable, Iterator, Sequence
+from itertools import chain, product
 
 from certify.errors import BadInput
-from certify.simplicial.complexes import Label, SimplicialComplex
+from certify.simplicial.arguments import Label, check_known, distinct_labels
+from certify.simplicial.complexes import SimplicialComplex
 from certify.simplicial.masks import Face, face_of, levels, mask_of, restrict
 
 __all__ = [
     "alexander_dual",
+    "connected_sum",
     "deletion",
     "disjoint_union",
     "full_subcomplex",
@@ -24,19 +27,20 @@ __all__ = [
 ]
 
 
-def join(k: SimplicialComplex, other: SimplicialComplex) -> SimplicialComplex:
-    """Return the join: the unions of a face of one complex with a face of the other.
+def join(*complexes: SimplicialComplex) -> SimplicialComplex:
+    """Return the join: the unions of a face of each complex.
 
     Parameters
     ----------
-    k, other : SimplicialComplex
-        Their vertices become the vertices of the join, those of `k` first. When they share a label, every
-        label a of `k` is replaced by the pair (0, a) and every label b of `other` by (1, b); otherwise all
-        labels are kept.
+    *complexes : SimplicialComplex
+        Their vertices become the vertices of the join, those of the first complex first. When two complexes share a
+        label, every label a of the first complex is replaced by the pair (0, a), every label b of the second by
+        (1, b), and so on; otherwise all labels are kept.
 
     Notes
     -----
-    (X, A)^(K * L) is the product of (X, A)^K and (X, A)^L.
+    (X, A)^(K * L) is the product of (X, A)^K and (X, A)^L. The join of no complex is the one without vertices, whose
+    only face is empty.
 
     Examples
     --------
@@ -46,17 +50,16 @@ def join(k: SimplicialComplex, other: SimplicialComplex) -> SimplicialComplex:
     >>> join(two, two).labels
     ((0, 1), (0, 2), (1, 1), (1, 2))
     """
-    shift = k.vertex_count
-    masks = [left | right << shift for left in k.facet_masks() for right in other.facet_masks()]
-    return SimplicialComplex.from_masks(_labels_side_by_side(k, other), masks)
+    masks = [sum(choice) for choice in product(*_masks_side_by_side(complexes))]
+    return SimplicialComplex.from_masks(_labels_side_by_side([k.labels for k in complexes]), masks)
 
 
-def disjoint_union(k: SimplicialComplex, other: SimplicialComplex) -> SimplicialComplex:
-    """Return the disjoint union: the faces of either complex, with only the empty face in common.
+def disjoint_union(*complexes: SimplicialComplex) -> SimplicialComplex:
+    """Return the disjoint union: the faces of all complexes, with only the empty face in common.
 
     Parameters
     ----------
-    k, other : SimplicialComplex
+    *complexes : SimplicialComplex
         Vertices and labels are treated as in `join`.
 
     Examples
@@ -65,9 +68,62 @@ def disjoint_union(k: SimplicialComplex, other: SimplicialComplex) -> Simplicial
     >>> print(disjoint_union(edge, SimplicialComplex.from_facets([[3]])))
     3 vertices, facets 12 3
     """
-    shift = k.vertex_count
-    masks = [*k.facet_masks(), *(mask << shift for mask in other.facet_masks())]
-    return SimplicialComplex.from_masks(_labels_side_by_side(k, other), masks)
+    masks = chain([0], *_masks_side_by_side(complexes))
+    return SimplicialComplex.from_masks(_labels_side_by_side([k.labels for k in complexes]), masks)
+
+
+def connected_sum(
+    k: SimplicialComplex, other: SimplicialComplex, facet: Iterable[Label], other_facet: Iterable[Label]
+) -> SimplicialComplex:
+    """Return the connected sum along two facets: they are made one, vertex by vertex, and taken out.
+
+    Parameters
+    ----------
+    k, other : SimplicialComplex
+        The complexes, which are not changed.
+    facet, other_facet : iterable of labels
+        A facet of each, with the same number of vertices, at least one. The first vertex of one becomes the first
+        vertex of the other, and so on; another order may give another complex.
+
+    Returns
+    -------
+    SimplicialComplex
+        Its vertices are those of `k`, and then those of `other` outside of the facet. Labels are kept, unless two of
+        these would share one; then all become pairs (0, a) and (1, b), as in `join`.
+
+    Raises
+    ------
+    BadInput
+        If one of the lists is no facet, or they differ in length.
+
+    Notes
+    -----
+    The proper faces of the facet stay. The connected sum with the boundary of a simplex is, up to the label of a
+    vertex, the stellar subdivision at the facet. The connected sum of two triangulated closed manifolds of the same
+    dimension is one again.
+
+    References
+    ----------
+    V. M. Buchstaber and T. E. Panov, Toric Topology, American Mathematical Society 2015, section 2.2 (from memory).
+
+    Examples
+    --------
+    >>> square = SimplicialComplex.from_facets([[1, 2], [2, 3], [3, 4], [1, 4]])
+    >>> triangle = SimplicialComplex.from_facets([["a", "b"], ["b", "c"], ["a", "c"]])
+    >>> print(connected_sum(square, triangle, [1, 2], ["a", "b"]))
+    5 vertices, facets 14 1c 23 2c 34
+    """
+    ours, theirs = _facet_in_order(k, facet, "facet 1"), _facet_in_order(other, other_facet, "facet 2")
+    if len(ours) != len(theirs):
+        raise BadInput(where="facet 2", expected=f"{len(ours)} vertices like the first facet", found=f"{len(theirs)}")
+    rest = [vertex for vertex in range(other.vertex_count) if vertex not in theirs]
+    place = dict(zip(theirs, ours, strict=True)) | {vertex: k.vertex_count + i for i, vertex in enumerate(rest)}
+    moved = [mask_of(place[vertex] for vertex in face) for face in other.facets]
+    gone = mask_of(ours)
+    masks = [mask for mask in (*k.facet_masks(), *moved) if mask != gone]
+    sides = [gone & ~(1 << vertex) for vertex in ours]
+    labels = _labels_side_by_side([k.labels, tuple(other.labels[vertex] for vertex in rest)])
+    return SimplicialComplex.from_masks(labels, masks + sides)
 
 
 def full_subcomplex(k: SimplicialComplex, labels: Iterable[Label]) -> SimplicialComplex:
@@ -227,11 +283,31 @@ def alexander_dual(k: SimplicialComplex) -> SimplicialComplex:
     return SimplicialComplex.from_masks(k.labels, masks)
 
 
-def _labels_side_by_side(k: SimplicialComplex, other: SimplicialComplex) -> tuple[Label, ...]:
-    """Return the labels of both, made different by pairing with 0 and 1 when they share one."""
-    if set(k.labels).isdisjoint(other.labels):
-        return k.labels + other.labels
-    return tuple((0, label) for label in k.labels) + tuple((1, label) for label in other.labels)
+def _labels_side_by_side(groups: Sequence[tuple[Label, ...]]) -> tuple[Label, ...]:
+    """Return all labels, made different by pairing with the number of their group if two groups share one."""
+    labels = tuple(chain.from_iterable(groups))
+    if len(set(labels)) == len(labels):
+        return labels
+    return tuple((number, label) for number, group in enumerate(groups) for label in group)
+
+
+def _masks_side_by_side(complexes: Sequence[SimplicialComplex]) -> Iterator[list[int]]:
+    """Yield the facets of each complex, with its vertices numbered on from those of the complex before."""
+    shift = 0
+    for k in complexes:
+        yield [mask << shift for mask in k.facet_masks()]
+        shift += k.vertex_count
+
+
+def _facet_in_order(k: SimplicialComplex, labels: Iterable[Label], where: str) -> tuple[int, ...]:
+    """Return the numbers of the vertices of a facet, in the order in which they are given."""
+    given = distinct_labels(labels, where)
+    check_known(given, k.labels, where)
+    numbers = tuple(k.labels.index(label) for label in given)
+    if not given or tuple(sorted(numbers)) not in k.facets:
+        names = " ".join(map(str, given)) or "no vertex"
+        raise BadInput(where=where, expected="the vertices of a facet, at least one", found=names)
+    return numbers
 
 
 def _all_but(k: SimplicialComplex, face: Face) -> Face:

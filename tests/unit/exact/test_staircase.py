@@ -71,7 +71,7 @@ def test_overlapping_classes_are_joined_and_others_left_alone() -> None:
 
 
 def test_a_circle_of_relations_becomes_a_group() -> None:
-    """(1, 1) at home in 0 and (1, 2) at home in 1 each need the other's cell. Rows are the cells 1, 0: (1, 2), (1, 1)."""
+    """Two vectors that each need the other's cell; the matrix of the group, rows 1 and 0, is (1, 2), (1, 1)."""
     family: Family = [(((0, 1), (1, 1)), 0), (((0, 1), (1, 2)), 1)]
     assert arrange(2, family) == Layout((1, 0), (Group((1, 0), [[-1, 2], [1, -1]]),))
 

@@ -224,12 +224,17 @@ FAULTS = {
     "a negative degree": (
         "degrees = [2, 0]",
         "degrees = [2, -1]",
-        "line 24, claim 2, key degrees, item 2: expected a degree from 0 on, found -1",
+        "line 24, claim 2, key degrees, item 2: expected a degree from 0 on, of at most 9 digits, found -1",
+    ),
+    "a degree that is too large": (
+        "degrees = [2, 0]",
+        "degrees = [2, 1000000000]",
+        "line 24, claim 2, key degrees, item 2: expected a degree from 0 on, of at most 9 digits, found 1000000000",
     ),
     "a degree that is no whole number": (
         "degrees = [2, 0]",
         "degrees = [2, true]",
-        "line 24, claim 2, key degrees, item 2: expected a degree from 0 on, found true",
+        "line 24, claim 2, key degrees, item 2: expected a degree from 0 on, of at most 9 digits, found true",
     ),
     "a degree twice": (
         "degrees = [2, 0]",
@@ -373,9 +378,7 @@ def test_tables_are_tables(text: str, message: str) -> None:
 
 @pytest.mark.parametrize("text", ["x = " + "1" * 5000, "x = " + "[" * 100_000])
 def test_toml_beyond_all_measure_is_refused_and_does_not_crash(text: str) -> None:
-    with pytest.raises(
-        BadInput, match=r"^(the sheet: expected TOML of an ordinary size|line 1, the end: expected TOML)"
-    ):
+    with pytest.raises(BadInput, match=r"^(the sheet|line 1, .*): expected TOML"):
         parse_sheet(text)
 
 

@@ -1,20 +1,44 @@
-"""Homology and fundamental groups of small complexes, by textbook methods and general-purpose libraries."""
+"""Faces, isomorphy, homology and fundamental groups of small complexes, by textbook methods and general libraries."""
 
 from __future__ import annotations
 
 from collections.abc import Iterable
 
+import networkx as nx
 from flint import fmpz_mat
 from sympy.combinatorics.fp_groups import FpGroup
 from sympy.combinatorics.free_groups import free_group
 
-from certify.simplicial import Face, SimplicialComplex
+from certify.simplicial import Face, Label, SimplicialComplex, face_of
 
 Groups = dict[int, tuple[int, tuple[int, ...]]]
 """For each degree in which the group is not zero: its rank and its invariant factors."""
 
 Word = tuple[int, ...]
 """A product of generators: g stands for generator number g >= 1, and -g for its inverse."""
+
+
+def face_sets(k: SimplicialComplex) -> set[frozenset[Label]]:
+    """Return the faces as sets of labels."""
+    return {frozenset(k.labels[vertex] for vertex in face_of(mask)) for mask in k.face_masks()}
+
+
+def renumbered(k: SimplicialComplex) -> SimplicialComplex:
+    """Return the complex with its vertices labelled 0, 1, ... in order."""
+    return k.relabelled(range(k.vertex_count))
+
+
+def are_isomorphic(k: SimplicialComplex, other: SimplicialComplex) -> bool:
+    """Tell whether a bijection of the vertices carries facets to facets: an isomorphism of graphs, in two colours."""
+    graphs = []
+    for each in (k, other):
+        graph: nx.Graph[tuple[str, int]] = nx.Graph()
+        graph.add_nodes_from((("vertex", vertex) for vertex in range(each.vertex_count)), kind="vertex")
+        graph.add_nodes_from((("facet", number) for number in range(len(each.facets))), kind="facet")
+        for number, facet in enumerate(each.facets):
+            graph.add_edges_from((("vertex", vertex), ("facet", number)) for vertex in facet)
+        graphs.append(graph)
+    return nx.is_isomorphic(*graphs, node_match=lambda a, b: bool(a["kind"] == b["kind"]))
 
 
 def reduced_homology(k: SimplicialComplex) -> Groups:

@@ -1,5 +1,7 @@
 from __future__ import annotations
 
+from functools import reduce
+
 from hypothesis import assume, given
 from hypothesis import strategies as st
 
@@ -7,9 +9,10 @@ from certify.simplicial import (
     Label,
     SimplicialComplex,
     alexander_dual,
+    build,
+    connected_sum,
     deletion,
     disjoint_union,
-    face_of,
     full_subcomplex,
     join,
     link,
@@ -17,22 +20,17 @@ from certify.simplicial import (
     read_facets,
     skeleton,
     star,
+    stellar_subdivision,
 )
-from tests.strategies import complexes, complexes_with_face, complexes_with_vertices
-from tests.unit.simplicial.oracles import reduced_homology
+from tests.strategies import complexes, complexes_with_face, complexes_with_vertices, spheres
+from tests.unit.simplicial.oracles import face_sets, reduced_homology, renumbered
 
 
-def face_sets(k: SimplicialComplex) -> set[frozenset[Label]]:
-    """Return the faces as sets of labels."""
-    return {frozenset(k.labels[vertex] for vertex in face_of(mask)) for mask in k.face_masks()}
+NOTHING = SimplicialComplex.from_facets([[]])
 
 
 def facets_in_labels(k: SimplicialComplex) -> list[list[Label]]:
     return [[k.labels[vertex] for vertex in facet] for facet in k.facets]
-
-
-def renumbered(k: SimplicialComplex) -> SimplicialComplex:
-    return k.relabelled(range(k.vertex_count))
 
 
 @given(complexes())
@@ -100,6 +98,12 @@ def test_joins_are_associative_up_to_labels(
 ) -> None:
     left, right = join(join(k, second), third), join(k, join(second, third))
     assert renumbered(left) == renumbered(right)
+
+
+@given(st.lists(complexes(3), max_size=4))
+def test_joins_and_unions_of_many_are_made_of_those_of_two(complexes: list[SimplicialComplex]) -> None:
+    assert renumbered(join(*complexes)) == renumbered(reduce(join, complexes, NOTHING))
+    assert renumbered(disjoint_union(*complexes)) == renumbered(reduce(disjoint_union, complexes, NOTHING))
 
 
 @given(complexes(4), complexes(4))
@@ -178,3 +182,38 @@ def test_alexander_duality(k: SimplicialComplex) -> None:
     for i in range(-1, m):
         rank, torsion = homology.get(m - i - 3, (0, ()))[0], homology.get(m - i - 4, (0, ()))[1]
         assert dual.get(i, (0, ())) == (rank, torsion)
+
+
+@given(complexes(4), complexes(4))
+def test_the_alexander_dual_of_a_join(k: SimplicialComplex, other: SimplicialComplex) -> None:
+    """Something is no face of K * L when its part in K or its part in L is none, so (K * L)^ = K^ * D(L) u D(K) * L^."""
+    assume(k.missing_faces() and other.missing_faces())
+    left, right = renumbered(k), other.relabelled(range(k.vertex_count, k.vertex_count + other.vertex_count))
+    expected = [set(facet) | set(right.labels) for facet in facets_in_labels(alexander_dual(left))]
+    expected += [set(left.labels) | set(facet) for facet in facets_in_labels(alexander_dual(right))]
+    labels = left.labels + right.labels
+    assert alexander_dual(join(left, right)) == SimplicialComplex.from_facets(expected, labels)
+
+
+@given(spheres(), spheres(), st.data())
+def test_connected_sums_by_the_definition(k: SimplicialComplex, other: SimplicialComplex, data: st.DataObject) -> None:
+    other = other.relabelled([f"v{label}" for label in other.labels])
+    ours = data.draw(st.sampled_from(facets_in_labels(k)))
+    theirs = data.draw(st.sampled_from(facets_in_labels(other)))
+    assume(ours and len(ours) == len(theirs))
+    moved = dict(zip(theirs, data.draw(st.permutations(ours)), strict=True))
+    found = connected_sum(k, other, moved.values(), moved.keys())
+    image = {frozenset(moved.get(label, label) for label in face) for face in face_sets(other)}
+    assert face_sets(found) == (face_sets(k) | image) - {frozenset(ours)}
+    assert reduced_homology(found) == reduced_homology(k)
+
+
+@given(spheres(), st.data())
+def test_a_connected_sum_with_the_boundary_of_a_simplex_subdivides_a_facet(
+    k: SimplicialComplex, data: st.DataObject
+) -> None:
+    facet = data.draw(st.sampled_from(facets_in_labels(k)))
+    assume(len(facet) >= 2)
+    simplex = build("simplex-boundary", m=len(facet) + 1).relabelled([f"v{i}" for i in range(len(facet) + 1)])
+    apex = simplex.labels[-1]
+    assert connected_sum(k, simplex, facet, simplex.labels[:-1]) == stellar_subdivision(k, facet, apex)
