@@ -27,13 +27,15 @@ import sys
 import time
 import zlib
 from collections import Counter
-from collections.abc import Iterator, Sequence
+from collections.abc import Callable, Iterable, Iterator, Sequence
 from functools import reduce
-from itertools import combinations, pairwise
+from itertools import combinations, pairwise, product
 from math import comb, gcd, lcm
 from operator import and_, ge
+from typing import Generic, TypeVar
 
 FORMAT = 1
+DIGITS = "0123456789abcdefghijklmnopqrstuvwxyz"
 BATCH = 1 << 18  # faces that are merged together at most; part of the format, since it decides which records there are
 LARGEST = 2**53 - 1  # integers beyond are written as strings (RFC 7493)
 ENDINGS = (".cert.jsonl", ".cert.jsonl.gz")
@@ -41,9 +43,14 @@ CHUNK = 1 << 16
 UNDECIDED = {"limit", "unknown-format", "unknown-kind", "unknown-pair", "not-a-certificate", "unreadable"}
 
 
+Cell = TypeVar("Cell", int, bytes)  # a cell of a space: a face as a bit mask, or a word of letters
 Vector = list[tuple[int, int]]  # cells with coefficients, cells ascending
 Faces = tuple[tuple[int, ...], ...]  # for each number of vertices the faces as ascending bit masks
-States = dict[tuple[int, Faces], tuple[str, dict[int, int]]]  # |I| so far, and K on I and the undecided: name, shifts
+Letter = tuple[int, int, tuple[tuple[int, int], ...]]  # a cell of X: degree, 1 if outside A, boundary on other letters
+Alphabet = tuple[Letter, ...]  # the cells of a pair (X, A), or of a summand of one
+Tag = int | Alphabet  # what a kept vertex brings: n for cells e and t with d e = n t, or the cells of a larger summand
+Shape = tuple[int, Tag, dict[int, int]]  # a summand: move, tag, and how often it occurs with which degree shift
+States = dict[tuple[tuple[Tag, ...], Faces], tuple[str, dict[int, int]]]  # tags, K on kept and undecided: name, shifts
 Group = Counter[int]  # how often Z (under 0) and Z/e (under e) are summands
 Total = dict[int, Group]  # a group for each degree; a degree that is missing has the group 0
 
@@ -196,8 +203,8 @@ class Statement:
         value = record(raw, ("degrees", "facets", "groups", "kind", "pairs", "vertices"))
         self.vertices = integer(value["vertices"], budget)
         self.facets = [numbers(facet, 1, self.vertices + 1) for facet in sequence(value["facets"])]
-        self.discs = [disc(name) for name in sequence(value["pairs"])]
-        require(len(self.discs) == self.vertices, "statement", "one pair for each vertex is expected")
+        self.pairs = [Pair(pair, budget) for pair in sequence(value["pairs"])]
+        require(len(self.pairs) == self.vertices, "statement", "one pair for each vertex is expected")
         self.degrees = None if value["degrees"] is None else numbers(value["degrees"], 0, LARGEST)
         require(self.degrees != [], "statement", "at least one degree is expected")
         self.top = self.degrees[-1] + 1 if self.degrees else LARGEST  # cells of larger degree do not matter
@@ -234,10 +241,10 @@ class Statement:
 
     def text(self) -> str:
         """Render the statement in the notation of mathematics."""
-        names = sorted(set(self.discs))
-        places = [", ".join(str(i) for i, m in enumerate(self.discs, 1) if m == n) for n in names]
-        mixed = [f", (X_i,A_i) = {disc_text(n)} for i = {at}" for n, at in zip(names, places, strict=True)]
-        space, pairs = (disc_text(names[0]), "") if len(names) == 1 else ("(X,A)", "".join(mixed))
+        names = sorted({pair.text for pair in self.pairs})
+        places = [", ".join(str(i) for i, pair in enumerate(self.pairs, 1) if pair.text == name) for name in names]
+        mixed = [f", (X_i,A_i) = {name} for i = {at}" for name, at in zip(names, places, strict=True)]
+        space, pairs = (names[0], "") if len(names) == 1 else ("(X,A)", "".join(mixed))
         degrees = sorted(self.groups) if self.degrees is None else self.degrees
         parts = [f"H_{k} ≅ {group_text(self.groups.get(k, Counter()))}" for k in degrees]
         parts[0] = parts[0].replace(" ", f"({space}^K; ℤ) ", 1)
@@ -248,20 +255,127 @@ class Statement:
         return f"{', '.join(parts)}; K on {self.vertices} vertices with facets {facets}{pairs}"
 
 
-def disc(name: object) -> int:
-    """Return n for the pair (D^n, S^{n-1}) written like "(D2, S1)"."""
-    match = re.fullmatch(r"\(D([1-9][0-9]{0,5}), S(0|[1-9][0-9]{0,5})\)", str(name), re.ASCII)
-    if type(name) is not str or match is None or int(match[1]) != int(match[2]) + 1:
-        raise Failure("unknown-pair", f"the pair {str(name)[:40]!r} is unknown here")
-    return int(match[1])
+STAY, OUT, KEEP, INNER, OUTER = range(5)  # what a summand does to its vertex in K, see `decide`
+PAIRS = (r"\(D{}, S{}\)", r"\(S{}, \*\)", r"\(CP{}, \*\)", r"\(RP{}, \*\)", r"\(cone {}, {}\)", r"\(P{}\({}\), \*\)")
+
+
+def named_pair(name: str) -> tuple[list[Letter], list[Shape]]:
+    """Return the cells of a pair that is written as in print, and its summands (docs/mathematics.md)."""
+    for form in PAIRS:
+        if match := re.fullmatch(form.replace("{}", "(0|[1-9][0-9]{0,2})"), name, re.ASCII):
+            n, k = int(match[1]), int(match[match.lastindex or 1])
+            if form == PAIRS[0] and n == 1 and k == 0:
+                return [(0, 0, ()), (0, 0, ()), (1, 1, ((0, -1), (1, 1)))], [(STAY, 0, {0: 1}), (KEEP, 1, {0: 1})]
+            if form == PAIRS[0] and n == k + 1:
+                return [(0, 0, ()), (k, 0, ()), (n, 1, ((1, 1),))], [(STAY, 0, {0: 1}), (KEEP, 1, {k: 1})]
+            if form == PAIRS[1] and n:
+                return [(0, 0, ()), (n, 1, ())], [(STAY, 0, {0: 1}), (OUT, 0, {n: 1})]
+            if form == PAIRS[2] and n:
+                cells: list[Letter] = [(2 * i, min(i, 1), ()) for i in range(n + 1)]
+                return cells, [(STAY, 0, {0: 1}), (OUT, 0, {2 * i: 1 for i in range(1, n + 1)})]
+            if form == PAIRS[3] and n:
+                cells = [(i, min(i, 1), ((i - 1, 2),) if i and i % 2 == 0 else ()) for i in range(n + 1)]
+                top: list[Shape] = [(OUT, 0, {n: 1})] if n % 2 else []
+                torsion: list[Shape] = [(OUTER, 2, dict.fromkeys(range(1, n, 2), 1))] if n > 1 else []
+                return cells, [(STAY, 0, {0: 1}), *top, *torsion]
+            if form == PAIRS[4] and n == k > 0:
+                cells = [(0, 0, ())] * n + [(0, 1, ())] + [(1, 1, ((i, 1), (n, -1))) for i in range(n)]
+                return cells, [(STAY, 0, {0: 1}), *([(KEEP, 1, {0: n - 1})] if n > 1 else [])]
+            if form == PAIRS[5] and n > 1 and k > 1:
+                return [(0, 0, ()), (n - 1, 1, ()), (n, 1, ((1, k),))], [(STAY, 0, {0: 1}), (OUTER, k, {n - 1: 1})]
+    raise Failure("unknown-pair", f"the pair {name[:40]!r} is unknown here")
+
+
+class Pair:
+    """A pair (X, A) of a based complex and a subcomplex: its cells, and its summands once they are known."""
+
+    def __init__(self, raw: object, budget: Budget) -> None:
+        self.raw = raw
+        self.shapes: list[Shape] = []
+        if type(raw) is str:
+            self.cells, self.shapes = named_pair(raw)
+            self.text = re.sub("(?<=[DSP])[0-9]+", lambda digits: raised(int(digits[0])), raw).replace(", ", ",")
+            return
+        entries = [sequence(cell) for cell in sequence(record(raw, ("cells",))["cells"])]
+        require(
+            0 < len(entries) < 256 and all(len(entry) == 3 for entry in entries), "pair", "1 to 255 cells are expected"
+        )
+        self.cells = []
+        for degree, side, boundary in entries:
+            entry = vector(boundary, len(self.cells), budget) if sequence(boundary) else []
+            self.cells.append((integer(degree, budget), integer(side, budget), tuple(entry)))
+        degrees = [degree for degree, _, _ in self.cells]
+        for degree, outside, terms in self.cells:
+            below = all(degrees[cell] == degree - 1 and self.cells[cell][1] <= outside for cell, _ in terms)
+            require(degree >= 0 and outside in (0, 1) and below, "pair", "degrees fit, and A is closed under d")
+            require(not self.image(terms), "pair", "the boundary of a boundary is zero")
+        names = [f"c{i} in degree {d}" + (f", d c{i} = {t}" if t else "") for i, (d, _, t) in enumerate(self.cells)]
+        inside = " ".join(f"c{i}" for i, (_, outside, _) in enumerate(self.cells) if not outside)
+        self.text = f"(⟨{'; '.join(names)}⟩,⟨{inside}⟩)"
+
+    def image(self, terms: Iterable[tuple[int, int]]) -> dict[int, int]:
+        """Return d of a vector on the cells."""
+        total: Counter[int] = Counter()
+        for cell, coefficient in terms:
+            for place, entry in self.cells[cell][2]:
+                total[place] += coefficient * entry
+        return {place: entry for place, entry in total.items() if entry}
+
+    def split(self, value: object, budget: Budget) -> None:
+        """Find the summands in the basis given with its inverse: each vector of one degree, those of A within A."""
+        size = len(self.cells)
+        proof = record(value, ("basis", "inverse"))
+        basis = [vector(entry, size, budget) for entry in sequence(proof["basis"])]
+        rows = check_inverse(list(range(size)), [dict(terms) for terms in basis], proof["inverse"], budget)
+        new: list[tuple[int, int, dict[int, int]]] = []
+        for terms in basis:
+            degrees = {self.cells[cell][0] for cell, _ in terms}
+            require(len(degrees) == 1, "splitting", "a basis vector has cells of one degree")
+            image = self.image(terms)
+            coordinates = [sum(row[cell] * entry for cell, entry in image.items()) for row in rows]
+            outside = max(self.cells[cell][1] for cell, _ in terms)
+            new.append((degrees.pop(), outside, {i: entry for i, entry in enumerate(coordinates) if entry}))
+        within = sum(1 for _, outside, _ in new if not outside)
+        require(
+            within == sum(1 for _, outside, _ in self.cells if not outside), "splitting", "A has a basis in the basis"
+        )
+        found: dict[tuple[int, bytes], Shape] = {}
+        for part in components(new):
+            shape = shape_of([new[i] for i in part], {i: number for number, i in enumerate(part)})
+            if shape[1] != 1 or shape[0] == KEEP:  # a twin with n = 1 is acyclic, and so is every block with it
+                known = found.setdefault((shape[0], canonical(shape[1])), (shape[0], shape[1], {}))[2]
+                known.update((shift, times + known.get(shift, 0)) for shift, times in shape[2].items())
+        self.shapes = [found[key] for key in sorted(found)]
+        require(len(self.shapes) <= len(DIGITS), "limit", "a pair has more different summands than there are digits")
+
+
+def components(cells: list[tuple[int, int, dict[int, int]]]) -> list[list[int]]:
+    """Return the sets of cells that boundaries connect, each ascending, in the order of their first cells."""
+    label = list(range(len(cells)))
+    for i, (_, _, terms) in enumerate(cells):
+        for j in terms:
+            low, high = sorted((label[i], label[j]))
+            label = [low if old == high else old for old in label]
+    return [[i for i, own in enumerate(label) if own == first] for first in sorted(set(label))]
+
+
+def shape_of(cells: list[tuple[int, int, dict[int, int]]], number: dict[int, int]) -> Shape:
+    """Return what a summand with these cells does to its vertex."""
+    low = min(degree for degree, _, _ in cells)
+    if len(cells) == 1:
+        return OUT if cells[0][1] else STAY, 0, {low: 1}
+    if len(cells) == 2:
+        (_, t, _), (_, e, terms) = sorted(cells, key=lambda cell: cell[0])
+        return (KEEP if e > t else OUTER if t else INNER), abs(next(iter(terms.values()))), {low: 1}
+    alphabet = tuple(
+        (degree - low, outside, tuple(sorted((number[i], entry) for i, entry in terms.items())))
+        for degree, outside, terms in cells
+    )
+    return KEEP, alphabet, {low: 1}
 
 
 def raised(number: int) -> str:
     return str(number).translate(str.maketrans("0123456789", "⁰¹²³⁴⁵⁶⁷⁸⁹"))
-
-
-def disc_text(n: int) -> str:
-    return f"(D{raised(n)},S{raised(n - 1)})"
 
 
 def group_text(group: Group) -> str:
@@ -277,7 +391,9 @@ def group_text(group: Group) -> str:
 
 def face_masks(statement: Statement, budget: Budget) -> Faces:
     """Return the faces of K as ascending bit masks, bit i for vertex i + 1, as far as their size matters."""
-    sizes = range(min(statement.top, max(map(len, statement.facets))) + 1)
+    least = min((degree for pair in statement.pairs for degree, outside, _ in pair.cells if outside), default=1)
+    longest = max(map(len, statement.facets))
+    sizes = range(min(longest, statement.top // least if least else longest) + 1)
     masks: list[set[int]] = [set() for _ in sizes]
     for facet in statement.facets:
         for size in sizes:
@@ -286,38 +402,55 @@ def face_masks(statement: Statement, budget: Budget) -> Faces:
     return tuple(tuple(sorted(found)) for found in masks)
 
 
-def without(faces: Faces, place: int) -> Faces:
-    """Return the faces that avoid the vertex at `place`, with the vertices above it moved down by one."""
+def decide(faces: Faces, place: int, move: int) -> Faces:
+    """Return what becomes of the faces when the vertex at `place` is decided; nothing if no face is left.
+
+    STAY leaves the vertex out, and OUT passes to its link; the vertices above move down by one. INNER and OUTER do the
+    same, but then put a new vertex there that lies in a face with every face. KEEP changes nothing.
+    """
     bit = 1 << place
     below, above = bit - 1, -bit
-    left = [tuple([mask & below | mask >> 1 & above for mask in masks if not mask & bit]) for masks in faces]
-    while not left[-1]:
+    if move == KEEP:
+        return faces
+    if move in (OUT, OUTER):
+        faces = tuple(tuple([mask ^ bit for mask in masks if mask & bit]) for masks in faces[1:])
+    if move in (STAY, OUT):
+        left = [tuple([mask & below | mask >> 1 & above for mask in masks if not mask & bit]) for masks in faces]
+    else:
+        chosen = [[mask for mask in masks if not mask & bit] for masks in faces]
+        steps = zip([*chosen, []], [[], *chosen], strict=True)
+        left = [tuple(sorted(same + [mask | bit for mask in fewer])) for same, fewer in steps]
+    while left and not left[-1]:
         left.pop()
     return tuple(left)
 
 
-def block_classes(statement: Statement, budget: Budget) -> Iterator[tuple[str, Faces, int, dict[int, int]]]:
-    """Yield the full subcomplexes K_I, equal ones (after moving I down to 1, 2, …) together.
+def block_classes(statement: Statement, budget: Budget) -> Iterator[tuple[str, tuple[Tag, ...], Faces, dict[int, int]]]:
+    """Yield the blocks, which are the choices of a summand for each vertex; equal ones together (Lemma D).
 
-    Yields (name, faces, vertices, shifts): the 0/1 word of the first I of the class, the faces of K_I, |I|, and
-    how many I of the class have which degree shift. The word order of the names is ascending. Vertices are decided
-    one after the other, and subsets that lead to the same remaining complex are merged on the way (Lemma D); a level
-    of more than BATCH faces is cut into runs that are finished one after the other.
+    Yields (name, tags, faces, shifts): the word of the first choice, a digit for each vertex; the tags of the vertices
+    that are kept, and the complex on them; how many choices have which degree shift. The names ascend. Vertices are
+    decided one after the other, and choices that lead to the same remaining complex are merged on the way; a level of
+    more than BATCH faces is cut into runs that are finished one after the other.
     """
-    pending: list[tuple[int, States]] = [(0, {(0, face_masks(statement, budget)): ("", {0: 1})})]
+    pending: list[tuple[int, States]] = [(0, {((), face_masks(statement, budget)): ("", {0: 1})})]
     while pending:
         vertex, states = pending.pop()
         if vertex == statement.vertices:
-            for (kept, faces), (name, shifts) in states.items():
-                yield name, faces, kept, shifts
+            for (tags, faces), (name, shifts) in states.items():
+                yield name, tags, faces, shifts
             continue
-        shift = statement.discs[vertex] - 1
         level: States = {}
-        for (kept, faces), (name, shifts) in states.items():
+        for (tags, faces), (name, shifts) in states.items():
             budget.spend("cells", sum(map(len, faces)))
-            up = {old + shift: n for old, n in shifts.items() if old + shift < statement.top}
-            for digit, state, counts in ("0", (kept, without(faces, kept)), shifts), ("1", (kept + 1, faces), up):
-                if counts:
+            for digit, (move, tag, degrees) in zip(DIGITS, statement.pairs[vertex].shapes, strict=False):
+                counts: dict[int, int] = {}
+                for shift, more in product(shifts, degrees):
+                    if shift + more < statement.top:
+                        counts[shift + more] = counts.get(shift + more, 0) + shifts[shift] * degrees[more]
+                left = decide(faces, len(tags), move) if counts else ()
+                if left:
+                    state = (tags if move in (STAY, OUT) else (*tags, tag), left)
                     known = level.setdefault(state, (name + digit, {}))[1]
                     known.update((s, n + known.get(s, 0)) for s, n in counts.items())
         runs: list[States] = []
@@ -332,88 +465,99 @@ def block_classes(statement: Statement, budget: Budget) -> Iterator[tuple[str, F
         pending += [(vertex + 1, run) for run in reversed(runs)]
 
 
-def is_cone(faces: Faces, vertices: int, most: int) -> bool:
-    """Tell whether some vertex lies with every face of less than `most` vertices in a common face (Lemma C)."""
-    candidates = (1 << vertices) - 1
+def is_cone(faces: Faces, tags: tuple[Tag, ...], most: int) -> bool:
+    """Tell whether some vertex with tag 1 lies with every face of less than `most` vertices in a face (Lemma C)."""
+    candidates = -1
     if len(faces) <= most:  # no face of the largest size can be completed, so an apex lies in all of them
         candidates = reduce(and_, faces[-1])
-    for vertex in range(vertices):
+    for vertex, tag in enumerate(tags):
         bit = 1 << vertex
-        if candidates & bit:
+        if candidates & bit and tag == 1:
             completed = sum(1 for masks in faces for mask in masks if mask & bit)
             if completed == sum(1 for masks in faces[:most] for mask in masks if not mask & bit):
                 return True
     return False
 
 
-class Space:
-    """A based complex that was rebuilt from the statement: in each degree ascending words of bits, and d.
+class Space(Generic[Cell]):
+    """A based complex that was rebuilt from the statement: the cells of each degree in their order, and d of a cell."""
 
-    A word holds two sets of vertices, `upper` (shifted up by `width`) and `lower`. d is the sum over the vertices of
-    `upper`, with the sign of the odd ones before: the vertex moves down to `lower`, or out where `width` is 0; and for
-    the vertices of `points`, minus the same with the vertex moved out.
-    """
-
-    def __init__(self, words: Sequence[Sequence[int]], width: int, odd: int, points: int) -> None:
-        self.words, self.width, self.odd, self.points = words, width, odd, points
-        self.index = [{word: number for number, word in enumerate(degree)} for degree in words]
-        self.sizes = [len(degree) for degree in words]
-
-    def leads(self, degree: int, cells: list[int]) -> list[int]:
-        """Return the last cell in d of each of these cells, where d has ±1: the first vertex of `upper` moves."""
-        words, width, below = self.words[degree], self.width, self.index[degree - 1]
-        if width == 0:
-            return [below[words[cell] & words[cell] - 1] for cell in cells]
-        uppers = [words[cell] >> width for cell in cells]
-        require(all(uppers), "boundary", "a matched cell has no boundary")
-        firsts = [upper & -upper for upper in uppers]
-        return [below[words[cell] ^ bit << width | bit] for cell, bit in zip(cells, firsts, strict=True)]
+    def __init__(self, cells: Sequence[Sequence[Cell]], d: Callable[[Cell], list[tuple[Cell, int]]]) -> None:
+        self.cells, self.d = cells, d
+        self.index = [{cell: number for number, cell in enumerate(degree)} for degree in cells]
+        self.sizes = [len(degree) for degree in cells]
 
     def boundary(self, degree: int, vector: Vector) -> Vector:
         """Return d of a vector of this degree."""
-        total: dict[int, int] = {}
-        for cell, coefficient in vector:
-            word = self.words[degree][cell]
-            rest = word >> self.width
-            odd = rest & self.odd | word & ~self.odd & (1 << self.width) - 1
-            while rest:
-                bit = rest & -rest
-                rest ^= bit
-                signed = -coefficient if (odd & bit - 1).bit_count() & 1 else coefficient
-                out = word ^ bit << self.width
-                down = out | bit if self.width else out
-                total[down] = total.get(down, 0) + signed
-                if bit & self.points:
-                    total[out] = total.get(out, 0) - signed
+        total: dict[Cell, int] = {}
+        for number, coefficient in vector:
+            for cell, entry in self.d(self.cells[degree][number]):
+                total[cell] = total.get(cell, 0) + coefficient * entry
         below = self.index[degree - 1]
-        return sorted((below[word], coefficient) for word, coefficient in total.items() if coefficient)
+        return sorted((below[cell], coefficient) for cell, coefficient in total.items() if coefficient)
+
+    def leads(self, degree: int, numbers: list[int]) -> list[int]:
+        """Return the last cell in d of each of these cells, where d must have ±1."""
+        last = [self.boundary(degree, [(number, 1)])[-1:] for number in numbers]
+        require(all(end and end[0][1] in (1, -1) for end in last), "boundary", "d of a matched cell does not end in ±1")
+        return [end[0][0] for end in last]
 
 
-def simplices(faces: Faces) -> Space:
-    """Return the augmented oriented chain complex of a simplicial complex; degree k has the faces of k vertices."""
-    return Space(faces, 0, -1, 0)
+class Simplices(Space[int]):
+    """The augmented chain complex of a simplicial complex with an integer for each vertex: d e = n t at each vertex.
 
-
-def whole_product(statement: Statement, budget: Budget) -> Space:
-    """Return the cellular chain complex of (X, A)^K, a cell of X for each vertex, those outside A on a face of K.
-
-    The cells of (D^n, S^{n-1}) are a point, a cell t of degree n - 1 (`lower`), and a cell e of degree n (`upper`) with
-    d e = t, and for n = 1 d e = t - point. The sign of the Leibniz rule counts the cells of odd degree before.
+    Degree k is spanned by the faces of k vertices.
     """
-    m = statement.vertices
-    faces = set().union(*face_masks(statement, budget))
-    words = [(0, 0)]
-    for vertex, n in enumerate(statement.discs):
-        letters = ((0, 0), (1 << vertex, n - 1), (1 << vertex + m, n))
-        grown = ((word | bit, degree + more) for word, degree in words for bit, more in letters)
-        words = [(word, degree) for word, degree in grown if degree <= statement.top and word >> m in faces]
-        budget.spend("cells", len(words))
-    degrees: list[list[int]] = [[] for _ in range(max(degree for _, degree in words) + 1)]
-    for word, degree in sorted(words):
-        degrees[degree].append(word)
-    odd = sum(1 << vertex for vertex, n in enumerate(statement.discs) if n % 2)
-    points = sum(1 << vertex for vertex, n in enumerate(statement.discs) if n == 1)
-    return Space(degrees, m, odd, points)
+
+    def __init__(self, faces: Faces, weights: Sequence[int]) -> None:
+        super().__init__(faces, self.facets)
+        self.weights = weights
+
+    def facets(self, mask: int) -> list[tuple[int, int]]:
+        """Return d of a face: alternating signs, + where the first vertex is left out, times the vertex's integer."""
+        terms, rest, sign = [], mask, 1
+        while rest:
+            bit = rest & -rest
+            terms.append((mask ^ bit, sign * self.weights[bit.bit_length() - 1]))
+            sign = -sign
+            rest ^= bit
+        return terms
+
+    def leads(self, degree: int, numbers: list[int]) -> list[int]:
+        if any(weight != 1 for weight in self.weights):
+            return super().leads(degree, numbers)
+        masks, below = self.cells[degree], self.index[degree - 1]
+        return [below[masks[number] & masks[number] - 1] for number in numbers]  # leaving out the first vertex
+
+
+class Words(Space[bytes]):
+    """The tensor product of the cells at each vertex, where the vertices with a cell outside A form a face.
+
+    Cells are words with a letter for each vertex. They are ordered by the mask of that face, then as words.
+    """
+
+    def __init__(self, faces: Faces, alphabets: Sequence[Alphabet], top: int, budget: Budget) -> None:
+        known = set().union(*faces)
+        self.alphabets = alphabets
+        words = [(0, b"", 0)]
+        for place, alphabet in enumerate(alphabets):
+            letters = [(bytes([i]), outside << place, degree) for i, (degree, outside, _) in enumerate(alphabet)]
+            grown = ((mask | bit, word + letter, d + more) for mask, word, d in words for letter, bit, more in letters)
+            words = [(mask, word, degree) for mask, word, degree in grown if degree <= top and mask in known]
+            budget.spend("cells", len(words))
+        cells: list[list[bytes]] = [[] for _ in range(max((degree for _, _, degree in words), default=-1) + 1)]
+        for _, word, degree in sorted(words):
+            cells[degree].append(word)
+        super().__init__(cells, self.leibniz)
+
+    def leibniz(self, word: bytes) -> list[tuple[bytes, int]]:
+        """Return d of a word, with the sign of the degrees of the letters before."""
+        terms, sign = [], 1
+        for place, (letter, alphabet) in enumerate(zip(word, self.alphabets, strict=True)):
+            degree, _, boundary = alphabet[letter]
+            terms += [(word[:place] + bytes([i]) + word[place + 1 :], sign * entry) for i, entry in boundary]
+            sign = -sign if degree % 2 else sign
+        return terms
 
 
 # ---- the proof: Lemma A and Lemma B ----------------------------------------------------------------------------------
@@ -436,7 +580,7 @@ def vector(value: object, size: int, budget: Budget) -> Vector:
     return terms
 
 
-def homology(space: Space, basis: object, budget: Budget) -> list[tuple[int, list[int]]]:
+def homology(space: Space[int] | Space[bytes], basis: object, budget: Budget) -> list[tuple[int, list[int]]]:
     """Return rank and orders of cyclic summands of H_k for each degree k, proved by an adapted basis (Lemma A)."""
     entries = sequence(basis)
     require(len(entries) == len(space.sizes), "degrees", f"a basis in each of {len(space.sizes)} degrees is expected")
@@ -468,7 +612,9 @@ def homology(space: Space, basis: object, budget: Budget) -> list[tuple[int, lis
     return groups[::-1]
 
 
-def read_pair(value: list[object], degree: int, space: Space, budget: Budget) -> tuple[Vector, int, Vector]:
+def read_pair(
+    value: list[object], degree: int, space: Space[int] | Space[bytes], budget: Budget
+) -> tuple[Vector, int, Vector]:
     """Return a, e, b with d a = e b; where e is 1 only a is written, and b is d a."""
     require(len(value) in (1, 3), "shape", "a pair is [a], or [a, e, b]")
     a = vector(value[0], space.sizes[degree], budget)
@@ -522,14 +668,20 @@ def check_staircase(size: int, family: list[Vector], entry: dict[str, object], b
             require(alone, "basis", f"cell {cell} leads two vectors, or one with a coefficient that is not ±1")
             seen.add(cell)
     for cells, vectors, inverse in members:
-        rows = [[integer(entry, budget) for entry in sequence(row)] for row in sequence(inverse)]
-        square = len(vectors) == len(cells) == len(rows) and all(len(row) == len(cells) for row in rows)
-        require(square, "group", f"{len(cells)} vectors and the inverse of their square matrix are expected")
-        for i, row in enumerate(rows):
-            budget.spend("cells", len(cells))
-            for j, member in enumerate(vectors):
-                product = sum(entry * member.get(cell, 0) for entry, cell in zip(row, cells, strict=True))
-                require(product == (i == j), "group", "what is given as the inverse of a group is not its inverse")
+        check_inverse(cells, vectors, inverse, budget)
+
+
+def check_inverse(cells: list[int], vectors: list[dict[int, int]], inverse: object, budget: Budget) -> list[list[int]]:
+    """Return the inverse of the square matrix with a row for each cell and a column for each vector, after a check."""
+    rows = [[integer(entry, budget) for entry in sequence(row)] for row in sequence(inverse)]
+    square = len(vectors) == len(cells) == len(rows) and all(len(row) == len(cells) for row in rows)
+    require(square, "group", f"{len(cells)} vectors and the inverse of their square matrix are expected")
+    for i, row in enumerate(rows):
+        budget.spend("cells", len(cells))
+        for j, member in enumerate(vectors):
+            entry = sum(factor * member.get(cell, 0) for factor, cell in zip(row, cells, strict=True))
+            require(entry == (i == j), "group", "what is given as an inverse is not the inverse")
+    return rows
 
 
 # ---- the claim -------------------------------------------------------------------------------------------------------
@@ -556,14 +708,28 @@ def invariant_factors(group: Group) -> Group:
 def prove_by_blocks(statement: Statement, lines: Lines, budget: Budget) -> Total:
     """Check one record for each class of blocks that is no cone, and return the total (stable splitting)."""
     total: Total = {}
-    for name, all_faces, vertices, shifts in block_classes(statement, budget):
-        most = statement.top - min(shifts)
+    unsplit = {pair.text: pair for pair in statement.pairs if not pair.shapes}
+    if unsplit:
+        proofs = sequence(record(lines.next(), ("splitting",))["splitting"])
+        require(len(proofs) == len(unsplit), "splitting", f"{len(unsplit)} pairs need a splitting")
+        for pair, proof in zip(unsplit.values(), proofs, strict=True):
+            pair.split(proof, budget)
+    for pair in statement.pairs:
+        pair.shapes = pair.shapes or unsplit[pair.text].shapes
+    for name, tags, all_faces, shifts in block_classes(statement, budget):
+        weights = [tag for tag in tags if type(tag) is int]
+        simple = len(weights) == len(tags)
+        most = statement.top - min(shifts) if simple else LARGEST
         faces = all_faces[: most + 1]
-        if is_cone(faces, vertices, most):
+        if is_cone(faces, tags, most):
             continue
         value = record(lines.next(), ("basis", "block"))
         require(value["block"] == name, "block", f"the record of block {name} is expected here")
-        groups = homology(simplices(faces), value["basis"], budget)
+        if simple:
+            groups = homology(Simplices(faces, weights), value["basis"], budget)
+        else:
+            alphabets = [((0, 0, ()), (1, 1, ((0, tag),))) if isinstance(tag, int) else tag for tag in tags]
+            groups = homology(Words(faces, alphabets, statement.top - min(shifts), budget), value["basis"], budget)
         for shift, times in shifts.items():
             add(total, groups, shift, times)
     return total
@@ -572,7 +738,8 @@ def prove_by_blocks(statement: Statement, lines: Lines, budget: Budget) -> Total
 def prove_by_cells(statement: Statement, lines: Lines, budget: Budget) -> Total:
     """Check the one record of the whole product, and return the total."""
     total: Total = {}
-    add(total, homology(whole_product(statement, budget), record(lines.next(), ("basis",))["basis"], budget), 0, 1)
+    space = Words(face_masks(statement, budget), [tuple(pair.cells) for pair in statement.pairs], statement.top, budget)
+    add(total, homology(space, record(lines.next(), ("basis",))["basis"], budget), 0, 1)
     return total
 
 

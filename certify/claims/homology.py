@@ -9,9 +9,10 @@ from __future__ import annotations
 
 from collections.abc import Iterator, Mapping
 from dataclasses import dataclass
+from math import prod
 from typing import Any, Literal
 
-from certify.certificate import basis_value, canonical_line
+from certify.certificate import basis_value, canonical_line, vector_value
 from certify.certificate.canonical import integer_value
 from certify.errors import BadInput, ClaimIsFalse
 from certify.exact import AbelianGroup, adapted_basis
@@ -86,6 +87,20 @@ class HomologyClaim:
         """The largest degree whose cells matter: one above the largest degree of the claim."""
         return None if self.degrees is None else self.degrees[-1] + 1
 
+    def opening(self) -> bytes | None:
+        """Return the record that comes first: the splitting of each pair that is given by its cells; None without any."""
+        splittings = {pair: pair.splitting for pair in self.product.pairs if pair.splitting is not None}
+        if self.route == "cells" or not splittings:
+            return None
+        values = [
+            {
+                "basis": [vector_value(v) for v in s.basis],
+                "inverse": [[integer_value(x) for x in row] for row in s.inverse],
+            }
+            for s in splittings.values()
+        ]
+        return canonical_line({"splitting": values})
+
     def tasks(self) -> Iterator[Task]:
         """Yield the work, in the order of the records."""
         if self.route == "cells":
@@ -96,8 +111,10 @@ class HomologyClaim:
 
     @property
     def weight(self) -> int:
-        """The sum of the weights of all tasks, for progress; an upper bound where degrees are restricted."""
-        return 1 if self.route == "cells" else 1 << self.product.complex.vertex_count
+        """The sum of the weights of all tasks, for progress; an upper bound where faces or degrees are restricted."""
+        if self.route == "cells":
+            return 1
+        return prod(sum(times for shape in pair.shapes for _, times in shape.shifts) for pair in self.product.pairs)
 
     def total(self, contributions: Iterator[Contribution]) -> dict[int, AbelianGroup]:
         """Return the groups that these contributions add up to, in the degrees of the claim, zero groups left out."""
@@ -131,7 +148,7 @@ class HomologyClaim:
                 for degree, group in sorted(found.items())
             ],
             "kind": "homology",
-            "pairs": [str(pair) for pair in self.product.pairs],
+            "pairs": [pair.value for pair in self.product.pairs],
             "vertices": complex_.vertex_count,
         }
 
@@ -142,7 +159,7 @@ def solve(task: Task) -> tuple[bytes, Contribution] | None:
         basis = adapted_basis(cell_complex(task.source, task.top))
         return canonical_line({"basis": basis_value(basis)}), Contribution(basis.homology(), {0: 1})
     block = task.source
-    if block.is_cone(block.vertices if task.top is None else task.top - min(block.shifts)):
+    if block.is_cone:
         return None
     basis = adapted_basis(block.chains())
     value = {"basis": basis_value(basis), "block": block.name}

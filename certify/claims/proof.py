@@ -78,6 +78,9 @@ def prove(claim: HomologyClaim, spool: Spool, *, jobs: int = 1, progress: Progre
 
     def contributions() -> Iterator[Contribution]:
         done = 0
+        opening = claim.opening()
+        if opening is not None:
+            spool.add(opening)
         for task, solved in _solved(claim.tasks(), jobs):
             done += task.weight
             if progress is not None:
