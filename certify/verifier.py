@@ -32,7 +32,7 @@ from functools import reduce
 from itertools import combinations, pairwise, product
 from math import comb, gcd, lcm
 from operator import and_, ge
-from typing import Generic, TypeVar
+from typing import Any, Generic, TypeVar
 
 FORMAT = 1
 DIGITS = "0123456789abcdefghijklmnopqrstuvwxyz"
@@ -43,7 +43,7 @@ CHUNK = 1 << 16
 UNDECIDED = {"limit", "unknown-format", "unknown-kind", "unknown-pair", "not-a-certificate", "unreadable"}
 
 
-Cell = TypeVar("Cell", int, bytes)  # a cell of a space: a face as a bit mask, or a word of letters
+Cell = TypeVar("Cell")  # a cell of a space: a face as a bit mask, or a word of letters
 Vector = list[tuple[int, int]]  # cells with coefficients, cells ascending
 Faces = tuple[tuple[int, ...], ...]  # for each number of vertices the faces as ascending bit masks
 Letter = tuple[int, int, tuple[tuple[int, int], ...]]  # a cell of X: degree, 1 if outside A, boundary on other letters
@@ -247,9 +247,8 @@ class Statement:
         space, pairs = (names[0], "") if len(names) == 1 else ("(X,A)", "".join(mixed))
         degrees = sorted(self.groups) if self.degrees is None else self.degrees
         parts = [f"H_{k} ≅ {group_text(self.groups.get(k, Counter()))}" for k in degrees]
+        parts += ["H_k = 0 for all other k"] if self.degrees is None else []
         parts[0] = parts[0].replace(" ", f"({space}^K; ℤ) ", 1)
-        if self.degrees is None:
-            parts.append("H_k = 0 for all other k")
         comma = "," if self.vertices > 9 else ""
         facets = " ".join(comma.join(map(str, facet)) or "∅" for facet in self.facets)
         return f"{', '.join(parts)}; K on {self.vertices} vertices with facets {facets}{pairs}"
@@ -580,7 +579,7 @@ def vector(value: object, size: int, budget: Budget) -> Vector:
     return terms
 
 
-def homology(space: Space[int] | Space[bytes], basis: object, budget: Budget) -> list[tuple[int, list[int]]]:
+def homology(space: Space[Any], basis: object, budget: Budget) -> list[tuple[int, list[int]]]:
     """Return rank and orders of cyclic summands of H_k for each degree k, proved by an adapted basis (Lemma A)."""
     entries = sequence(basis)
     require(len(entries) == len(space.sizes), "degrees", f"a basis in each of {len(space.sizes)} degrees is expected")
@@ -612,9 +611,7 @@ def homology(space: Space[int] | Space[bytes], basis: object, budget: Budget) ->
     return groups[::-1]
 
 
-def read_pair(
-    value: list[object], degree: int, space: Space[int] | Space[bytes], budget: Budget
-) -> tuple[Vector, int, Vector]:
+def read_pair(value: list[object], degree: int, space: Space[Any], budget: Budget) -> tuple[Vector, int, Vector]:
     """Return a, e, b with d a = e b; where e is 1 only a is written, and b is d a."""
     require(len(value) in (1, 3), "shape", "a pair is [a], or [a, e, b]")
     a = vector(value[0], space.sizes[degree], budget)
@@ -749,16 +746,17 @@ ROUTES = {"blocks": prove_by_blocks, "cells": prove_by_cells}
 def read_header(lines: Lines) -> tuple[str, str, object]:
     """Return the claim's name, the route and the raw statement."""
     require(b'"format"' in lines.raw(), "not-a-certificate", "the first line is no certificate header")
-    header = record(value_of(lines.line), ("about", "format", "route", "statement"))
-    known = type(header["format"]) is int and header["format"] == FORMAT
-    require(known, "unknown-format", f"format {str(header['format'])[:40]} is unknown here, {FORMAT} is known")
+    value = value_of(lines.line)
+    version = value.get("format") if type(value) is dict else None
+    known = type(version) is int and version == FORMAT
+    require(known, "unknown-format", f"format {str(version)[:40]} is unknown here, {FORMAT} is known")
+    header = record(value, ("about", "format", "route", "statement"))
     about = record(header["about"], ("claim",), ("labels", "source", "title"))
     texts = [about["claim"], about.get("source", ""), about.get("title", ""), header["route"]]
     prose = all(type(text) is str for text in texts + sequence(about.get("labels", [])))
     require(prose, "shape", "the claim's name, source, title, labels and route are texts")
     named = re.fullmatch(r"[A-Za-z0-9][A-Za-z0-9._-]{0,99}", str(about["claim"]), re.ASCII) is not None
     require(named, "claim-name", "a claim's name has 1 to 100 letters, digits, dots, dashes and underscores")
-    require(header["route"] in ROUTES, "route", f"the route is {' or '.join(map(repr, ROUTES))}")
     return str(about["claim"]), str(header["route"]), header["statement"]
 
 
@@ -791,6 +789,7 @@ def examine(path: str, limits: argparse.Namespace) -> dict[str, str | None]:
         lines = Lines(path, budget)
         report["claim"], route, raw = read_header(lines)
         statement = Statement(raw, budget)
+        require(route in ROUTES, "route", f"the route is {' or '.join(map(repr, ROUTES))}")
         total = ROUTES[route](statement, lines, budget)
         check_end(lines)
         compare(statement, total)

@@ -66,9 +66,11 @@ class AdaptedBasis:
 
     def homology(self) -> tuple[AbelianGroup, ...]:
         """Return H_k for each degree k: one ℤ for each z of degree k, one ℤ/e for each pair of degree k + 1."""
-        orders = [[pair.e for pair in degree.pairs] for degree in self.degrees[1:]] + [[]]
         return tuple(
-            AbelianGroup.of(len(degree.cycles), above) for degree, above in zip(self.degrees, orders, strict=True)
+            AbelianGroup.of(
+                len(degree.cycles), [pair.e for above in self.degrees[k + 1 : k + 2] for pair in above.pairs]
+            )
+            for k, degree in enumerate(self.degrees)
         )
 
 
