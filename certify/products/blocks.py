@@ -1,15 +1,15 @@
 """Blocks of the stable splitting, equal ones merged.
 
-The cellular chain complex of (X, A)^K is the direct sum, over all choices of one summand of C(X_i) for each vertex i, of
-tensor products cut down to supports in K; docs/mathematics.md proves it. For discs the choices are the sets I of vertices,
-and a block is the augmented oriented chain complex of the full subcomplex K_I, shifted. After the vertices that are kept
-have been moved down to 1, 2, …, many blocks are the same complex, and one record serves them all.
+The cellular chain complex of (X, A)^K is the direct sum, over all choices of one summand of C(X_i) for each vertex i,
+of tensor products cut down to supports in K; docs/mathematics.md proves it. For discs the choices are the sets I of
+vertices, and a block is the augmented oriented chain complex of the full subcomplex K_I, shifted. After the vertices
+that are kept have been moved down to 1, 2, …, many blocks are the same complex, and one record serves them all.
 """
 
 from __future__ import annotations
 
 from collections.abc import Iterator, Mapping
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 from itertools import pairwise
 
 from certify.exact import BasedComplex, Entries
@@ -17,7 +17,7 @@ from certify.products.cells import word_complex
 from certify.products.space import PolyhedralProduct
 from certify.products.splitting import Alphabet, Letter, Move, Tag
 
-__all__ = ["BATCH", "DIGITS", "Block", "block_classes"]
+__all__ = ["BATCH", "DIGITS", "Block", "Choices", "block_classes"]
 
 BATCH = 1 << 18
 """Faces that are merged together at most; a constant of the certificate format."""
@@ -59,6 +59,14 @@ class Block:
         """The tags, if all of them are numbers: then cells are faces."""
         weights = tuple(tag for tag in self.tags if isinstance(tag, int))
         return weights if len(weights) == len(self.tags) else None
+
+    def truncated(self, top: int | None) -> Block:
+        """Return the block without the cells that have a degree above `top` after each shift."""
+        if top is None:
+            return self
+        most = top - min(self.shifts)
+        faces = self.faces if self.weights is None else _skeleton(self.faces, most)
+        return replace(self, faces=faces, most=most)
 
     @property
     def is_cone(self) -> bool:
@@ -135,7 +143,29 @@ def block_classes(product: PolyhedralProduct, top: int | None = None) -> Iterato
             pending += [(vertex + 1, run) for run in reversed(_runs(level))]
             continue
         for (tags, faces), (name, shifts) in states.items():
-            yield _block(name, tags, faces, shifts, top)
+            yield Block(name, tags, faces, shifts).truncated(top)
+
+
+class Choices:
+    """The blocks of single words, without merging; what words asked for in turn have in common is decided once."""
+
+    def __init__(self, product: PolyhedralProduct, top: int | None = None) -> None:
+        self._product = product
+        self._top = top
+        self._path: list[tuple[str, _State, dict[int, int]]] = [("", ((), _relevant_faces(product, top)), {0: 1})]
+
+    def block(self, word: str) -> Block | None:
+        """Return the whole block of a word; None where it chooses a non-face, or has no cells up to ``top - 1``."""
+        while not word.startswith(self._path[-1][0]):
+            self._path.pop()
+        for vertex in range(len(self._path) - 1, len(word)):
+            shape = self._product.pairs[vertex].shapes[DIGITS.index(word[vertex])]
+            _, (tags, faces), shifts = self._path[-1]
+            left = _decide(faces, len(tags), shape.move) if faces else ()
+            kept = tags if shape.move in (Move.STAY, Move.OUT) else (*tags, shape.tag)
+            self._path.append((word[: vertex + 1], (kept, left), _convolved(shifts, shape.shifts, self._top)))
+        name, (tags, faces), shifts = self._path[-1]
+        return Block(name, tags, faces, shifts) if faces and shifts else None
 
 
 def _relevant_faces(product: PolyhedralProduct, top: int | None) -> _Masks:
@@ -143,14 +173,6 @@ def _relevant_faces(product: PolyhedralProduct, top: int | None) -> _Masks:
     masks = product.complex.face_masks()
     least = min((cell.degree for pair in product.pairs for cell in pair.cells if cell.outside), default=1)
     return masks if top is None or least == 0 else _skeleton(masks, top // least)
-
-
-def _block(name: str, tags: tuple[Tag, ...], faces: _Masks, shifts: Mapping[int, int], top: int | None) -> Block:
-    if top is None:
-        return Block(name, tags, faces, shifts)
-    most = top - min(shifts)
-    simple = all(isinstance(tag, int) for tag in tags)
-    return Block(name, tags, _skeleton(faces, most) if simple else faces, shifts, most)
 
 
 def _skeleton(faces: _Masks, most: int) -> _Masks:

@@ -176,9 +176,9 @@ def parse_pair(text: str) -> Pair:
     Parameters
     ----------
     text : str
-        ``(D2, S1)`` a disc and its boundary sphere; ``(S3, *)``, ``(CP3, *)``, ``(RP3, *)`` a sphere or projective space
-        and a point; ``(cone 3, 3)`` the cone on three points and the points; ``(P3(2), *)`` the Moore space Pⁿ(q), a cell
-        of degree n glued with degree q to an (n - 1)-sphere, and a point.
+        ``(D2, S1)`` a disc and its boundary sphere; ``(S3, *)``, ``(CP3, *)``, ``(RP3, *)`` a sphere or projective
+        space and a point; ``(cone 3, 3)`` the cone on three points and the points; ``(P3(2), *)`` the Moore space
+        Pⁿ(q), a cell of degree n glued with degree q to an (n - 1)-sphere, and a point.
 
     Raises
     ------

@@ -40,7 +40,7 @@ class Move(IntEnum):
     KEEP = 2
     """Cells on both sides: the vertex stays, and lies in the face where the cell is outside."""
     INNER = 3
-    """Cells e and t, both in A: the vertex is left out, and a free vertex, in a face with every face, takes its place."""
+    """Cells e and t, both in A: the vertex gives way to one that lies in a face with every face that avoided it."""
     OUTER = 4
     """Cells e and t, both outside A: the same with the link."""
 
