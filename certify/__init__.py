@@ -4,7 +4,7 @@ from certify.certificate import Spool
 from certify.claims import HomologyClaim, Proof, prove
 from certify.errors import BadInput, CertifyError, ClaimIsFalse, InternalError, LimitReached
 from certify.exact import AbelianGroup
-from certify.products import DiscPair, PolyhedralProduct, parse_pair, parse_pairs
+from certify.products import Pair, PolyhedralProduct, parse_pair, parse_pairs
 from certify.simplicial import SimplicialComplex
 
 __all__ = [
@@ -12,10 +12,10 @@ __all__ = [
     "BadInput",
     "CertifyError",
     "ClaimIsFalse",
-    "DiscPair",
     "HomologyClaim",
     "InternalError",
     "LimitReached",
+    "Pair",
     "PolyhedralProduct",
     "Proof",
     "SimplicialComplex",

@@ -6,6 +6,8 @@ import hashlib
 import json
 from typing import Any
 
+from certify.exact.groups import decimal
+
 __all__ = ["FORMAT", "LARGEST", "canonical_bytes", "canonical_line", "fingerprint", "integer_value"]
 
 FORMAT = 1
@@ -27,7 +29,7 @@ def integer_value(number: int) -> int | str:
     ----------
     RFC 7493, The I-JSON message format, section 2.2.
     """
-    return number if -LARGEST <= number <= LARGEST else str(number)
+    return number if -LARGEST <= number <= LARGEST else decimal(number)
 
 
 def canonical_bytes(value: Any) -> bytes:

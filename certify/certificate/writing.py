@@ -51,7 +51,11 @@ class Spool:
     def add(self, line: bytes) -> None:
         """Append a record, given as its canonical line."""
         self.records += 1
-        self._file.write(line)
+        try:
+            self._file.write(line)
+        except OSError as error:
+            found = f"{error.strerror or error}"
+            raise BadInput(where="the temporary folder", expected="room for the records", found=found) from error
 
     def write(self, path: Path, header: dict[str, Any]) -> int:
         """Write header, records and end record to `path` and return the number of bytes of the file.

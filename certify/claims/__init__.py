@@ -1,6 +1,20 @@
 """Claim kinds: what each states, how it is computed, which records prove it. One module a kind."""
 
-from certify.claims.homology import HomologyClaim
+from certify.claims.base import Claim
+from certify.claims.homology import HomologyClaim, SmashClaim
 from certify.claims.proof import Progress, Proof, prove
+from certify.claims.real_toric import RealToricClaim
+from certify.claims.splitting import SummandClaim, TableClaim, TorClaim
 
-__all__ = ["HomologyClaim", "Progress", "Proof", "prove"]
+__all__ = [
+    "Claim",
+    "HomologyClaim",
+    "Progress",
+    "Proof",
+    "RealToricClaim",
+    "SmashClaim",
+    "SummandClaim",
+    "TableClaim",
+    "TorClaim",
+    "prove",
+]

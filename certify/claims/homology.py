@@ -1,149 +1,161 @@
-"""The claim kind ``homology``: the integral homology groups of a polyhedral product.
+"""The claim kinds ``homology`` and ``smash``: integral homology of a polyhedral product, or polyhedral smash product.
 
-Statement: H_k((X, A)^K; ℤ) for all degrees, or for a list of degrees. Routes: ``blocks``, one record for each class
-of blocks of the stable splitting that is no cone, or ``cells``, one record for the whole product. Each record is an
-adapted basis (Lemmas A and B of docs/mathematics.md).
+Routes: ``blocks``, one record for each class of blocks of the stable splitting that is no cone; ``orbits``, the same
+with one block for each orbit of the symmetries; ``cells``, one record for the whole product. Each record is an adapted
+basis (Lemmas A and B of docs/mathematics.md).
 """
 
 from __future__ import annotations
 
-from collections.abc import Iterator, Mapping
-from dataclasses import dataclass
-from typing import Any, Literal
+from collections.abc import Iterable, Iterator
+from dataclasses import dataclass, replace
+from math import prod
+from typing import Any, ClassVar, Literal
 
-from certify.certificate import basis_value, canonical_line
 from certify.certificate.canonical import integer_value
-from certify.errors import BadInput, ClaimIsFalse
-from certify.exact import AbelianGroup, adapted_basis
+from certify.certificate.records import vector_value
+from certify.claims.base import Claim, Contribution, Groups, Key, Sum, Task, checked_degrees
+from certify.errors import BadInput
+from certify.exact import AbelianGroup, BasedComplex
 from certify.products import Block, PolyhedralProduct, block_classes, cell_complex
+from certify.simplicial.complexes import SimplicialComplex
+from certify.symmetry import automorphism_generators, orbit_classes
 
-__all__ = ["Contribution", "HomologyClaim", "Route", "Task", "solve"]
+__all__ = ["HomologyClaim", "Route", "SmashClaim"]
 
-Route = Literal["blocks", "cells"]
-Groups = Mapping[int, AbelianGroup]
-
-
-@dataclass(frozen=True, slots=True)
-class Contribution:
-    """What one record adds to the homology: groups by degree before the shifts, and how often each shift occurs."""
-
-    groups: tuple[AbelianGroup, ...]
-    shifts: Mapping[int, int]
+Route = Literal["blocks", "cells", "orbits"]
 
 
 @dataclass(frozen=True, slots=True)
-class Task:
-    """One piece of work that leads to one record, or to none if the block is a cone.
+class _WholeProduct:
+    """The product as one piece of work."""
 
-    Parameters
-    ----------
-    source : Block or PolyhedralProduct
-        A class of blocks, or the whole product.
-    top : int or None
-        Cells of larger degree are left out.
-    """
-
-    source: Block | PolyhedralProduct
+    product: PolyhedralProduct
     top: int | None
 
-    @property
-    def weight(self) -> int:
-        """How many blocks the task settles."""
-        return sum(self.source.shifts.values()) if isinstance(self.source, Block) else 1
+    def chains(self) -> BasedComplex:
+        """Return its cellular chain complex."""
+        return cell_complex(self.product, self.top)
 
 
-@dataclass(frozen=True, slots=True)
-class HomologyClaim:
+@dataclass(frozen=True)
+class HomologyClaim(Claim):
     """A claim about the integral homology of a polyhedral product.
 
     Parameters
     ----------
     product : PolyhedralProduct
     degrees : tuple of int, or None
-        The degrees that the claim speaks of, ascending; None for all.
+        The degrees that the claim speaks of; None for all.
     groups : mapping from degree to AbelianGroup, or None
         The claimed groups; a degree that is missing is claimed to be zero. None asks for the value.
-    route : {"blocks", "cells"}
+    route : {"blocks", "orbits", "cells"}
     """
 
     product: PolyhedralProduct
     degrees: tuple[int, ...] | None = None
     groups: Groups | None = None
     route: Route = "blocks"
+    kind: ClassVar[str] = "homology"
 
     def __post_init__(self) -> None:
         """Refuse degrees that are none, and groups outside the degrees."""
-        if self.degrees is not None:
-            if not self.degrees or any(degree < 0 for degree in self.degrees):
-                raise BadInput(where="degrees", expected="at least one degree from 0 on", found=f"{list(self.degrees)}")
-            object.__setattr__(self, "degrees", tuple(sorted(set(self.degrees))))
-        for degree in self.groups or ():
-            if degree < 0 or (self.degrees is not None and degree not in self.degrees):
-                raise BadInput(where="groups", expected="degrees that the claim speaks of", found=f"degree {degree}")
+        object.__setattr__(self, "degrees", checked_degrees(self.degrees, self.groups))
+
+    @property
+    def base(self) -> SimplicialComplex:
+        """The complex K that the space is built over."""
+        return self.product.complex
 
     @property
     def top(self) -> int | None:
         """The largest degree whose cells matter: one above the largest degree of the claim."""
         return None if self.degrees is None else self.degrees[-1] + 1
 
+    def opening(self) -> Iterator[dict[str, Any]]:
+        """Yield the splitting of each pair that is given by its cells, and the generators of the route ``orbits``."""
+        splittings = {pair: pair.splitting for pair in self.product.pairs if pair.splitting is not None}
+        if splittings and self.route != "cells":
+            values = []
+            for splitting in splittings.values():
+                inverse = [[integer_value(x) for x in row] for row in splitting.inverse]
+                values.append({"basis": [vector_value(v) for v in splitting.basis], "inverse": inverse})
+            yield {"splitting": values}
+        if self.route == "orbits":
+            generators = automorphism_generators(self.product)
+            yield {"generators": [[image + 1 for image in generator] for generator in generators]}
+
     def tasks(self) -> Iterator[Task]:
         """Yield the work, in the order of the records."""
+        product = self._reduced()
         if self.route == "cells":
-            yield Task(self.product, self.top)
+            yield Task(_WholeProduct(product, self.top))
             return
-        for block in block_classes(self.product, self.top):
-            yield Task(block, self.top)
+        if self.route == "blocks":
+            blocks = block_classes(product, self.top)
+        else:
+            blocks = orbit_classes(product, automorphism_generators(product), self.top)
+        for block in blocks:
+            yield Task(block, sum(block.shifts.values()))
 
     @property
     def weight(self) -> int:
-        """The sum of the weights of all tasks, for progress; an upper bound where degrees are restricted."""
-        return 1 if self.route == "cells" else 1 << self.product.complex.vertex_count
+        """The number of blocks, where some may have no faces."""
+        if self.route == "cells":
+            return 1
+        pairs = self._reduced().pairs
+        return prod(sum(times for shape in pair.shapes for _, times in shape.shifts) for pair in pairs)
 
-    def total(self, contributions: Iterator[Contribution]) -> dict[int, AbelianGroup]:
-        """Return the groups that these contributions add up to, in the degrees of the claim, zero groups left out."""
-        ranks: dict[int, int] = {}
-        orders: dict[int, list[int]] = {}
+    def total(self, contributions: Iterable[Contribution]) -> dict[Key, AbelianGroup]:
+        """Return the groups that these contributions add up to, in the degrees of the claim."""
+        found = Sum()
         for contribution in contributions:
-            for degree, group in enumerate(contribution.groups):
-                for shift, times in contribution.shifts.items() if group else ():
-                    ranks[degree + shift] = ranks.get(degree + shift, 0) + group.rank * times
-                    orders.setdefault(degree + shift, []).extend(group.torsion * times)
-        found = {degree: AbelianGroup.of(rank, orders[degree]) for degree, rank in sorted(ranks.items())}
-        return {k: group for k, group in found.items() if self.degrees is None or k in self.degrees}
+            source = contribution.source
+            for shift, times in (source.shifts if isinstance(source, Block) else {0: 1}).items():
+                for degree, group in enumerate(contribution.groups, shift):
+                    if group and (self.degrees is None or degree in self.degrees):
+                        found.add(degree, group.rank, group.torsion, times)
+        return found.groups()
 
-    def check(self, found: Groups) -> None:
-        """Raise ClaimIsFalse at the first degree in which the claimed group is not the one found."""
-        if self.groups is None:
-            return
-        for degree in sorted(found.keys() | self.groups.keys()):
-            claimed, real = (groups.get(degree, AbelianGroup()) for groups in (self.groups, found))
-            if claimed != real:
-                raise ClaimIsFalse(what=f"H_{degree}({self.product}; ℤ)", claimed=str(claimed), found=str(real))
+    def name(self, key: Key) -> str:
+        """Write a homology group as in print."""
+        return f"H_{key}({self.product}; ℤ)"
 
-    def statement(self, found: Groups) -> dict[str, Any]:
-        """Return the statement of the certificate, with vertices numbered from 1 in the order of the labels."""
-        complex_ = self.product.complex
-        return {
-            "degrees": None if self.degrees is None else list(self.degrees),
-            "facets": [[number + 1 for number in facet] for facet in complex_.facets],
-            "groups": [
-                [degree, integer_value(group.rank), [integer_value(order) for order in group.torsion]]
-                for degree, group in sorted(found.items())
-            ],
-            "kind": "homology",
-            "pairs": [str(pair) for pair in self.product.pairs],
-            "vertices": complex_.vertex_count,
-        }
+    def fields(self) -> dict[str, Any]:
+        """Return degrees and pairs."""
+        degrees = None if self.degrees is None else list(self.degrees)
+        return {"degrees": degrees, "pairs": [pair.value for pair in self.product.pairs]}
+
+    def _reduced(self) -> PolyhedralProduct:
+        """Return the product with the summands that count."""
+        return self.product
 
 
-def solve(task: Task) -> tuple[bytes, Contribution] | None:
-    """Return the record of a task as a line, with what it adds to the homology; None for a cone."""
-    if isinstance(task.source, PolyhedralProduct):
-        basis = adapted_basis(cell_complex(task.source, task.top))
-        return canonical_line({"basis": basis_value(basis)}), Contribution(basis.homology(), {0: 1})
-    block = task.source
-    if block.is_cone(block.vertices if task.top is None else task.top - min(block.shifts)):
-        return None
-    basis = adapted_basis(block.chains())
-    value = {"basis": basis_value(basis), "block": block.name}
-    return canonical_line(value), Contribution(basis.homology(), block.shifts)
+@dataclass(frozen=True)
+class SmashClaim(HomologyClaim):
+    """A claim about the reduced integral homology of the polyhedral smash product of pairs with names over K.
+
+    The summand of the base point is left out at each vertex. (X, A)^K splits after one suspension into the polyhedral
+    smash products over the full subcomplexes K_I.
+    """
+
+    kind: ClassVar[str] = "smash"
+
+    def __post_init__(self) -> None:
+        """Refuse what has no base point of its own, and the direct route."""
+        super().__post_init__()
+        if any(pair.splitting is not None for pair in self.product.pairs):
+            raise BadInput(
+                where="pair", expected="pairs with a name for a smash product", found="a pair given by its cells"
+            )
+        if self.route == "cells":
+            raise BadInput(where="route", expected="blocks or orbits for a smash product", found="cells")
+
+    def name(self, key: Key) -> str:
+        """Write a reduced homology group as in print."""
+        return f"H̃_{key}(polyhedral smash product {self.product}; ℤ)"
+
+    def _reduced(self) -> PolyhedralProduct:
+        """Return the product without the base points, which are the first summands."""
+        pairs = tuple(replace(pair, shapes=pair.shapes[1:]) for pair in self.product.pairs)
+        return PolyhedralProduct(self.product.complex, pairs)

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import signal
 from collections import deque
 from collections.abc import Callable, Iterable, Iterator, Mapping
 from concurrent.futures import Future, ProcessPoolExecutor
@@ -10,8 +11,8 @@ from itertools import islice
 from pathlib import Path
 from typing import Any
 
-from certify.certificate import FORMAT, Spool, fingerprint
-from certify.claims.homology import Contribution, HomologyClaim, Task, solve
+from certify.certificate import FORMAT, Spool, canonical_line, fingerprint
+from certify.claims.base import Claim, Contribution, Key, Task, solve
 from certify.exact import AbelianGroup
 
 __all__ = ["Progress", "Proof", "prove"]
@@ -22,7 +23,7 @@ Progress = Callable[[int, int], None]
 _CHUNK = 64
 _AHEAD = 4
 
-_Solved = tuple[bytes, Contribution] | None
+_Solved = tuple[bytes | None, tuple[AbelianGroup, ...]]
 
 
 @dataclass(frozen=True, slots=True)
@@ -31,15 +32,15 @@ class Proof:
 
     Parameters
     ----------
-    claim : HomologyClaim
+    claim : Claim
     groups : mapping from degree to AbelianGroup
         The groups that are not zero.
     spool : Spool
         The records; closed by whoever called `prove`.
     """
 
-    claim: HomologyClaim
-    groups: Mapping[int, AbelianGroup]
+    claim: Claim
+    groups: Mapping[Key, AbelianGroup]
     spool: Spool
 
     @property
@@ -58,12 +59,12 @@ class Proof:
         return self.spool.write(path, header)
 
 
-def prove(claim: HomologyClaim, spool: Spool, *, jobs: int = 1, progress: Progress | None = None) -> Proof:
+def prove(claim: Claim, spool: Spool, *, jobs: int = 1, progress: Progress | None = None) -> Proof:
     """Compute a claim and collect the records that prove it.
 
     Parameters
     ----------
-    claim : HomologyClaim
+    claim : Claim
     spool : Spool
         Receives the records.
     jobs : int
@@ -78,13 +79,15 @@ def prove(claim: HomologyClaim, spool: Spool, *, jobs: int = 1, progress: Progre
 
     def contributions() -> Iterator[Contribution]:
         done = 0
-        for task, solved in _solved(claim.tasks(), jobs):
+        for value in claim.opening():
+            spool.add(canonical_line(value))
+        for task, (line, groups) in _solved(claim.tasks(), jobs):
             done += task.weight
             if progress is not None:
                 progress(done, claim.weight)
-            if solved is not None:
-                spool.add(solved[0])
-                yield solved[1]
+            if line is not None:
+                spool.add(line)
+            yield Contribution(groups, task.source)
 
     groups = claim.total(contributions())
     claim.check(groups)
@@ -98,7 +101,8 @@ def _solved(tasks: Iterable[Task], jobs: int) -> Iterator[tuple[Task, _Solved]]:
         return
     rest = iter(tasks)
     waiting: deque[tuple[list[Task], Future[list[_Solved]]]] = deque()
-    with ProcessPoolExecutor(jobs) as pool:
+    # A worker leaves Ctrl-C to the process that started it, and ends without a word.
+    with ProcessPoolExecutor(jobs, initializer=signal.signal, initargs=(signal.SIGINT, signal.SIG_DFL)) as pool:
         try:
             while True:
                 while len(waiting) < _AHEAD * jobs and (chunk := list(islice(rest, _CHUNK))):

@@ -12,7 +12,7 @@ from types import MappingProxyType
 
 from certify.claims.homology import HomologyClaim, Route
 from certify.exact import AbelianGroup
-from certify.products import DiscPair, PolyhedralProduct, parse_pair, parse_pairs
+from certify.products import Pair, PolyhedralProduct, parse_pair, parse_pairs
 from certify.simplicial import SimplicialComplex
 from certify.tables import KeyFault, Keys, Table, in_words, shown
 
@@ -68,7 +68,7 @@ def _complex(table: Table, complexes: Complexes) -> SimplicialComplex:
     return complexes[name]
 
 
-def _pairs(table: Table, vertices: int) -> tuple[DiscPair, ...]:
+def _pairs(table: Table, vertices: int) -> tuple[Pair, ...]:
     """Return one pair a vertex, from a text for all or a list with a text for each."""
     expected = 'a pair like "(D1, S0)", or a list with one for each vertex'
     value = table.value("pair", expected)

@@ -3,8 +3,8 @@
 The algorithm goes from the top degree down. In each degree it reduces the boundary columns of those basis
 elements that are not already boundaries, on unit pivots: the *lead* of a reduced column is its cell with the
 largest number. A column whose lead is no unit, or is taken and cannot be cleared, waits; what is left at the end
-is a small core, which a diagonal form with both transformations settles. The unused columns of the left
-transformation are cycles-to-be of the degree below and take part there in place of the cells of the core.
+is a small core, which a diagonal form settles. Its boundaries are completed to a basis of the cells that they use up;
+what completes them takes part in the degree below in place of these cells.
 """
 
 from __future__ import annotations
@@ -12,9 +12,10 @@ from __future__ import annotations
 from collections.abc import Iterator
 from dataclasses import dataclass, field
 
+from certify.exact.completion import completion
 from certify.exact.complexes import BasedComplex
 from certify.exact.groups import AbelianGroup
-from certify.exact.smith import diagonalise
+from certify.exact.smith import diagonal_columns
 from certify.exact.staircase import NATURAL, Group, Layout, arrange, is_natural
 from certify.exact.vectors import Entries, Vector, add_multiple, combination, entries
 
@@ -66,9 +67,11 @@ class AdaptedBasis:
 
     def homology(self) -> tuple[AbelianGroup, ...]:
         """Return H_k for each degree k: one ℤ for each z of degree k, one ℤ/e for each pair of degree k + 1."""
-        orders = [[pair.e for pair in degree.pairs] for degree in self.degrees[1:]] + [[]]
         return tuple(
-            AbelianGroup.of(len(degree.cycles), above) for degree, above in zip(self.degrees, orders, strict=True)
+            AbelianGroup.of(
+                len(degree.cycles), [pair.e for above in self.degrees[k + 1 : k + 2] for pair in above.pairs]
+            )
+            for k, degree in enumerate(self.degrees)
         )
 
 
@@ -225,23 +228,26 @@ class _Degree:
     def _diagonal(self, elements: list[_Element]) -> None:
         """Settle the elements together, by a diagonal form of the matrix of their boundaries."""
         rows = sorted({row for element in elements for row in element.boundary})
-        form = diagonalise([[element.boundary.get(row, 0) for element in elements] for row in rows])
+        matrix = [[element.boundary.get(row, 0) for element in elements] for row in rows]
+        orders, right = diagonal_columns(matrix)
         home = elements[0].home
         self.classes.append([element.home for element in elements])
         mixed = [
-            _Element(combination((form.right[i][j], e.chain.items()) for i, e in enumerate(elements)), {}, home)
+            _Element(
+                combination((right[i][j], element.chain.items()) for i, element in enumerate(elements)),
+                combination((right[i][j], element.boundary.items()) for i, element in enumerate(elements)),
+                home,
+            )
             for j in range(len(elements))
         ]
-        columns = [
-            {row: line[j] for row, line in zip(rows, form.left, strict=True) if line[j]} for j in range(len(rows))
-        ]
-        rank = len(form.entries)
-        for element, e, column in zip(mixed, form.entries, columns, strict=False):
-            self._accept_pair(element, e, entries(column), rows[0])
-        self.cycles += [(entries(element.chain), home) for element in mixed[rank:]]
-        self.below.classes.append(rows)
-        self.below.carried += [(column, rows[0]) for column in columns[rank:]]
-        self.below.used.update(rows)
+        boundaries = [{row: x // e for row, x in a.boundary.items()} for a, e in zip(mixed, orders, strict=False)]
+        leads, carried = completion(boundaries)
+        for element, e, boundary in zip(mixed, orders, boundaries, strict=False):
+            self._accept_pair(element, e, entries(boundary), leads[0])
+        self.cycles += [(entries(element.chain), home) for element in mixed[len(orders) :]]
+        self.below.classes.append(leads)
+        self.below.carried += [(vector, leads[0]) for vector in carried]
+        self.below.used.update(leads)
 
     # -- the result --------------------------------------------------------------------------------------------
 

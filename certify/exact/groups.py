@@ -7,12 +7,17 @@ from collections.abc import Callable, Iterable
 from dataclasses import dataclass
 from math import gcd
 
+from flint import fmpz
+
 from certify.errors import BadInput
 
-__all__ = ["AbelianGroup", "superscript"]
+__all__ = ["AbelianGroup", "decimal", "superscript"]
 
 _TERM = re.compile(
-    r"(?:Z|ℤ)(?:\^(?P<rank>\d{1,40}))?|(?:Z|ℤ)/(?P<one>\d{1,40})|\((?:Z|ℤ)/(?P<many>\d{1,40})\)\^(?P<count>\d{1,40})"
+    r"(?P<zero>0)"
+    r"|[Zℤ](?:\s*\^\s*(?P<rank>[0-9]{1,4000}))?"
+    r"|[Zℤ]\s*/\s*(?P<one>[0-9]{1,4000})"
+    r"|\(\s*[Zℤ]\s*/\s*(?P<many>[0-9]{1,4000})\s*\)\s*\^\s*(?P<count>[0-9]{1,40})"
 )
 _DIGITS = str.maketrans("0123456789", "⁰¹²³⁴⁵⁶⁷⁸⁹")
 _PLAIN = str.maketrans("⁰¹²³⁴⁵⁶⁷⁸⁹", "0123456789")
@@ -56,10 +61,7 @@ class AbelianGroup:
         orders: list[int] = []
         plain = re.sub(r"([⁰¹²³⁴⁵⁶⁷⁸⁹]+)", lambda raised: "^" + raised[1].translate(_PLAIN), text)
         for summand in re.split(r"[+⊕]", plain):
-            term = re.sub(r"\s+", "", summand)
-            if term == "0":
-                continue
-            match = _TERM.fullmatch(term)
+            match = _TERM.fullmatch(summand.strip())
             order = int(match["one"] or match["many"] or 2) if match else 0
             count = int(match["count"] or 1) if match else 0
             if match is None or order < 1 or count > _MOST_SUMMANDS:
@@ -70,7 +72,7 @@ class AbelianGroup:
                 )
             if match["one"] or match["many"]:
                 orders += [order] * count
-            else:
+            elif not match["zero"]:
                 rank += int(match["rank"] or 1)
         return cls.of(rank, orders)
 
@@ -94,7 +96,7 @@ class AbelianGroup:
         >>> AbelianGroup.of(3, [2, 2]).plain()
         'Z^3 + (Z/2)^2'
         """
-        return self._written("Z", " + ", lambda exponent: f"^{exponent}")
+        return self._written("Z", " + ", lambda exponent: f"^{decimal(exponent)}")
 
     def _written(self, ring: str, plus: str, power: _Power) -> str:
         terms = []
@@ -102,7 +104,8 @@ class AbelianGroup:
             terms.append(ring + (power(self.rank) if self.rank > 1 else ""))
         for order in sorted(set(self.torsion)):
             count = self.torsion.count(order)
-            terms.append(f"{ring}/{order}" if count == 1 else f"({ring}/{order}){power(count)}")
+            cyclic = f"{ring}/{decimal(order)}"
+            terms.append(cyclic if count == 1 else f"({cyclic}){power(count)}")
         return plus.join(terms) or "0"
 
 
@@ -114,7 +117,18 @@ def superscript(number: int) -> str:
     >>> superscript(34)
     '³⁴'
     """
-    return str(number).translate(_DIGITS)
+    return decimal(number).translate(_DIGITS)
+
+
+def decimal(number: int) -> str:
+    """Write an integer of any size; Python itself refuses beyond some thousand digits.
+
+    Examples
+    --------
+    >>> len(decimal(10**5000))
+    5001
+    """
+    return str(fmpz(number))
 
 
 def _invariant_factors(orders: Iterable[int]) -> tuple[int, ...]:

@@ -8,7 +8,7 @@ from flint import fmpz_mat
 
 from certify.errors import InternalError
 
-__all__ = ["Diagonal", "Matrix", "diagonalise", "inverse"]
+__all__ = ["Diagonal", "Matrix", "diagonal_columns", "diagonalise", "hermite_transformation", "inverse"]
 
 Matrix = list[list[int]]
 
@@ -75,6 +75,24 @@ def diagonalise(matrix: Matrix) -> Diagonal:
     )
 
 
+def diagonal_columns(matrix: Matrix) -> tuple[tuple[int, ...], Matrix]:
+    """Return diagonal entries e and a unimodular matrix R: column j of ``matrix @ R`` is e_j times a vector b_j.
+
+    The b_j are a basis of a direct summand of the lattice of all columns; behind them ``matrix @ R`` is zero.
+
+    Notes
+    -----
+    Row operations do not change R, so the matrix is replaced by its Hermite form, which has no more rows than columns.
+
+    Examples
+    --------
+    >>> diagonal_columns([[2], [4], [6]])
+    ((2,), [[1]])
+    """
+    form = diagonalise([row for row in _integers(fmpz_mat(matrix).hnf()) if any(row)])
+    return form.entries, form.right
+
+
 def inverse(matrix: Matrix) -> Matrix:
     """Return the inverse of a unimodular matrix: ``matrix @ result == 1``.
 
@@ -96,6 +114,13 @@ def inverse(matrix: Matrix) -> Matrix:
     if any(entry.q != 1 for row in table for entry in row):
         raise InternalError("a change of basis is not unimodular; please report the sheet that led here")
     return [[int(entry.p) for entry in row] for row in table]
+
+
+def hermite_transformation(matrix: Matrix) -> tuple[Matrix, Matrix]:
+    """Return the row Hermite form H of a matrix, and a unimodular U with ``U @ matrix == H``."""
+    form = fmpz_mat(matrix)
+    hermite, moves = _hermite(form, _identity(form.nrows()))
+    return _integers(hermite), _integers(moves)
 
 
 def _identity(size: int) -> fmpz_mat:

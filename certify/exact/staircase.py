@@ -83,7 +83,7 @@ def arrange(size: int, family: Sequence[tuple[Entries, int]], classes: Iterable[
     Raises
     ------
     InternalError
-        If the family is no basis.
+        If the vectors of a group of two cells or more have no inverse; a family that is no basis may pass otherwise.
 
     Examples
     --------

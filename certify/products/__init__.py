@@ -2,12 +2,12 @@
 
 from certify.products.blocks import Block, block_classes
 from certify.products.cells import cell_complex
-from certify.products.pairs import DiscPair, parse_pair, parse_pairs
+from certify.products.pairs import Pair, parse_pair, parse_pairs
 from certify.products.space import PolyhedralProduct
 
 __all__ = [
     "Block",
-    "DiscPair",
+    "Pair",
     "PolyhedralProduct",
     "block_classes",
     "cell_complex",

@@ -1,53 +1,79 @@
 """Blocks of the stable splitting, equal ones merged.
 
-For disc pairs the cellular chain complex of (X, A)^K is the direct sum, over the sets I of vertices, of the augmented
-oriented chain complex of the full subcomplex K_I, shifted by Σ_{i ∈ I} (n_i - 1); docs/mathematics.md proves it. After
-the vertices of I have been moved down to 1, 2, …, many K_I are the same complex, and one record serves them all.
+The cellular chain complex of (X, A)^K is the direct sum, over all choices of one summand of C(X_i) for each vertex i,
+of tensor products cut down to supports in K; docs/mathematics.md proves it. For discs the choices are the sets I of
+vertices, and a block is the augmented oriented chain complex of the full subcomplex K_I, shifted. After the vertices
+that are kept have been moved down to 1, 2, …, many blocks are the same complex, and one record serves them all.
 """
 
 from __future__ import annotations
 
 from collections.abc import Iterator, Mapping
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 from itertools import pairwise
 
 from certify.exact import BasedComplex, Entries
+from certify.products.cells import word_complex
 from certify.products.space import PolyhedralProduct
+from certify.products.splitting import Alphabet, Letter, Move, Tag
 
-__all__ = ["BATCH", "Block", "block_classes"]
+__all__ = ["BATCH", "DIGITS", "Block", "Choices", "block_classes"]
 
 BATCH = 1 << 18
 """Faces that are merged together at most; a constant of the certificate format."""
 
+DIGITS = "0123456789abcdefghijklmnopqrstuvwxyz"
+"""The digits of the names of blocks: the number of the shape that is chosen at a vertex."""
+
 _Masks = tuple[int, ...]
-_States = dict[tuple[int, _Masks], tuple[str, dict[int, int]]]
+_State = tuple[tuple[Tag, ...], _Masks]
+_States = dict[_State, tuple[str, dict[int, int]]]
 
 
 @dataclass(frozen=True, slots=True)
 class Block:
-    """All the sets I whose full subcomplexes become the same complex when I is moved down to 1, 2, ….
+    """All choices of summands that lead to the same complex when the vertices that are kept are moved down to 1, 2, ….
 
     Parameters
     ----------
     name : str
-        The first such I as a 0/1 word, a digit for each vertex.
+        The first such choice as a word, a digit for each vertex. For discs: 1 for the vertices in I, 0 for the others.
+    tags : tuple of Tag
+        What the vertices that are kept bring; for discs all are 1.
     faces : tuple of int
-        The faces as bit masks, sorted by size and mask, ∅ first.
-    vertices : int
-        The number of elements of I.
+        The complex on these vertices as bit masks, sorted by size and mask, ∅ first.
     shifts : mapping
-        For each degree shift, the number of sets I that have it.
+        For each degree shift, the number of choices that have it.
+    most : int or None
+        Cells of larger degree, before the shift, are left out.
     """
 
     name: str
+    tags: tuple[Tag, ...]
     faces: _Masks
-    vertices: int
     shifts: Mapping[int, int]
+    most: int | None = None
 
-    def is_cone(self, most: int) -> bool:
-        """Tell whether a vertex completes each face of fewer than `most` vertices to a face (Lemma C)."""
+    @property
+    def weights(self) -> tuple[int, ...] | None:
+        """The tags, if all of them are numbers: then cells are faces."""
+        weights = tuple(tag for tag in self.tags if isinstance(tag, int))
+        return weights if len(weights) == len(self.tags) else None
+
+    def truncated(self, top: int | None) -> Block:
+        """Return the block without the cells that have a degree above `top` after each shift."""
+        if top is None:
+            return self
+        most = top - min(self.shifts)
+        faces = self.faces if self.weights is None else _skeleton(self.faces, most)
+        return replace(self, faces=faces, most=most)
+
+    @property
+    def is_cone(self) -> bool:
+        """Whether a vertex with tag 1 completes each face of fewer than `most` vertices to a face (Lemma C)."""
         known = set(self.faces)
-        apexes = (1 << self.vertices) - 1
+        most = len(self.tags) + 1 if self.most is None or self.weights is None else self.most
+        apexes = sum(1 << place for place, tag in enumerate(self.tags) if tag == 1)
         for mask in self.faces:
             if mask.bit_count() < most:
                 rest = apexes & ~mask
@@ -61,25 +87,33 @@ class Block:
         return bool(apexes)
 
     def chains(self) -> BasedComplex:
-        """Return the augmented oriented chain complex; degree k is spanned by the faces of k vertices."""
+        """Return the chain complex of the block, before the shift."""
+        weights = self.weights
+        if weights is None:
+            return word_complex(self.faces, [_alphabet(tag) for tag in self.tags], self.most)
         degrees: list[list[int]] = [[] for _ in range(self.faces[-1].bit_count() + 1)]
         for mask in self.faces:
             degrees[mask.bit_count()].append(mask)
         boundaries: list[tuple[Entries, ...]] = [((),)]
         for below, faces in pairwise(degrees):
             numbers = {mask: number for number, mask in enumerate(below)}
-            boundaries.append(tuple([_boundary(mask, numbers) for mask in faces]))
+            boundaries.append(tuple([_boundary(mask, numbers, weights) for mask in faces]))
         return BasedComplex(tuple(boundaries))
 
 
-def _boundary(mask: int, below: Mapping[int, int]) -> Entries:
+def _alphabet(tag: Tag) -> Alphabet:
+    """Return the cells t and e with d e = n t for a number n."""
+    return (Letter(0, False), Letter(1, True, ((0, tag),))) if isinstance(tag, int) else tag
+
+
+def _boundary(mask: int, below: Mapping[int, int], weights: tuple[int, ...]) -> Entries:
     """Return the boundary of a face, entries ascending: leaving out a smaller vertex gives a larger mask."""
     terms = []
     rest = mask
     sign = 1
     while rest:
         bit = rest & -rest
-        terms.append((below[mask ^ bit], sign))
+        terms.append((below[mask ^ bit], sign * weights[bit.bit_length() - 1]))
         sign = -sign
         rest ^= bit
     terms.reverse()
@@ -97,23 +131,48 @@ def block_classes(product: PolyhedralProduct, top: int | None = None) -> Iterato
 
     Notes
     -----
-    The vertices are decided one after the other; sets that leave the same complex on the vertices kept and undecided
-    are merged on the way, so the cost follows the number of different complexes and not the 2^m sets. A level with more
-    than `BATCH` faces is cut into runs, finished one after the other, which bounds the memory.
+    The vertices are decided one after the other; choices that leave the same complex on the vertices kept and undecided
+    are merged on the way, so the cost follows the number of different complexes and not that of the choices. A level
+    with more than `BATCH` faces is cut into runs, finished one after the other, which bounds the memory.
     """
-    m = product.complex.vertex_count
-    masks = product.complex.face_masks()
-    if top is not None:
-        masks = _skeleton(masks, top)
-    pending: list[tuple[int, _States]] = [(0, {(0, masks): ("", {0: 1})})]
+    pending: list[tuple[int, _States]] = [(0, {((), _relevant_faces(product, top)): ("", {0: 1})})]
     while pending:
         vertex, states = pending.pop()
-        if vertex < m:
-            level = _decide(states, product.pairs[vertex].n - 1, top)
+        if vertex < len(product.pairs):
+            level = _decide_all(states, product, vertex, top)
             pending += [(vertex + 1, run) for run in reversed(_runs(level))]
             continue
-        for (kept, faces), (name, shifts) in states.items():
-            yield Block(name, faces if top is None else _skeleton(faces, top - min(shifts)), kept, shifts)
+        for (tags, faces), (name, shifts) in states.items():
+            yield Block(name, tags, faces, shifts).truncated(top)
+
+
+class Choices:
+    """The blocks of single words, without merging; what words asked for in turn have in common is decided once."""
+
+    def __init__(self, product: PolyhedralProduct, top: int | None = None) -> None:
+        self._product = product
+        self._top = top
+        self._path: list[tuple[str, _State, dict[int, int]]] = [("", ((), _relevant_faces(product, top)), {0: 1})]
+
+    def block(self, word: str) -> Block | None:
+        """Return the whole block of a word; None where it chooses a non-face, or has no cells up to ``top - 1``."""
+        while not word.startswith(self._path[-1][0]):
+            self._path.pop()
+        for vertex in range(len(self._path) - 1, len(word)):
+            shape = self._product.pairs[vertex].shapes[DIGITS.index(word[vertex])]
+            _, (tags, faces), shifts = self._path[-1]
+            left = _decide(faces, len(tags), shape.move) if faces else ()
+            kept = tags if shape.move in (Move.STAY, Move.OUT) else (*tags, shape.tag)
+            self._path.append((word[: vertex + 1], (kept, left), _convolved(shifts, shape.shifts, self._top)))
+        name, (tags, faces), shifts = self._path[-1]
+        return Block(name, tags, faces, shifts) if faces and shifts else None
+
+
+def _relevant_faces(product: PolyhedralProduct, top: int | None) -> _Masks:
+    """Return the faces that carry cells up to the degree `top`."""
+    masks = product.complex.face_masks()
+    least = min((cell.degree for pair in product.pairs for cell in pair.cells if cell.outside), default=1)
+    return masks if top is None or least == 0 else _skeleton(masks, top // least)
 
 
 def _skeleton(faces: _Masks, most: int) -> _Masks:
@@ -121,32 +180,54 @@ def _skeleton(faces: _Masks, most: int) -> _Masks:
     return tuple(mask for mask in faces if mask.bit_count() <= most)
 
 
-def _decide(states: _States, shift: int, top: int | None) -> _States:
-    """Return the states after one more vertex has been left out of I, or taken in with this shift."""
+def _decide_all(states: _States, product: PolyhedralProduct, vertex: int, top: int | None) -> _States:
+    """Return the states after a summand has been chosen for one more vertex."""
     level: _States = {}
-    for (kept, faces), (name, shifts) in states.items():
-        _merge(level, (kept, _without(faces, kept)), name + "0", shifts)
-        shifted = {old + shift: n for old, n in shifts.items() if top is None or old + shift < top}
-        if shifted:
-            _merge(level, (kept + 1, faces), name + "1", shifted)
+    for (tags, faces), (name, shifts) in states.items():
+        for digit, shape in zip(DIGITS, product.pairs[vertex].shapes, strict=False):
+            moved = _convolved(shifts, shape.shifts, top)
+            left = _decide(faces, len(tags), shape.move) if moved else ()
+            if left:
+                kept = tags if shape.move in (Move.STAY, Move.OUT) else (*tags, shape.tag)
+                _merge(level, (kept, left), name + digit, moved)
     return level
 
 
-def _merge(level: _States, state: tuple[int, _Masks], name: str, shifts: dict[int, int]) -> None:
-    """Add the sets of a state to a level; the first name stays."""
+def _convolved(shifts: Mapping[int, int], more: tuple[tuple[int, int], ...], top: int | None) -> dict[int, int]:
+    """Return the shifts of pairs of choices, below `top`."""
+    total: dict[int, int] = {}
+    for shift, number in shifts.items():
+        for extra, times in more:
+            if top is None or shift + extra < top:
+                total[shift + extra] = total.get(shift + extra, 0) + number * times
+    return total
+
+
+def _merge(level: _States, state: _State, name: str, shifts: dict[int, int]) -> None:
+    """Add the choices of a state to a level; the first name stays."""
     if state not in level:
-        level[state] = (name, dict(shifts))
+        level[state] = (name, shifts)
         return
     known = level[state][1]
     for shift, number in shifts.items():
         known[shift] = known.get(shift, 0) + number
 
 
-def _without(faces: _Masks, place: int) -> _Masks:
-    """Return the faces that avoid the vertex at `place`, with the vertices above moved down by one."""
-    below = (1 << place) - 1
+def _decide(faces: _Masks, place: int, move: Move) -> _Masks:
+    """Return what becomes of the faces when the vertex at `place` is decided; nothing if no face is left."""
+    if move == Move.KEEP:
+        return faces
+    bit = 1 << place
+    if move in (Move.OUT, Move.OUTER):
+        chosen = [mask ^ bit for mask in faces if mask & bit]
+    else:
+        chosen = [mask for mask in faces if not mask & bit]
+    if move in (Move.INNER, Move.OUTER):
+        free = chosen + [mask | bit for mask in chosen]
+        return tuple(sorted(free, key=lambda mask: (mask.bit_count(), mask)))
+    below = bit - 1
     above = ~below
-    return tuple([mask & below | mask >> 1 & above for mask in faces if not mask >> place & 1])
+    return tuple([mask & below | mask >> 1 & above for mask in chosen])
 
 
 def _runs(level: _States) -> list[_States]:

@@ -1,74 +1,76 @@
-"""The direct route: the cellular chain complex of the whole product."""
+"""Tensor products of the cells at each vertex, cut down to a simplicial complex."""
 
 from __future__ import annotations
 
-from itertools import product as choices
+from collections.abc import Iterable, Sequence
 
 from certify.exact import BasedComplex, Entries, entries
-from certify.products.pairs import DiscPair
 from certify.products.space import PolyhedralProduct
+from certify.products.splitting import Alphabet
 
-__all__ = ["cell_complex"]
+__all__ = ["cell_complex", "word_complex"]
 
-_POINT, _LOWER, _UPPER = range(3)
-"""The cells of a disc pair: a point, the cell t of the sphere (for n = 1 its other point), the cell e of the disc."""
-
-_Cell = tuple[int, ...]
+_Word = tuple[int, ...]
 
 
 def cell_complex(space: PolyhedralProduct, top: int | None = None) -> BasedComplex:
-    """Return the cellular chain complex of (X, A)^K.
+    """Return the cellular chain complex of (X, A)^K, the direct route.
 
     Parameters
     ----------
     space : PolyhedralProduct
     top : int, optional
         Leave out cells of larger degree.
+    """
+    return word_complex(space.complex.face_masks(), [pair.cells for pair in space.pairs], top)
+
+
+def word_complex(faces: Iterable[int], alphabets: Sequence[Alphabet], top: int | None = None) -> BasedComplex:
+    """Return the complex whose cells have a letter for each vertex, the vertices with letters outside A forming a face.
+
+    Parameters
+    ----------
+    faces : iterable of int
+        Faces as bit masks; the complex need not be closed where `top` makes the rest unnecessary.
+    alphabets : sequence of Alphabet
+        The cells at each vertex.
+    top : int, optional
+        Leave out cells of larger degree.
 
     Notes
     -----
-    Cells are tuples with a cell of X_i for each vertex i; those vertices whose cell is outside A_i form a face of K. In
-    each degree they are ordered by that face as a bit mask, then by the mask of the vertices with cell t. The boundary is the Leibniz rule with sign
-    (-1)^(degree of the factors before). The number of cells is Σ_σ 2^(m - |σ|).
+    In each degree cells are ordered by the mask of that face, then lexicographically. The boundary is the Leibniz rule
+    with sign (-1)^(degree of the factors before). For (D¹, S⁰) there are Σ_σ 2^(m - |σ|) cells.
     """
-    degrees: dict[int, list[_Cell]] = {0: []}
-    for mask in space.complex.face_masks():
-        options = [(_UPPER,) if mask >> i & 1 else (_POINT, _LOWER) for i in range(len(space.pairs))]
-        least = sum(pair.n for i, pair in enumerate(space.pairs) if mask >> i & 1)
-        if top is not None and least > top:
-            continue
-        for cell in choices(*options):
-            degree = sum(_degree(pair, letter) for pair, letter in zip(space.pairs, cell, strict=True))
-            if top is None or degree <= top:
-                degrees.setdefault(degree, []).append(cell)
+    known = set(faces)
+    words: list[tuple[int, _Word, int]] = [(0, (), 0)]
+    for vertex, alphabet in enumerate(alphabets):
+        letters = [(i, letter.outside << vertex, letter.degree) for i, letter in enumerate(alphabet)]
+        words = [
+            (mask | bit, (*word, i), degree + more)
+            for mask, word, degree in words
+            for i, bit, more in letters
+            if mask | bit in known and (top is None or degree + more <= top)
+        ]
+    degrees: list[list[_Word]] = [[] for _ in range(max((degree for _, _, degree in words), default=-1) + 1)]
+    for _, word, degree in sorted(words):
+        degrees[degree].append(word)
     boundaries: list[tuple[Entries, ...]] = []
-    below: dict[_Cell, int] = {}
-    for degree in range(max(degrees) + 1):
-        cells = sorted(degrees.get(degree, []), key=_masks)
-        boundaries.append(tuple(_boundary(space, cell, below) for cell in cells))
-        below = {cell: number for number, cell in enumerate(cells)}
+    below: dict[_Word, int] = {}
+    for cells in degrees:
+        boundaries.append(tuple(_boundary(word, alphabets, below) for word in cells))
+        below = {word: number for number, word in enumerate(cells)}
     return BasedComplex(tuple(boundaries))
 
 
-def _masks(cell: _Cell) -> tuple[int, int]:
-    """Return the vertices with cell e, and those with cell t, as bit masks."""
-    uppers = sum(1 << place for place, letter in enumerate(cell) if letter == _UPPER)
-    return uppers, sum(1 << place for place, letter in enumerate(cell) if letter == _LOWER)
-
-
-def _degree(pair: DiscPair, letter: int) -> int:
-    return (0, pair.n - 1, pair.n)[letter]
-
-
-def _boundary(space: PolyhedralProduct, cell: _Cell, below: dict[_Cell, int]) -> Entries:
-    """Return d of a cell: d e = t, and for (D¹, S⁰) d e = 1 - 0."""
+def _boundary(word: _Word, alphabets: Sequence[Alphabet], below: dict[_Word, int]) -> Entries:
+    """Return d of a cell."""
     terms: dict[int, int] = {}
     sign = 1
-    for place, (pair, letter) in enumerate(zip(space.pairs, cell, strict=True)):
-        if letter == _UPPER:
-            terms[below[(*cell[:place], _LOWER, *cell[place + 1 :])]] = sign
-            if pair.n == 1:
-                terms[below[(*cell[:place], _POINT, *cell[place + 1 :])]] = -sign
-        if _degree(pair, letter) % 2:
+    for place, (i, alphabet) in enumerate(zip(word, alphabets, strict=True)):
+        letter = alphabet[i]
+        for j, coefficient in letter.boundary:
+            terms[below[(*word[:place], j, *word[place + 1 :])]] = sign * coefficient
+        if letter.degree % 2:
             sign = -sign
     return entries(terms)

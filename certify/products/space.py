@@ -5,7 +5,7 @@ from __future__ import annotations
 from dataclasses import dataclass
 
 from certify.errors import BadInput
-from certify.products.pairs import DiscPair
+from certify.products.pairs import Pair
 from certify.simplicial.complexes import SimplicialComplex
 
 __all__ = ["PolyhedralProduct"]
@@ -19,7 +19,7 @@ class PolyhedralProduct:
     ----------
     complex : SimplicialComplex
         K, with ghost vertices where it has them.
-    pairs : tuple of DiscPair
+    pairs : tuple of Pair
         (X_i, A_i) for each vertex, in the order of the labels of K.
 
     References
@@ -28,7 +28,7 @@ class PolyhedralProduct:
     """
 
     complex: SimplicialComplex
-    pairs: tuple[DiscPair, ...]
+    pairs: tuple[Pair, ...]
 
     def __post_init__(self) -> None:
         """Refuse a list of pairs of the wrong length."""

@@ -1,0 +1,176 @@
+"""What all claim kinds share: a table of groups, proved by records that each hold an adapted basis."""
+
+from __future__ import annotations
+
+from abc import ABC, abstractmethod
+from collections.abc import Iterable, Iterator, Mapping
+from dataclasses import dataclass
+from typing import Any, ClassVar, Protocol
+
+from certify.certificate import basis_value, canonical_line
+from certify.certificate.canonical import LARGEST, integer_value
+from certify.errors import BadInput, ClaimIsFalse, LimitReached
+from certify.exact import AbelianGroup, BasedComplex, adapted_basis
+from certify.products import Block
+from certify.simplicial.complexes import SimplicialComplex
+
+__all__ = ["Claim", "Contribution", "Groups", "Key", "Source", "Sum", "Task", "checked_degrees", "solve"]
+
+Key = int | tuple[int, ...]
+"""The degree of a group, or its degrees."""
+
+Groups = Mapping[Key, AbelianGroup]
+
+
+class Source(Protocol):
+    """Something that has a chain complex; it must be possible to send it to another process."""
+
+    def chains(self) -> BasedComplex:
+        """Return the complex, degrees from 0."""
+        ...
+
+
+@dataclass(frozen=True, slots=True)
+class Task:
+    """One piece of work that leads to one record, or to none if it is a block that is a cone.
+
+    Parameters
+    ----------
+    source : Source
+    weight : int
+        How much of the whole the task settles, in the unit of ``Claim.weight``.
+    """
+
+    source: Source
+    weight: int = 1
+
+
+@dataclass(frozen=True, slots=True)
+class Contribution:
+    """What a task has found: the groups by degree from 0 (none for a cone), and where they come from."""
+
+    groups: tuple[AbelianGroup, ...]
+    source: Source
+
+
+class Claim(ABC):
+    """A claim that groups, each under a degree or several, are those of a space; a kind is a subclass.
+
+    Attributes
+    ----------
+    kind, route : str
+        As they stand in the certificate.
+    groups : mapping or None
+        The claimed groups; what is missing is claimed to be zero. None asks for the value.
+    """
+
+    kind: ClassVar[str]
+    route: str
+    groups: Groups | None
+
+    @property
+    @abstractmethod
+    def base(self) -> SimplicialComplex:
+        """The complex K that the space is built over."""
+
+    @abstractmethod
+    def tasks(self) -> Iterator[Task]:
+        """Yield the work, in the order of the records."""
+
+    @abstractmethod
+    def total(self, contributions: Iterable[Contribution]) -> dict[Key, AbelianGroup]:
+        """Return the groups that these contributions add up to, zero groups left out, keys ascending."""
+
+    @abstractmethod
+    def name(self, key: Key) -> str:
+        """Write the group with this key as in print."""
+
+    @abstractmethod
+    def fields(self) -> dict[str, Any]:
+        """Return what the statement holds besides complex, groups and kind."""
+
+    @property
+    def weight(self) -> int:
+        """The sum of the weights of all tasks, or a bound for it."""
+        return 1
+
+    def opening(self) -> Iterator[dict[str, Any]]:
+        """Yield the records that come before those of the tasks."""
+        yield from ()
+
+    def check(self, found: Groups) -> None:
+        """Raise ClaimIsFalse at the first key under which the claimed group is not the one found."""
+        for key in sorted(found.keys() | (self.groups or {}).keys(), key=_tuple) if self.groups is not None else ():
+            claimed, real = ((groups or {}).get(key, AbelianGroup()) for groups in (self.groups, found))
+            if claimed != real:
+                raise ClaimIsFalse(what=self.name(key), claimed=str(claimed), found=str(real))
+
+    def statement(self, found: Groups) -> dict[str, Any]:
+        """Return the statement of the certificate, with vertices numbered from 1 in the order of the labels."""
+        groups = [
+            [*_tuple(key), integer_value(group.rank), [integer_value(order) for order in group.torsion]]
+            for key, group in sorted(found.items(), key=lambda item: _tuple(item[0]))
+        ]
+        facets = [[number + 1 for number in facet] for facet in self.base.facets]
+        shared = {"facets": facets, "groups": groups, "kind": self.kind, "vertices": self.base.vertex_count}
+        return shared | self.fields()
+
+
+_MOST_TORSION = 10**6
+
+
+class Sum:
+    """Groups that are added up under keys."""
+
+    def __init__(self) -> None:
+        self._ranks: dict[Key, int] = {}
+        self._orders: dict[Key, list[int]] = {}
+
+    def add(self, key: Key, rank: int, orders: Iterable[int] = (), times: int = 1) -> None:
+        """Add a group under a key, so many times."""
+        self._ranks[key] = self._ranks.get(key, 0) + rank * times
+        torsion = self._orders.setdefault(key, [])
+        found = list(orders)
+        if len(torsion) + len(found) * times > _MOST_TORSION:
+            raise LimitReached(f"more than {_MOST_TORSION} torsion summands in one degree cannot be written out")
+        torsion.extend(found * times)
+
+    def groups(self) -> dict[Key, AbelianGroup]:
+        """Return the sums that are not zero, keys ascending."""
+        keys = sorted(self._ranks, key=_tuple)
+        groups = ((key, AbelianGroup.of(self._ranks[key], self._orders[key])) for key in keys)
+        return {key: group for key, group in groups if group}
+
+
+def solve(task: Task) -> tuple[bytes | None, tuple[AbelianGroup, ...]]:
+    """Return the record of a task as a line, with the groups by degree; no record and no groups for a cone."""
+    source = task.source
+    if isinstance(source, Block) and source.is_cone:
+        return None, ()
+    basis = adapted_basis(source.chains())
+    value: dict[str, Any] = {"basis": basis_value(basis)}
+    if isinstance(source, Block):
+        value["block"] = source.name
+    return canonical_line(value), basis.homology()
+
+
+def checked_degrees(degrees: Iterable[int] | None, groups: Groups | None) -> tuple[int, ...] | None:
+    """Return the degrees that a claim speaks of, ascending, each once.
+
+    Raises
+    ------
+    BadInput
+        If there are none, one is out of range, or a group is claimed in another degree.
+    """
+    if degrees is not None:
+        degrees = tuple(sorted(set(degrees)))
+        if not degrees or degrees[0] < 0 or degrees[-1] >= LARGEST:
+            raise BadInput(where="degrees", expected="at least one degree from 0 on", found=f"{list(degrees)}")
+    for key in groups or ():
+        if not isinstance(key, int) or key < 0 or (degrees is not None and key not in degrees):
+            raise BadInput(where="groups", expected="degrees that the claim speaks of", found=f"degree {key}")
+    return degrees
+
+
+def _tuple(key: Key) -> tuple[int, ...]:
+    return (key,) if isinstance(key, int) else key

@@ -1,0 +1,71 @@
+"""The claim kind ``real-toric``: integral homology of a real toric space."""
+
+from __future__ import annotations
+
+from collections.abc import Iterable, Iterator
+from dataclasses import dataclass
+from typing import Any, ClassVar
+
+from certify.claims.base import Claim, Contribution, Groups, Key, Sum, Task, checked_degrees
+from certify.exact import AbelianGroup
+from certify.products.real_toric import RealToricSpace
+from certify.simplicial.complexes import SimplicialComplex
+
+__all__ = ["RealToricClaim"]
+
+
+@dataclass(frozen=True)
+class RealToricClaim(Claim):
+    """A claim about the integral homology of (D¹, S⁰)^K / ker λ.
+
+    Parameters
+    ----------
+    complex : SimplicialComplex
+    rows : tuple of str
+        λ by rows, a digit 0 or 1 for each vertex in the order of the labels.
+    degrees : tuple of int, or None
+    groups : mapping from degree to AbelianGroup, or None
+
+    Raises
+    ------
+    BadInput
+        If λ does not fit, or is not injective on a face.
+    """
+
+    complex: SimplicialComplex
+    rows: tuple[str, ...]
+    degrees: tuple[int, ...] | None = None
+    groups: Groups | None = None
+    route: str = "cells"
+    kind: ClassVar[str] = "real-toric"
+
+    def __post_init__(self) -> None:
+        """Refuse degrees that are none, groups outside the degrees, and a λ that does not act freely."""
+        object.__setattr__(self, "degrees", checked_degrees(self.degrees, self.groups))
+        RealToricSpace(self.complex, self.rows)
+
+    @property
+    def base(self) -> SimplicialComplex:
+        """The complex K that the space is built over."""
+        return self.complex
+
+    def tasks(self) -> Iterator[Task]:
+        """Yield the one piece of work."""
+        yield Task(RealToricSpace(self.complex, self.rows, None if self.degrees is None else self.degrees[-1] + 1))
+
+    def total(self, contributions: Iterable[Contribution]) -> dict[Key, AbelianGroup]:
+        """Return the groups in the degrees of the claim."""
+        found = Sum()
+        for contribution in contributions:
+            for degree, group in enumerate(contribution.groups):
+                if self.degrees is None or degree in self.degrees:
+                    found.add(degree, group.rank, group.torsion)
+        return found.groups()
+
+    def name(self, key: Key) -> str:
+        """Write a homology group as in print."""
+        return f"H_{key}((D¹,S⁰)^K/ker λ; ℤ)"
+
+    def fields(self) -> dict[str, Any]:
+        """Return degrees and rows."""
+        return {"degrees": None if self.degrees is None else list(self.degrees), "rows": list(self.rows)}

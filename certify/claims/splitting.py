@@ -1,0 +1,184 @@
+"""The claim kinds ``tor``, ``table`` and ``summand``: full subcomplexes one by one, and what they add up to."""
+
+from __future__ import annotations
+
+from collections.abc import Hashable, Iterable, Iterator
+from dataclasses import dataclass
+from typing import Any, ClassVar
+
+from certify.claims.base import Claim, Contribution, Groups, Key, Sum, Task
+from certify.exact import AbelianGroup, BasedComplex
+from certify.products import Block, PolyhedralProduct, block_classes, parse_pairs
+from certify.products.blocks import Choices
+from certify.simplicial.complexes import SimplicialComplex
+from certify.simplicial.operations import full_subcomplex, link
+
+__all__ = ["SummandClaim", "TableClaim", "TorClaim"]
+
+
+def _subcomplexes(complex_: SimplicialComplex) -> PolyhedralProduct:
+    """Return a product whose blocks are the full subcomplexes, each with its number of vertices as shift."""
+    return PolyhedralProduct(complex_, parse_pairs("(D2, S1)", complex_.vertex_count))
+
+
+@dataclass(frozen=True)
+class TorClaim(Claim):
+    """A claim about the bigraded groups Tor_{i,2j}(ℤ[K], ℤ) of the face ring, which are H^{-i,2j} of (D², S¹)^K.
+
+    Parameters
+    ----------
+    complex : SimplicialComplex
+    groups : mapping from (i, j) to AbelianGroup, or None
+        The claimed groups under i and j; a key that is missing is claimed to be zero. None asks for the value.
+
+    Notes
+    -----
+    Tor_{i,2j} is the direct sum over the sets I of j vertices of the reduced cohomology of K_I in degree j - i - 1.
+
+    References
+    ----------
+    M. Hochster, Cohen-Macaulay rings, combinatorics, and simplicial complexes, 1977 (from memory).
+    """
+
+    complex: SimplicialComplex
+    groups: Groups | None = None
+    route: str = "blocks"
+    kind: ClassVar[str] = "tor"
+
+    @property
+    def weight(self) -> int:
+        """The number of full subcomplexes."""
+        return 1 << self.complex.vertex_count
+
+    @property
+    def base(self) -> SimplicialComplex:
+        """The complex K that the space is built over."""
+        return self.complex
+
+    def tasks(self) -> Iterator[Task]:
+        """Yield the classes of full subcomplexes."""
+        for block in block_classes(_subcomplexes(self.complex)):
+            yield Task(block, sum(block.shifts.values()))
+
+    def total(self, contributions: Iterable[Contribution]) -> dict[Key, AbelianGroup]:
+        """Return the groups under (i, j): free parts of homology, and torsion one degree up, as cohomology has it."""
+        found = Sum()
+        for contribution in contributions:
+            block = contribution.source
+            if isinstance(block, Block):
+                j, times = len(block.tags), sum(block.shifts.values())
+                for size, group in enumerate(contribution.groups):
+                    found.add((j - size, j), group.rank, (), times)
+                    found.add((j - size - 1, j), 0, group.torsion, times)
+        return found.groups()
+
+    def name(self, key: Key) -> str:
+        """Write a group as in print."""
+        i, j = key if isinstance(key, tuple) else (key, 0)
+        return f"Tor_{i},{2 * j}(ℤ[K], ℤ)"
+
+    def fields(self) -> dict[str, Any]:
+        """Return nothing more."""
+        return {}
+
+
+@dataclass(frozen=True)
+class TableClaim(TorClaim):
+    """A claim about the reduced homology of every full subcomplex: the whole table of the stable splitting.
+
+    Parameters
+    ----------
+    complex : SimplicialComplex
+    groups : mapping from (mask, q) to AbelianGroup, or None
+        The claimed H̃_q(K_I; ℤ) under I as a bit mask (bit i for vertex i + 1) and q from -1 on.
+    """
+
+    kind: ClassVar[str] = "table"
+
+    def total(self, contributions: Iterable[Contribution]) -> dict[Key, AbelianGroup]:
+        """Return the groups of each full subcomplex."""
+        known = {c.source.faces: c.groups for c in contributions if isinstance(c.source, Block)}
+        found = Sum()
+        m = self.complex.vertex_count
+        choices = Choices(_subcomplexes(self.complex))
+        for number in range(1 << m):
+            word = f"{number:0{m}b}" if m else ""
+            block = choices.block(word)
+            for size, group in enumerate(known[block.faces] if block else ()):
+                found.add((int(word[::-1] or "0", 2), size - 1), group.rank, group.torsion)
+        return found.groups()
+
+    def name(self, key: Key) -> str:
+        """Write a reduced homology group as in print."""
+        mask, q = key if isinstance(key, tuple) else (key, 0)
+        labels = ",".join(str(label) for place, label in enumerate(self.complex.labels) if mask >> place & 1)
+        return f"H̃_{q}(K_{{{labels}}}; ℤ)"
+
+
+@dataclass(frozen=True)
+class SummandClaim(Claim):
+    """A claim about one summand of the stable splitting: the reduced homology of a link, restricted to some vertices.
+
+    Parameters
+    ----------
+    complex : SimplicialComplex
+    kept : iterable of labels
+        The vertices I of the full subcomplex of the link.
+    out : iterable of labels
+        The face J whose link is taken; empty for a full subcomplex of K itself.
+    groups : mapping from degree to AbelianGroup, or None
+        The claimed groups by degree from -1 on.
+
+    Raises
+    ------
+    BadInput
+        If `out` is no face, a label is unknown, or a vertex is kept and out at once.
+    """
+
+    complex: SimplicialComplex
+    kept: tuple[Hashable, ...]
+    out: tuple[Hashable, ...] = ()
+    groups: Groups | None = None
+    route: str = "cells"
+    kind: ClassVar[str] = "summand"
+
+    @property
+    def base(self) -> SimplicialComplex:
+        """The complex K that the space is built over."""
+        return self.complex
+
+    def tasks(self) -> Iterator[Task]:
+        """Yield the one piece of work."""
+        part = full_subcomplex(link(self.complex, self.out), self.kept)
+        yield Task(_Augmented(part))
+
+    def total(self, contributions: Iterable[Contribution]) -> dict[Key, AbelianGroup]:
+        """Return the reduced homology."""
+        found = Sum()
+        for contribution in contributions:
+            for degree, group in enumerate(contribution.groups, -1):
+                found.add(degree, group.rank, group.torsion)
+        return found.groups()
+
+    def name(self, key: Key) -> str:
+        """Write a reduced homology group as in print."""
+        kept, out = (",".join(map(str, labels)) for labels in (self.kept, self.out))
+        return f"H̃_{key}((link of {{{out}}})_{{{kept}}}; ℤ)"
+
+    def fields(self) -> dict[str, Any]:
+        """Return the numbers of the vertices that are kept, and out."""
+        return {
+            "kept": [number + 1 for number in self.complex.numbers(self.kept)],
+            "out": [number + 1 for number in self.complex.numbers(self.out)],
+        }
+
+
+@dataclass(frozen=True, slots=True)
+class _Augmented:
+    """A simplicial complex as one piece of work."""
+
+    complex: SimplicialComplex
+
+    def chains(self) -> BasedComplex:
+        """Return its augmented oriented chain complex; degree k is spanned by the faces of k vertices."""
+        return Block("", (1,) * self.complex.vertex_count, self.complex.face_masks(), {0: 1}).chains()

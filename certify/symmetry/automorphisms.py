@@ -1,0 +1,37 @@
+"""The automorphism group of a complex that respects the pairs at its vertices."""
+
+from __future__ import annotations
+
+import igraph
+
+from certify.products import PolyhedralProduct
+
+__all__ = ["Permutation", "automorphism_generators"]
+
+Permutation = tuple[int, ...]
+"""The images of the vertex numbers 0, 1, …, in order."""
+
+
+def automorphism_generators(product: PolyhedralProduct) -> tuple[Permutation, ...]:
+    """Return generators of the group of all permutations of the vertices that preserve K and the pairs.
+
+    Notes
+    -----
+    These are the colour-preserving automorphisms of the graph of vertices and facets, found by igraph. The group of
+    order 1 has no generators.
+
+    Examples
+    --------
+    >>> from certify.products import parse_pairs
+    >>> from certify.simplicial.families import points
+    >>> automorphism_generators(PolyhedralProduct(points(2), parse_pairs("(D1, S0)", 2)))
+    ((1, 0),)
+    """
+    complex_ = product.complex
+    m = complex_.vertex_count
+    names = sorted({pair.name for pair in product.pairs})
+    colours = [names.index(pair.name) for pair in product.pairs] + [len(names)] * len(complex_.facets)
+    edges = [(vertex, m + number) for number, facet in enumerate(complex_.facets) for vertex in facet]
+    graph = igraph.Graph(n=m + len(complex_.facets), edges=edges)
+    found = graph.automorphism_group(color=colours)
+    return tuple(sorted({tuple(image[:m]) for image in found} - {tuple(range(m))}))
