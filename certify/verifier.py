@@ -282,7 +282,9 @@ class Statement:
                 shown[0] = "{" + ",".join(str(i + 1) for i in range(self.vertices) if key[0] >> i & 1) + "}"
             name = head.format(*shown) + (of if not parts else "")
             parts.append(f"{name} ≅ {group_text(self.groups.get(key, Counter()))}")
-        parts += [rest if parts else rest.replace(" = 0 for all other", f"{of} = 0 for all")] if self.degrees is None else []
+        parts += (
+            [rest if parts else rest.replace(" = 0 for all other", f"{of} = 0 for all")] if self.degrees is None else []
+        )
         comma = "," if self.vertices > 9 else ""
         facets = " ".join(comma.join(map(str, facet)) or "∅" for facet in self.facets)
         return f"{', '.join(parts)}; K on {self.vertices} vertices with facets {facets}{pairs}"

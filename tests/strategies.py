@@ -70,7 +70,7 @@ def complexes_with_vertices(draw: st.DrawFn, max_vertices: int = 6) -> tuple[Sim
 def complexes_with_large_face(draw: st.DrawFn, max_vertices: int = 6) -> tuple[SimplicialComplex, list[Label]]:
     """Draw a complex and the labels of a face with at least two vertices."""
     k = draw(complexes(max_vertices - 2))
-    chosen = face_of(draw(st.integers(1, 2**max_vertices - 1)) | 0b11)
+    chosen = face_of(draw(st.integers(0, 2**max_vertices - 1).filter(lambda mask: mask.bit_count() >= 2)))
     labels = range(1, max(k.vertex_count, chosen[-1] + 1) + 1)
     return SimplicialComplex.from_faces(labels, [*k.facets, chosen]), [vertex + 1 for vertex in chosen]
 

@@ -5,7 +5,7 @@ from __future__ import annotations
 from abc import ABC, abstractmethod
 from collections.abc import Iterable, Iterator, Mapping
 from dataclasses import dataclass
-from typing import Any, ClassVar, Protocol
+from typing import Any, ClassVar, Generic, Protocol, TypeVar
 
 from certify.certificate import basis_value, canonical_line
 from certify.certificate.canonical import LARGEST, integer_value
@@ -14,12 +14,10 @@ from certify.exact import AbelianGroup, BasedComplex, adapted_basis
 from certify.products import Block
 from certify.simplicial.complexes import SimplicialComplex
 
-__all__ = ["Claim", "Contribution", "Groups", "Key", "Source", "Sum", "Task", "checked_degrees", "solve"]
+__all__ = ["Claim", "Contribution", "Key", "Source", "Sum", "Task", "checked_degrees", "solve"]
 
-Key = int | tuple[int, ...]
-"""The degree of a group, or its degrees."""
-
-Groups = Mapping[Key, AbelianGroup]
+Key = TypeVar("Key", int, tuple[int, int])
+"""The degree of a group, or its two degrees."""
 
 
 class Source(Protocol):
@@ -53,7 +51,7 @@ class Contribution:
     source: Source
 
 
-class Claim(ABC):
+class Claim(ABC, Generic[Key]):
     """A claim that groups, each under a degree or several, are those of a space; a kind is a subclass.
 
     Attributes
@@ -66,7 +64,7 @@ class Claim(ABC):
 
     kind: ClassVar[str]
     route: str
-    groups: Groups | None
+    groups: Mapping[Key, AbelianGroup] | None
 
     @property
     @abstractmethod
@@ -98,14 +96,16 @@ class Claim(ABC):
         """Yield the records that come before those of the tasks."""
         yield from ()
 
-    def check(self, found: Groups) -> None:
+    def check(self, found: Mapping[Key, AbelianGroup]) -> None:
         """Raise ClaimIsFalse at the first key under which the claimed group is not the one found."""
-        for key in sorted(found.keys() | (self.groups or {}).keys(), key=_tuple) if self.groups is not None else ():
-            claimed, real = ((groups or {}).get(key, AbelianGroup()) for groups in (self.groups, found))
+        if self.groups is None:
+            return
+        for key in sorted(found.keys() | self.groups.keys(), key=_tuple):
+            claimed, real = self.groups.get(key, AbelianGroup()), found.get(key, AbelianGroup())
             if claimed != real:
                 raise ClaimIsFalse(what=self.name(key), claimed=str(claimed), found=str(real))
 
-    def statement(self, found: Groups) -> dict[str, Any]:
+    def statement(self, found: Mapping[Key, AbelianGroup]) -> dict[str, Any]:
         """Return the statement of the certificate, with vertices numbered from 1 in the order of the labels."""
         groups = [
             [*_tuple(key), integer_value(group.rank), [integer_value(order) for order in group.torsion]]
@@ -119,7 +119,7 @@ class Claim(ABC):
 _MOST_TORSION = 10**6
 
 
-class Sum:
+class Sum(Generic[Key]):
     """Groups that are added up under keys."""
 
     def __init__(self) -> None:
@@ -154,7 +154,7 @@ def solve(task: Task) -> tuple[bytes | None, tuple[AbelianGroup, ...]]:
     return canonical_line(value), basis.homology()
 
 
-def checked_degrees(degrees: Iterable[int] | None, groups: Groups | None) -> tuple[int, ...] | None:
+def checked_degrees(degrees: Iterable[int] | None, groups: Iterable[int] | None) -> tuple[int, ...] | None:
     """Return the degrees that a claim speaks of, ascending, each once.
 
     Raises
@@ -167,10 +167,10 @@ def checked_degrees(degrees: Iterable[int] | None, groups: Groups | None) -> tup
         if not degrees or degrees[0] < 0 or degrees[-1] >= LARGEST:
             raise BadInput(where="degrees", expected="at least one degree from 0 on", found=f"{list(degrees)}")
     for key in groups or ():
-        if not isinstance(key, int) or key < 0 or (degrees is not None and key not in degrees):
+        if key < 0 or (degrees is not None and key not in degrees):
             raise BadInput(where="groups", expected="degrees that the claim speaks of", found=f"degree {key}")
     return degrees
 
 
-def _tuple(key: Key) -> tuple[int, ...]:
+def _tuple(key: int | tuple[int, int]) -> tuple[int, ...]:
     return (key,) if isinstance(key, int) else key

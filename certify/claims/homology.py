@@ -7,14 +7,14 @@ basis (Lemmas A and B of docs/mathematics.md).
 
 from __future__ import annotations
 
-from collections.abc import Iterable, Iterator
+from collections.abc import Iterable, Iterator, Mapping
 from dataclasses import dataclass, replace
 from math import prod
 from typing import Any, ClassVar, Literal
 
 from certify.certificate.canonical import integer_value
 from certify.certificate.records import vector_value
-from certify.claims.base import Claim, Contribution, Groups, Key, Sum, Task, checked_degrees
+from certify.claims.base import Claim, Contribution, Sum, Task, checked_degrees
 from certify.errors import BadInput
 from certify.exact import AbelianGroup, BasedComplex
 from certify.products import Block, PolyhedralProduct, block_classes, cell_complex
@@ -39,7 +39,7 @@ class _WholeProduct:
 
 
 @dataclass(frozen=True)
-class HomologyClaim(Claim):
+class HomologyClaim(Claim[int]):
     """A claim about the integral homology of a polyhedral product.
 
     Parameters
@@ -54,7 +54,7 @@ class HomologyClaim(Claim):
 
     product: PolyhedralProduct
     degrees: tuple[int, ...] | None = None
-    groups: Groups | None = None
+    groups: Mapping[int, AbelianGroup] | None = None
     route: Route = "blocks"
     kind: ClassVar[str] = "homology"
 
@@ -106,9 +106,9 @@ class HomologyClaim(Claim):
         pairs = self._reduced().pairs
         return prod(sum(times for shape in pair.shapes for _, times in shape.shifts) for pair in pairs)
 
-    def total(self, contributions: Iterable[Contribution]) -> dict[Key, AbelianGroup]:
+    def total(self, contributions: Iterable[Contribution]) -> dict[int, AbelianGroup]:
         """Return the groups that these contributions add up to, in the degrees of the claim."""
-        found = Sum()
+        found = Sum[int]()
         for contribution in contributions:
             source = contribution.source
             for shift, times in (source.shifts if isinstance(source, Block) else {0: 1}).items():
@@ -117,7 +117,7 @@ class HomologyClaim(Claim):
                         found.add(degree, group.rank, group.torsion, times)
         return found.groups()
 
-    def name(self, key: Key) -> str:
+    def name(self, key: int) -> str:
         """Write a homology group as in print."""
         return f"H_{key}({self.product}; ℤ)"
 
@@ -151,7 +151,7 @@ class SmashClaim(HomologyClaim):
         if self.route == "cells":
             raise BadInput(where="route", expected="blocks or orbits for a smash product", found="cells")
 
-    def name(self, key: Key) -> str:
+    def name(self, key: int) -> str:
         """Write a reduced homology group as in print."""
         return f"H̃_{key}(polyhedral smash product {self.product}; ℤ)"
 

@@ -9,7 +9,7 @@ from concurrent.futures import Future, ProcessPoolExecutor
 from dataclasses import dataclass
 from itertools import islice
 from pathlib import Path
-from typing import Any
+from typing import Any, Generic
 
 from certify.certificate import FORMAT, Spool, canonical_line, fingerprint
 from certify.claims.base import Claim, Contribution, Key, Task, solve
@@ -27,7 +27,7 @@ _Solved = tuple[bytes | None, tuple[AbelianGroup, ...]]
 
 
 @dataclass(frozen=True, slots=True)
-class Proof:
+class Proof(Generic[Key]):
     """A claim that was proved: its groups, its statement, and its records, ready to be written.
 
     Parameters
@@ -39,7 +39,7 @@ class Proof:
         The records; closed by whoever called `prove`.
     """
 
-    claim: Claim
+    claim: Claim[Key]
     groups: Mapping[Key, AbelianGroup]
     spool: Spool
 
@@ -59,7 +59,7 @@ class Proof:
         return self.spool.write(path, header)
 
 
-def prove(claim: Claim, spool: Spool, *, jobs: int = 1, progress: Progress | None = None) -> Proof:
+def prove(claim: Claim[Key], spool: Spool, *, jobs: int = 1, progress: Progress | None = None) -> Proof[Key]:
     """Compute a claim and collect the records that prove it.
 
     Parameters

@@ -2,11 +2,11 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterable, Iterator
+from collections.abc import Iterable, Iterator, Mapping
 from dataclasses import dataclass
 from typing import Any, ClassVar
 
-from certify.claims.base import Claim, Contribution, Groups, Key, Sum, Task, checked_degrees
+from certify.claims.base import Claim, Contribution, Sum, Task, checked_degrees
 from certify.exact import AbelianGroup
 from certify.products.real_toric import RealToricSpace
 from certify.simplicial.complexes import SimplicialComplex
@@ -15,7 +15,7 @@ __all__ = ["RealToricClaim"]
 
 
 @dataclass(frozen=True)
-class RealToricClaim(Claim):
+class RealToricClaim(Claim[int]):
     """A claim about the integral homology of (D¹, S⁰)^K / ker λ.
 
     Parameters
@@ -35,7 +35,7 @@ class RealToricClaim(Claim):
     complex: SimplicialComplex
     rows: tuple[str, ...]
     degrees: tuple[int, ...] | None = None
-    groups: Groups | None = None
+    groups: Mapping[int, AbelianGroup] | None = None
     route: str = "cells"
     kind: ClassVar[str] = "real-toric"
 
@@ -53,16 +53,16 @@ class RealToricClaim(Claim):
         """Yield the one piece of work."""
         yield Task(RealToricSpace(self.complex, self.rows, None if self.degrees is None else self.degrees[-1] + 1))
 
-    def total(self, contributions: Iterable[Contribution]) -> dict[Key, AbelianGroup]:
+    def total(self, contributions: Iterable[Contribution]) -> dict[int, AbelianGroup]:
         """Return the groups in the degrees of the claim."""
-        found = Sum()
+        found = Sum[int]()
         for contribution in contributions:
             for degree, group in enumerate(contribution.groups):
                 if self.degrees is None or degree in self.degrees:
                     found.add(degree, group.rank, group.torsion)
         return found.groups()
 
-    def name(self, key: Key) -> str:
+    def name(self, key: int) -> str:
         """Write a homology group as in print."""
         return f"H_{key}((D¹,S⁰)^K/ker λ; ℤ)"
 

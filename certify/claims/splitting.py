@@ -2,11 +2,11 @@
 
 from __future__ import annotations
 
-from collections.abc import Hashable, Iterable, Iterator
+from collections.abc import Hashable, Iterable, Iterator, Mapping
 from dataclasses import dataclass
 from typing import Any, ClassVar
 
-from certify.claims.base import Claim, Contribution, Groups, Key, Sum, Task
+from certify.claims.base import Claim, Contribution, Sum, Task
 from certify.exact import AbelianGroup, BasedComplex
 from certify.products import Block, PolyhedralProduct, block_classes, parse_pairs
 from certify.products.blocks import Choices
@@ -22,7 +22,7 @@ def _subcomplexes(complex_: SimplicialComplex) -> PolyhedralProduct:
 
 
 @dataclass(frozen=True)
-class TorClaim(Claim):
+class TorClaim(Claim[tuple[int, int]]):
     """A claim about the bigraded groups Tor_{i,2j}(ℤ[K], ℤ) of the face ring, which are H^{-i,2j} of (D², S¹)^K.
 
     Parameters
@@ -41,7 +41,7 @@ class TorClaim(Claim):
     """
 
     complex: SimplicialComplex
-    groups: Groups | None = None
+    groups: Mapping[tuple[int, int], AbelianGroup] | None = None
     route: str = "blocks"
     kind: ClassVar[str] = "tor"
 
@@ -60,9 +60,9 @@ class TorClaim(Claim):
         for block in block_classes(_subcomplexes(self.complex)):
             yield Task(block, sum(block.shifts.values()))
 
-    def total(self, contributions: Iterable[Contribution]) -> dict[Key, AbelianGroup]:
+    def total(self, contributions: Iterable[Contribution]) -> dict[tuple[int, int], AbelianGroup]:
         """Return the groups under (i, j): free parts of homology, and torsion one degree up, as cohomology has it."""
-        found = Sum()
+        found = Sum[tuple[int, int]]()
         for contribution in contributions:
             block = contribution.source
             if isinstance(block, Block):
@@ -72,9 +72,9 @@ class TorClaim(Claim):
                     found.add((j - size - 1, j), 0, group.torsion, times)
         return found.groups()
 
-    def name(self, key: Key) -> str:
+    def name(self, key: tuple[int, int]) -> str:
         """Write a group as in print."""
-        i, j = key if isinstance(key, tuple) else (key, 0)
+        i, j = key
         return f"Tor_{i},{2 * j}(ℤ[K], ℤ)"
 
     def fields(self) -> dict[str, Any]:
@@ -95,10 +95,10 @@ class TableClaim(TorClaim):
 
     kind: ClassVar[str] = "table"
 
-    def total(self, contributions: Iterable[Contribution]) -> dict[Key, AbelianGroup]:
+    def total(self, contributions: Iterable[Contribution]) -> dict[tuple[int, int], AbelianGroup]:
         """Return the groups of each full subcomplex."""
         known = {c.source.faces: c.groups for c in contributions if isinstance(c.source, Block)}
-        found = Sum()
+        found = Sum[tuple[int, int]]()
         m = self.complex.vertex_count
         choices = Choices(_subcomplexes(self.complex))
         for number in range(1 << m):
@@ -108,15 +108,15 @@ class TableClaim(TorClaim):
                 found.add((int(word[::-1] or "0", 2), size - 1), group.rank, group.torsion)
         return found.groups()
 
-    def name(self, key: Key) -> str:
+    def name(self, key: tuple[int, int]) -> str:
         """Write a reduced homology group as in print."""
-        mask, q = key if isinstance(key, tuple) else (key, 0)
+        mask, q = key
         labels = ",".join(str(label) for place, label in enumerate(self.complex.labels) if mask >> place & 1)
         return f"H̃_{q}(K_{{{labels}}}; ℤ)"
 
 
 @dataclass(frozen=True)
-class SummandClaim(Claim):
+class SummandClaim(Claim[int]):
     """A claim about one summand of the stable splitting: the reduced homology of a link, restricted to some vertices.
 
     Parameters
@@ -138,7 +138,7 @@ class SummandClaim(Claim):
     complex: SimplicialComplex
     kept: tuple[Hashable, ...]
     out: tuple[Hashable, ...] = ()
-    groups: Groups | None = None
+    groups: Mapping[int, AbelianGroup] | None = None
     route: str = "cells"
     kind: ClassVar[str] = "summand"
 
@@ -152,15 +152,15 @@ class SummandClaim(Claim):
         part = full_subcomplex(link(self.complex, self.out), self.kept)
         yield Task(_Augmented(part))
 
-    def total(self, contributions: Iterable[Contribution]) -> dict[Key, AbelianGroup]:
+    def total(self, contributions: Iterable[Contribution]) -> dict[int, AbelianGroup]:
         """Return the reduced homology."""
-        found = Sum()
+        found = Sum[int]()
         for contribution in contributions:
             for degree, group in enumerate(contribution.groups, -1):
                 found.add(degree, group.rank, group.torsion)
         return found.groups()
 
-    def name(self, key: Key) -> str:
+    def name(self, key: int) -> str:
         """Write a reduced homology group as in print."""
         kept, out = (",".join(map(str, labels)) for labels in (self.kept, self.out))
         return f"H̃_{key}((link of {{{out}}})_{{{kept}}}; ℤ)"

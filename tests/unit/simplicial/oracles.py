@@ -30,15 +30,16 @@ def renumbered(k: SimplicialComplex) -> SimplicialComplex:
 
 def are_isomorphic(k: SimplicialComplex, other: SimplicialComplex) -> bool:
     """Tell whether a bijection of the vertices carries facets to facets: an isomorphism of graphs, in two colours."""
-    graphs = []
-    for each in (k, other):
-        graph: nx.Graph[tuple[str, int]] = nx.Graph()
-        graph.add_nodes_from((("vertex", vertex) for vertex in range(each.vertex_count)), kind="vertex")
-        graph.add_nodes_from((("facet", number) for number in range(len(each.facets))), kind="facet")
-        for number, facet in enumerate(each.facets):
-            graph.add_edges_from((("vertex", vertex), ("facet", number)) for vertex in facet)
-        graphs.append(graph)
-    return nx.is_isomorphic(*graphs, node_match=lambda a, b: bool(a["kind"] == b["kind"]))
+    return nx.is_isomorphic(_incidence(k), _incidence(other), node_match=lambda a, b: bool(a == b))
+
+
+def _incidence(k: SimplicialComplex) -> nx.Graph[tuple[str, int]]:
+    graph: nx.Graph[tuple[str, int]] = nx.Graph()
+    graph.add_nodes_from((("vertex", vertex) for vertex in range(k.vertex_count)), kind="vertex")
+    for number, facet in enumerate(k.facets):
+        graph.add_node(("facet", number), kind="facet")
+        graph.add_edges_from((("vertex", vertex), ("facet", number)) for vertex in facet)
+    return graph
 
 
 def reduced_homology(k: SimplicialComplex) -> Groups:
