@@ -100,7 +100,8 @@ class Claim(ABC, Generic[Key]):
         """Raise ClaimIsFalse at the first key under which the claimed group is not the one found."""
         if self.groups is None:
             return
-        for key in sorted(found.keys() | self.groups.keys(), key=_tuple):
+        keys: set[Key] = set(found) | set(self.groups)
+        for key in sorted(keys, key=_tuple):
             claimed, real = self.groups.get(key, AbelianGroup()), found.get(key, AbelianGroup())
             if claimed != real:
                 raise ClaimIsFalse(what=self.name(key), claimed=str(claimed), found=str(real))

@@ -185,7 +185,7 @@ def test_alexander_duality(k: SimplicialComplex) -> None:
 
 @given(complexes(4), complexes(4))
 def test_the_alexander_dual_of_a_join(k: SimplicialComplex, other: SimplicialComplex) -> None:
-    """A set is no face of K * L when its part in K or in L is none: (K * L)^ is the union of K^ * D(L) and D(K) * L^."""
+    """A set is no face of K * L when its part in K or in L is none: (K * L)^ is K^ * D(L) together with D(K) * L^."""
     assume(k.missing_faces() and other.missing_faces())
     left, right = renumbered(k), other.relabelled(range(k.vertex_count, k.vertex_count + other.vertex_count))
     expected = [set(facet) | set(right.labels) for facet in facets_in_labels(alexander_dual(left))]
