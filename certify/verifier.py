@@ -32,9 +32,13 @@ from functools import reduce
 from itertools import combinations, pairwise, product
 from math import comb, gcd, lcm, prod
 from operator import and_, ge, xor
-from typing import Any, Generic, TypeVar
+
+TYPE_CHECKING = False
+if TYPE_CHECKING:  # for readers with a type checker only
+    from typing import Any
 
 FORMAT = 1
+LETTERS = [bytes([i]) for i in range(256)]
 DIGITS = "0123456789abcdefghijklmnopqrstuvwxyz"
 BATCH = 1 << 18  # faces that are merged together at most; part of the format, since it decides which records there are
 LARGEST = 2**53 - 1  # integers beyond are written as strings (RFC 7493)
@@ -44,7 +48,6 @@ LINE = 1 << 26  # bytes of a line at most, since a line is held in memory
 UNDECIDED = {"limit", "unknown-format", "unknown-kind", "unknown-pair", "not-a-certificate", "unreadable"}
 
 
-Cell = TypeVar("Cell")  # a cell of a space: a face as a bit mask, or a word of letters
 Vector = list[tuple[int, int]]  # cells with coefficients, cells ascending
 Faces = tuple[tuple[int, ...], ...]  # for each number of vertices the faces as ascending bit masks
 Letter = tuple[int, int, tuple[tuple[int, int], ...]]  # a cell of X: degree, 1 if outside A, boundary on other letters
@@ -282,9 +285,8 @@ class Statement:
                 shown[0] = "{" + ",".join(str(i + 1) for i in range(self.vertices) if key[0] >> i & 1) + "}"
             name = head.format(*shown) + (of if not parts else "")
             parts.append(f"{name} ≅ {group_text(self.groups.get(key, Counter()))}")
-        parts += (
-            [rest if parts else rest.replace(" = 0 for all other", f"{of} = 0 for all")] if self.degrees is None else []
-        )
+        if self.degrees is None:
+            parts.append(rest if parts else rest.replace(" = 0 for all other", f"{of} = 0 for all"))
         comma = "," if self.vertices > 9 else ""
         facets = " ".join(comma.join(map(str, facet)) or "∅" for facet in self.facets)
         return f"{', '.join(parts)}; K on {self.vertices} vertices with facets {facets}{pairs}"
@@ -499,10 +501,12 @@ def block_classes(statement: Statement, budget: Budget) -> Iterator[Block]:
         for (tags, faces), (name, shifts) in states.items():
             budget.spend("cells", sum(map(len, faces)) + len(shifts))
             for digit, (move, tag, degrees) in zip(DIGITS, statement.pairs[vertex].shapes, strict=False):
-                counts: dict[int, int] = {}
-                for shift, more in product(shifts, degrees):
-                    if shift + more < statement.top:
-                        counts[shift + more] = counts.get(shift + more, 0) + shifts[shift] * degrees[more]
+                counts = shifts
+                if degrees != {0: 1}:
+                    counts = {}
+                    for shift, more in product(shifts, degrees):
+                        if shift + more < statement.top:
+                            counts[shift + more] = counts.get(shift + more, 0) + shifts[shift] * degrees[more]
                 left = decide(faces, len(tags), move) if counts else ()
                 if left:
                     state = (tags if move in (STAY, OUT) else (*tags, tag), left)
@@ -534,17 +538,20 @@ def is_cone(faces: Faces, tags: tuple[Tag, ...], most: int) -> bool:
     return False
 
 
-class Space(Generic[Cell]):
-    """A based complex that was rebuilt from the statement: the cells of each degree in their order, and d of a cell."""
+class Space:
+    """A based complex that was rebuilt from the statement: the cells of each degree in their order, and d of a cell.
 
-    def __init__(self, cells: Sequence[Sequence[Cell]], d: Callable[[Cell], list[tuple[Cell, int]]]) -> None:
+    d is given as terms, which are different cells with their coefficients.
+    """
+
+    def __init__(self, cells: Sequence[Sequence[Any]], d: Callable[[Any], list[tuple[Any, int]]]) -> None:
         self.cells, self.d = cells, d
         self.index = [{cell: number for number, cell in enumerate(degree)} for degree in cells]
         self.sizes = [len(degree) for degree in cells]
 
     def boundary(self, degree: int, vector: Vector) -> Vector:
         """Return d of a vector of this degree."""
-        total: dict[Cell, int] = {}
+        total: dict[Any, int] = {}
         for number, coefficient in vector:
             for cell, entry in self.d(self.cells[degree][number]):
                 total[cell] = total.get(cell, 0) + coefficient * entry
@@ -553,12 +560,13 @@ class Space(Generic[Cell]):
 
     def leads(self, degree: int, numbers: list[int]) -> list[int]:
         """Return the last cell in d of each of these cells, where d must have ±1."""
-        last = [self.boundary(degree, [(number, 1)])[-1:] for number in numbers]
-        require(all(end and end[0][1] in (1, -1) for end in last), "boundary", "d of a matched cell does not end in ±1")
-        return [end[0][0] for end in last]
+        cells, below = self.cells[degree], self.index[degree - 1]
+        last = [max(((below[cell], entry) for cell, entry in self.d(cells[n])), default=(0, 0)) for n in numbers]
+        require(all(entry in (1, -1) for _, entry in last), "boundary", "d of a matched cell does not end in ±1")
+        return [number for number, _ in last]
 
 
-class Simplices(Space[int]):
+class Simplices(Space):
     """The augmented chain complex of a simplicial complex with an integer for each vertex: d e = n t at each vertex.
 
     Degree k is spanned by the faces of k vertices.
@@ -585,7 +593,7 @@ class Simplices(Space[int]):
         return [below[masks[number] & masks[number] - 1] for number in numbers]  # leaving out the first vertex
 
 
-class Words(Space[bytes]):
+class Words(Space):
     """The tensor product of the cells at each vertex, where the vertices with a cell outside A form a face.
 
     Cells are words with a letter for each vertex. They are ordered by the mask of that face, then as words.
@@ -596,7 +604,7 @@ class Words(Space[bytes]):
         self.alphabets = alphabets
         words = [(0, b"", 0)]
         for place, alphabet in enumerate(alphabets):
-            letters = [(bytes([i]), outside << place, degree) for i, (degree, outside, _) in enumerate(alphabet)]
+            letters = [(LETTERS[i], outside << place, degree) for i, (degree, outside, _) in enumerate(alphabet)]
             budget.spend("cells", len(words) * len(letters))
             grown = ((mask | bit, word + letter, d + more) for mask, word, d in words for letter, bit, more in letters)
             words = [(mask, word, degree) for mask, word, degree in grown if degree <= top and mask in known]
@@ -612,12 +620,14 @@ class Words(Space[bytes]):
         terms, sign = [], 1
         for place, (letter, alphabet) in enumerate(zip(word, self.alphabets, strict=True)):
             degree, _, boundary = alphabet[letter]
-            terms += [(word[:place] + bytes([i]) + word[place + 1 :], sign * entry) for i, entry in boundary]
-            sign = -sign if degree % 2 else sign
+            for i, entry in boundary:
+                terms.append((word[:place] + LETTERS[i] + word[place + 1 :], sign * entry))
+            if degree & 1:
+                sign = -sign
         return terms
 
 
-class Chambers(Space[tuple[int, int]]):
+class Chambers(Space):
     """The cellular chain complex of a real toric space: a chamber for each value of λ, glued along mirrors.
 
     A cell is a face with a value g of λ; (face, g) and (face, g + λ_i) for a vertex i of the face are the same cell
@@ -692,7 +702,7 @@ def vector(value: object, size: int, budget: Budget) -> Vector:
     return terms
 
 
-def homology(space: Space[Any], basis: object, budget: Budget) -> list[tuple[int, list[int]]]:
+def homology(space: Space, basis: object, budget: Budget) -> list[tuple[int, list[int]]]:
     """Return rank and orders of cyclic summands of H_k for each degree k, proved by an adapted basis (Lemma A)."""
     entries = sequence(basis)
     require(len(entries) == len(space.sizes), "degrees", f"a basis in each of {len(space.sizes)} degrees is expected")
@@ -724,7 +734,7 @@ def homology(space: Space[Any], basis: object, budget: Budget) -> list[tuple[int
     return groups[::-1]
 
 
-def read_pair(value: list[object], degree: int, space: Space[Any], budget: Budget) -> tuple[Vector, int, Vector]:
+def read_pair(value: list[object], degree: int, space: Space, budget: Budget) -> tuple[Vector, int, Vector]:
     """Return a, e, b with d a = e b; where e is 1 only a is written, and b is d a."""
     require(len(value) in (1, 3), "shape", "a pair is [a], or [a, e, b]")
     a = vector(value[0], space.sizes[degree], budget)
@@ -803,7 +813,8 @@ def check_inverse(cells: list[int], vectors: list[dict[int, int]], inverse: obje
 def add(total: Total, groups: list[tuple[int, list[int]]], shift: int, times: int) -> None:
     """Add groups by degree to a total, shifted, so many times."""
     for degree, (rank, orders) in enumerate(groups, shift):
-        put(total, (degree,), rank, orders, times)
+        if rank or orders:
+            put(total, (degree,), rank, orders, times)
 
 
 def put(total: Total, key: Key, rank: int, orders: list[int], times: int = 1) -> None:

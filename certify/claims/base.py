@@ -16,7 +16,7 @@ from certify.simplicial.complexes import SimplicialComplex
 
 __all__ = ["Claim", "Contribution", "Key", "Source", "Sum", "Task", "checked_degrees", "solve"]
 
-Key = TypeVar("Key", int, tuple[int, int])
+Key = TypeVar("Key", bound=int | tuple[int, int])
 """The degree of a group, or its two degrees."""
 
 
@@ -100,8 +100,7 @@ class Claim(ABC, Generic[Key]):
         """Raise ClaimIsFalse at the first key under which the claimed group is not the one found."""
         if self.groups is None:
             return
-        keys: set[Key] = set(found) | set(self.groups)
-        for key in sorted(keys, key=_tuple):
+        for key in sorted({*found, *self.groups}, key=_tuple):
             claimed, real = self.groups.get(key, AbelianGroup()), found.get(key, AbelianGroup())
             if claimed != real:
                 raise ClaimIsFalse(what=self.name(key), claimed=str(claimed), found=str(real))

@@ -194,7 +194,9 @@ def _decide_all(states: _States, product: PolyhedralProduct, vertex: int, top: i
 
 
 def _convolved(shifts: Mapping[int, int], more: tuple[tuple[int, int], ...], top: int | None) -> dict[int, int]:
-    """Return the shifts of pairs of choices, below `top`."""
+    """Return the shifts of pairs of choices, below `top`; what is given is below it already."""
+    if more == ((0, 1),):
+        return dict(shifts)
     total: dict[int, int] = {}
     for shift, number in shifts.items():
         for extra, times in more:
