@@ -1,4 +1,4 @@
-"""Print the table of all benchmark ratios: ``python -m tests.benchmarks [--markdown]``."""
+"""Print the table of all benchmark ratios: ``python -m tests.benchmarks``."""
 
 from __future__ import annotations
 
@@ -9,11 +9,13 @@ from pathlib import Path
 
 from tests.benchmarks.foundation import foundation
 from tests.benchmarks.measuring import Measure
+from tests.benchmarks.spaces import spaces
 
 
 def _rows() -> Iterator[Measure]:
     with tempfile.TemporaryDirectory() as folder:
         yield from foundation(Path(folder))
+        yield from spaces(Path(folder))
 
 
 def main() -> None:

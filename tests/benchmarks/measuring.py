@@ -2,17 +2,19 @@
 
 from __future__ import annotations
 
-import os
 import subprocess
 import sys
 import time
 from collections.abc import Callable
 from dataclasses import dataclass
 from pathlib import Path
+from typing import Any
 
 import certify
 from certify.certificate import Spool
 from certify.claims import HomologyClaim, prove
+from certify.claims.base import Claim
+from certify.claims.homology import Route
 from certify.products import PolyhedralProduct, parse_pairs
 from certify.simplicial import SimplicialComplex
 
@@ -41,33 +43,56 @@ def least(times: int, action: Callable[[], object]) -> float:
 
 
 def claim_about(
-    complex_: SimplicialComplex, pair: str, route: str = "blocks", degrees: tuple[int, ...] | None = None
+    complex_: SimplicialComplex, pair: str, route: Route = "blocks", degrees: tuple[int, ...] | None = None
 ) -> HomologyClaim:
     """Return the claim that asks for the homology of (X, A)^K."""
     product = PolyhedralProduct(complex_, parse_pairs(pair, complex_.vertex_count))
-    return HomologyClaim(product, degrees, route="cells" if route == "cells" else "blocks")
+    return HomologyClaim(product, degrees, route=route)
 
 
-def prove_to_file(claim: HomologyClaim, path: Path, jobs: int = 1) -> int:
+def prove_to_file(claim: Claim[Any], path: Path, jobs: int = 1) -> int:
     """Prove a claim, write its certificate, and return the number of its records."""
     with Spool() as spool:
         prove(claim, spool, jobs=jobs).write(path, {"claim": "benchmark"})
         return spool.records
 
 
-def verify_file(path: Path, *flags: str) -> int:
-    """Run the verifier as a referee would, and return the peak of its memory in bytes.
+def run_prove(sheet: Path, folder: Path, *flags: str) -> None:
+    """Prove a sheet as an author would.
+
+    Raises
+    ------
+    subprocess.CalledProcessError
+        If a claim is not proved.
+    """
+    command = [sys.executable, "-m", "certify", "prove", str(sheet), "--out", str(folder), *flags]
+    subprocess.run(command, check=True, stdout=subprocess.DEVNULL)
+
+
+def verify_file(path: Path) -> None:
+    """Run the verifier as a referee would.
 
     Raises
     ------
     RuntimeError
         If it does not accept the file.
     """
-    command = [sys.executable, "-I", "-S", str(VERIFIER), *flags, str(path)]
-    with subprocess.Popen(command, stdout=subprocess.PIPE) as process:
-        output = process.stdout.read() if process.stdout else b""
-        _, status, usage = os.wait4(process.pid, 0)
-        process.returncode = os.waitstatus_to_exitcode(status)
-    if process.returncode != 0:
-        raise RuntimeError(f"the verifier does not accept {path}: {output.decode()}")
-    return usage.ru_maxrss * 1024
+    command = [sys.executable, "-I", "-S", str(VERIFIER), str(path)]
+    done = subprocess.run(command, check=False, capture_output=True)
+    if done.returncode != 0:
+        raise RuntimeError(f"the verifier does not accept {path}: {done.stdout.decode()}")
+
+
+def peak_memory(command: list[str]) -> int:
+    """Return the peak of the memory of a command in bytes.
+
+    Notes
+    -----
+    The system counts the memory of the parent before the command has started; so a small process starts it.
+    """
+    program = (
+        "import resource, subprocess, sys; subprocess.run(sys.argv[1:], check=True, stdout=subprocess.DEVNULL);"
+        "print(resource.getrusage(resource.RUSAGE_CHILDREN).ru_maxrss)"
+    )
+    done = subprocess.run([sys.executable, "-I", "-S", "-c", program, *command], check=True, capture_output=True)
+    return int(done.stdout) * 1024

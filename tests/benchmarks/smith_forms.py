@@ -52,7 +52,7 @@ def _pari(matrices: list[Matrix], answer: Connection) -> None:
 
 
 def fastest_smith_seconds(n: int) -> tuple[float, str]:
-    """Return the time of the faster of PARI's matsnf and python-flint's snf on both matrices of the n-gon, and its name.
+    """Return the time of the faster of PARI's matsnf and python-flint's snf on both matrices of the n-gon, and which.
 
     Notes
     -----
