@@ -1168,6 +1168,11 @@ if __name__ == "__main__":
     try:
         sys.stdout.reconfigure(encoding="utf-8", errors="backslashreplace")  # type: ignore[union-attr]
         code = main()
+    except KeyboardInterrupt:
+        code = 130
+    except BrokenPipeError:  # whoever read the output has gone, so nobody was told a verdict
+        os.dup2(os.open(os.devnull, os.O_WRONLY), sys.stdout.fileno())
+        code = 3
     except Exception as error:  # noqa: BLE001 - a crash must never look like a verdict
         print(f"internal error, no verdict: {type(error).__name__}: {str(error)!a}", file=sys.stderr)
         code = 70
