@@ -213,7 +213,7 @@ class Statement:
         self.vertices = integer(value["vertices"], budget)
         self.facets = [numbers(facet, 1, self.vertices + 1) for facet in sequence(value["facets"])]
         self.check_facets(budget)
-        self.pairs = [Pair(pair, budget) for pair in sequence(value.get("pairs", ["(D2, S1)"] * self.vertices))]
+        self.pairs = [Pair(pair, budget) for pair in sequence(value.get("pairs", ["(D1, S0)"] * self.vertices))]
         require(len(self.pairs) == self.vertices, "statement", "one pair for each vertex is expected")
         degrees = value.get("degrees")
         self.degrees = None if degrees is None else numbers(degrees, 0, LARGEST)
@@ -300,10 +300,11 @@ class Statement:
         for number, facet in enumerate(self.facets):
             for ridge in combinations(facet, max(len(facet) - 1, 0)):
                 sharing.setdefault(ridge, []).append(number)
-        reached = [0]
-        for number in reached:
-            ridges = combinations(self.facets[number], max(len(self.facets[number]) - 1, 0))
-            reached += {near for ridge in ridges for near in sharing[ridge]} - {*reached}
+        reached, order = {0}, [0]
+        for number in order:
+            for ridge in combinations(self.facets[number], max(len(self.facets[number]) - 1, 0)):
+                order += {*sharing[ridge]} - reached
+                reached.update(sharing[ridge])
         top = len(self.facets[0])
         closed = {len(facet) for facet in self.facets} == {top} and {len(n) for n in sharing.values()} == {2}
         if not closed or len(reached) < len(self.facets):

@@ -17,8 +17,8 @@ __all__ = ["SummandClaim", "TableClaim", "TorClaim"]
 
 
 def _subcomplexes(complex_: SimplicialComplex) -> PolyhedralProduct:
-    """Return a product whose blocks are the full subcomplexes, each with its number of vertices as shift."""
-    return PolyhedralProduct(complex_, parse_pairs("(D2, S1)", complex_.vertex_count))
+    """Return a product whose blocks are the full subcomplexes."""
+    return PolyhedralProduct(complex_, parse_pairs("(D1, S0)", complex_.vertex_count))
 
 
 @dataclass(frozen=True)
