@@ -16,25 +16,30 @@ from types import ModuleType
 from typing import Any
 
 from certify.certificate import Spool
-from certify.claims import HomologyClaim, prove
+from certify.claims import Claim, HomologyClaim, TableClaim, prove
+from certify.claims.base import Key
 from certify.claims.homology import Route
 from certify.exact import AbelianGroup
-from certify.products import DiscPair, PolyhedralProduct
+from certify.products import Pair, PolyhedralProduct, parse_pair, parse_pairs
 from certify.simplicial import SimplicialComplex
 
 __all__ = [
     "Homology",
+    "accepted_groups",
     "accepted_homology",
     "alternating_sum",
     "blocks_apart",
     "certificate_of",
+    "certified_groups",
     "certified_homology",
     "cohomology",
+    "disc_dimensions",
     "disc_product",
     "examined",
     "graded",
     "kunneth",
     "limits",
+    "product_of",
     "verifier",
 ]
 
@@ -73,18 +78,59 @@ def examined(path: Path) -> dict[str, Any]:
     return report
 
 
+def product_of(k: SimplicialComplex, pairs: str | Sequence[str]) -> PolyhedralProduct:
+    """Return the product over `k` of pairs that have names: one for all vertices, or one for each."""
+    return PolyhedralProduct(k, parse_pairs(pairs, k.vertex_count))
+
+
 def disc_product(k: SimplicialComplex, n: int | Sequence[int]) -> PolyhedralProduct:
     """Return the product over `k` of the pairs (Dⁿ, Sⁿ⁻¹): one n for all vertices, or one for each."""
     sizes = [n] * k.vertex_count if isinstance(n, int) else n
-    return PolyhedralProduct(k, tuple(DiscPair(size) for size in sizes))
+    return PolyhedralProduct(k, tuple(parse_pair(f"(D{size}, S{size - 1})") for size in sizes))
 
 
-def certificate_of(claim: HomologyClaim, jobs: int = 1) -> bytes:
+def disc_dimensions(space: PolyhedralProduct) -> list[int]:
+    """Return the n of the pair (Dⁿ, Sⁿ⁻¹) at each vertex of a product of discs."""
+    return [int(pair.name.removeprefix("(D").partition(",")[0]) for pair in space.pairs]
+
+
+def certificate_of(claim: Claim[Key], jobs: int = 1) -> bytes:
     """Return the bytes of the certificate of a claim."""
     with TemporaryDirectory() as folder, Spool() as spool:
         path = Path(folder) / "claim.cert.jsonl"
         prove(claim, spool, jobs=jobs).write(path, {"claim": "claim"})
         return path.read_bytes()
+
+
+def accepted_groups(certificate: bytes, expected: Mapping[str, Any]) -> dict[tuple[int, ...], AbelianGroup]:
+    """Return the groups of a certificate by their degrees, after the verifier has accepted it.
+
+    The statement is read from the file and must be `expected` with groups, so that neither a prover that writes down
+    another space nor one that keeps other groups in memory than in the file goes unnoticed.
+    """
+    with TemporaryDirectory() as folder:
+        path = Path(folder) / "claim.cert.jsonl"
+        path.write_bytes(certificate)
+        report = examined(path)
+    assert report["verdict"] == "accepted", report
+    statement = json.loads(certificate.splitlines()[0])["statement"]
+    groups = statement.pop("groups")
+    assert statement == expected
+    return {tuple(key): AbelianGroup.of(int(rank), map(int, torsion)) for *key, rank, torsion in groups}
+
+
+def certified_groups(claim: Claim[Key], **fields: Any) -> dict[tuple[int, ...], AbelianGroup]:
+    """Prove, write, let the verifier check the file, and return the groups that the accepted statement holds.
+
+    The statement must be about the complex of the claim and have these fields besides.
+    """
+    return accepted_groups(certificate_of(claim), _about(claim.base) | {"kind": claim.kind} | fields)
+
+
+def _about(k: SimplicialComplex) -> dict[str, Any]:
+    """Return the part of a statement that says which complex it is about."""
+    facets = sorted([vertex + 1 for vertex in facet] for facet in k.facets)
+    return {"facets": facets, "vertices": len(k.labels)}
 
 
 def certified_homology(
@@ -96,41 +142,28 @@ def certified_homology(
 
 
 def accepted_homology(certificate: bytes, space: PolyhedralProduct, degrees: Sequence[int] | None = None) -> Homology:
-    """Return the groups of a certificate, after the verifier has accepted it and its statement is that of the space.
-
-    The statement is read from the file and compared with the space here, so that neither a prover that writes down
-    another space nor one that keeps other groups in memory than in the file goes unnoticed.
-    """
-    with TemporaryDirectory() as folder:
-        path = Path(folder) / "claim.cert.jsonl"
-        path.write_bytes(certificate)
-        report = examined(path)
-    assert report["verdict"] == "accepted", report
-    statement = json.loads(certificate.splitlines()[0])["statement"]
-    groups = {degree: AbelianGroup.of(int(rank), map(int, torsion)) for degree, rank, torsion in statement["groups"]}
-    k = space.complex
-    assert statement == {
+    """Return the homology groups of a certificate, after the verifier has accepted it, and for this space."""
+    expected = _about(space.complex) | {
         "degrees": None if degrees is None else sorted(set(degrees)),
-        "facets": sorted([vertex + 1 for vertex in facet] for facet in k.facets),
-        "groups": statement["groups"],
         "kind": "homology",
-        "pairs": [f"(D{pair.n}, S{pair.n - 1})" for pair in space.pairs],
-        "vertices": len(k.labels),
+        "pairs": [pair.name if pair.splitting is None else {"cells": _cells(pair)} for pair in space.pairs],
     }
-    return groups
+    return {degree: group for (degree,), group in accepted_groups(certificate, expected).items()}
+
+
+def _cells(pair: Pair) -> list[list[Any]]:
+    """Return the cells of a pair as a statement lists them: degree, 1 outside A, and the boundary as a flat vector."""
+    return [
+        [cell.degree, 1 if cell.outside else 0, [number for term in cell.boundary for number in term]]
+        for cell in pair.cells
+    ]
 
 
 def blocks_apart(k: SimplicialComplex) -> dict[int, Homology]:
-    """Return the reduced homology of all full subcomplexes K_I, by the mask of I, as one certified product gives it.
-
-    With (Dⁿ, Sⁿ⁻¹), n - 1 = (m + 1) 2^i, at vertex i, the block of I lies in degrees from (m + 1) I to (m + 1) I + m,
-    so that no two blocks share a degree. Its degree k is the reduced homology in degree k - 1.
-    """
-    width = k.vertex_count + 1
-    space = disc_product(k, [width * 2**i + 1 for i in range(k.vertex_count)])
+    """Return the reduced homology of all full subcomplexes K_I, by the mask of I, from one certified table."""
     apart: dict[int, Homology] = {mask: {} for mask in range(2**k.vertex_count)}
-    for degree, group in certified_homology(space).items():
-        apart[degree // width][degree % width - 1] = group
+    for (mask, degree), group in certified_groups(TableClaim(k)).items():
+        apart[mask][degree] = group
     return apart
 
 

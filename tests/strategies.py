@@ -8,8 +8,9 @@ import networkx as nx
 from hypothesis import strategies as st
 
 from certify.exact import AbelianGroup, BasedComplex
-from certify.products import DiscPair, PolyhedralProduct
+from certify.products import PolyhedralProduct, parse_pair
 from certify.simplicial import Label, SimplicialComplex, build, face_of, join
+from tests.helpers import disc_dimensions
 
 __all__ = [
     "based_complexes",
@@ -260,8 +261,8 @@ def spheres(draw: st.DrawFn) -> SimplicialComplex:
 
 
 def _with_pairs(k: SimplicialComplex, max_n: int) -> st.SearchStrategy[PolyhedralProduct]:
-    pair = st.builds(DiscPair, st.integers(1, max_n))
-    pairs = st.lists(pair, min_size=k.vertex_count, max_size=k.vertex_count)
+    disc = st.integers(1, max_n).map(lambda n: parse_pair(f"(D{n}, S{n - 1})"))
+    pairs = st.lists(disc, min_size=k.vertex_count, max_size=k.vertex_count)
     return pairs.map(lambda chosen: PolyhedralProduct(k, tuple(chosen)))
 
 
@@ -275,7 +276,7 @@ def sphere_products(draw: st.DrawFn, max_n: int = 3) -> PolyhedralProduct:
 def products_with_degrees(draw: st.DrawFn) -> tuple[PolyhedralProduct, list[int]]:
     """Draw a product, and degrees in any order, some of which may lie above all its cells."""
     space = draw(disc_products() | disc_products_with_torsion(max_n=2))
-    most = sum(pair.n for pair in space.pairs) + 2
+    most = sum(disc_dimensions(space)) + 2
     return space, draw(st.lists(st.integers(0, most), min_size=1, max_size=4))
 
 

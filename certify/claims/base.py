@@ -163,9 +163,10 @@ def checked_degrees(degrees: Iterable[int] | None, groups: Iterable[int] | None)
         If there are none, one is out of range, or a group is claimed in another degree.
     """
     if degrees is not None:
-        degrees = tuple(sorted(set(degrees)))
+        given = list(degrees)
+        degrees = tuple(sorted(set(given)))
         if not degrees or degrees[0] < 0 or degrees[-1] >= LARGEST:
-            raise BadInput(where="degrees", expected="at least one degree from 0 on", found=f"{list(degrees)}")
+            raise BadInput(where="degrees", expected="at least one degree from 0 on", found=f"{given}")
     for key in groups or ():
         if key < 0 or (degrees is not None and key not in degrees):
             raise BadInput(where="groups", expected="degrees that the claim speaks of", found=f"degree {key}")

@@ -9,7 +9,7 @@ from hypothesis import assume, given, settings
 
 from certify.products import PolyhedralProduct
 from certify.simplicial import SimplicialComplex, alexander_dual, join
-from tests.helpers import blocks_apart, certified_homology, cohomology
+from tests.helpers import blocks_apart, certified_homology, cohomology, disc_dimensions
 from tests.strategies import complexes, complexes_with_torsion, sphere_products, spheres
 
 
@@ -33,7 +33,7 @@ def test_poincare_duality(space: PolyhedralProduct) -> None:
 
     V. M. Buchstaber, T. E. Panov, Toric Topology, AMS 2015, theorem 4.1.4 for (D², S¹) (from memory).
     """
-    dimension = space.complex.dimension + 1 + sum(pair.n - 1 for pair in space.pairs)
+    dimension = space.complex.dimension + 1 + sum(n - 1 for n in disc_dimensions(space))
     groups = certified_homology(space)
     assert groups == {dimension - degree: group for degree, group in cohomology(groups).items()}
 

@@ -12,7 +12,7 @@ from sympy.polys.matrices.normalforms import invariant_factors
 from certify.claims.homology import Route
 from certify.products import PolyhedralProduct
 from certify.simplicial import build
-from tests.helpers import certified_homology, disc_product
+from tests.helpers import certified_homology, disc_dimensions, disc_product
 from tests.outside.dense import Matrix, boundary_matrices, homology_from_factors
 from tests.strategies import disc_products
 
@@ -43,7 +43,7 @@ def _ours(space: PolyhedralProduct, route: Route) -> dict[int, tuple[int, tuple[
 @both_routes
 @given(disc_products(max_vertices=4))
 def test_against_the_smith_form_of_flint(route: Route, space: PolyhedralProduct) -> None:
-    sizes, matrices = boundary_matrices(space.complex.facets, [pair.n for pair in space.pairs])
+    sizes, matrices = boundary_matrices(space.complex.facets, disc_dimensions(space))
     assert _ours(space, route) == homology_from_factors(sizes, [_factors_by_flint(matrix) for matrix in matrices])
 
 
@@ -59,5 +59,5 @@ def test_against_the_smith_form_of_flint_where_there_is_torsion(pairs: list[int]
 @settings(max_examples=25)
 @given(disc_products(max_vertices=3, max_n=4))
 def test_against_the_smith_form_of_sympy(space: PolyhedralProduct) -> None:
-    sizes, matrices = boundary_matrices(space.complex.facets, [pair.n for pair in space.pairs])
+    sizes, matrices = boundary_matrices(space.complex.facets, disc_dimensions(space))
     assert _ours(space, "blocks") == homology_from_factors(sizes, [_factors_by_sympy(matrix) for matrix in matrices])

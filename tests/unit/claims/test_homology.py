@@ -6,10 +6,11 @@ from collections.abc import Mapping
 import pytest
 
 from certify.claims import HomologyClaim
-from certify.claims.homology import Contribution, Route, Task, solve
+from certify.claims.base import Contribution, Task, solve
+from certify.claims.homology import Route
 from certify.errors import BadInput, ClaimIsFalse
 from certify.exact import AbelianGroup
-from certify.products import Block
+from certify.products import Block, cell_complex
 from certify.simplicial import SimplicialComplex, build
 from tests.helpers import Homology, certified_homology, disc_product, graded
 
@@ -84,9 +85,13 @@ def _total(contributions: list[Contribution], degrees: tuple[int, ...] | None = 
     return HomologyClaim(CIRCLE, degrees=degrees).total(iter(contributions))
 
 
+def _found(groups: tuple[AbelianGroup, ...], shifts: dict[int, int]) -> Contribution:
+    return Contribution(groups, Block("", (), (0,), shifts))
+
+
 def test_contributions_are_shifted_and_multiplied() -> None:
-    one = Contribution((AbelianGroup(), AbelianGroup(2, (2,))), {0: 1, 3: 2})
-    other = Contribution((AbelianGroup(0, (3,)),), {1: 1})
+    one = _found((AbelianGroup(), AbelianGroup(2, (2,))), {0: 1, 3: 2})
+    other = _found((AbelianGroup(0, (3,)),), {1: 1})
     assert _total([]) == {}
     assert _total([one]) == graded({1: "Z^2 + Z/2", 4: "Z^4 + (Z/2)^2"})
     assert _total([one, other]) == graded({1: "Z^2 + Z/6", 4: "Z^4 + (Z/2)^2"})
@@ -120,8 +125,9 @@ def test_the_statement_is_complete() -> None:
 
 def test_the_cell_route_is_one_task() -> None:
     claim = HomologyClaim(CIRCLE, degrees=(1,), route="cells")
-    assert list(claim.tasks()) == [Task(CIRCLE, 2)]
-    assert claim.weight == 1
+    (task,) = claim.tasks()
+    assert task.weight == claim.weight == 1
+    assert task.source.chains() == cell_complex(CIRCLE, 2)
 
 
 @pytest.mark.parametrize("m", [0, 1, 5])
@@ -130,41 +136,44 @@ def test_the_tasks_of_the_block_route_settle_every_set_of_vertices(m: int) -> No
     assert sum(task.weight for task in claim.tasks()) == claim.weight == 2**m
 
 
-def _solved(block: Block, top: int | None = None) -> tuple[dict[str, object], Contribution] | None:
-    solved = solve(Task(block, top))
-    return None if solved is None else (json.loads(solved[0]), solved[1])
-
-
 def test_the_record_of_a_block() -> None:
     """Two points: ∅ is d of the first point, and the difference of the points is a cycle."""
-    block = Block("0110", (0, 1, 2), 2, {1: 3})
-    assert _solved(block) == (
-        {"basis": [{}, {"cycles": [[0, -1, 1, 1]], "matched": [0]}], "block": "0110"},
-        Contribution((AbelianGroup(), AbelianGroup(1)), {1: 3}),
-    )
+    line, groups = solve(Task(Block("0110", (1, 1), (0, 1, 2), {1: 3})))
+    assert line is not None
+    assert json.loads(line) == {"basis": [{}, {"cycles": [[0, -1, 1, 1]], "matched": [0]}], "block": "0110"}
+    assert groups == (AbelianGroup(), AbelianGroup(1))
 
 
 @pytest.mark.parametrize(
     ("block", "top"),
     [
-        (Block("1", (0, 1), 1, {0: 1}), None),
-        (Block("11", (0, 1, 2, 3), 2, {5: 1}), None),
+        (Block("1", (1,), (0, 1), {0: 1}), None),
+        (Block("11", (1, 1), (0, 1, 2, 3), {5: 1}), None),
+        (Block("11", (2, 1), (0, 1, 2, 3), {0: 1}), None),
         # Up to degree 0 of the block only ∅ and the points matter: two points are as good as a cone there.
-        (Block("11", (0, 1, 2), 2, {2: 1}), 3),
+        (Block("11", (1, 1), (0, 1, 2), {2: 1}), 3),
     ],
 )
 def test_a_cone_has_no_record(block: Block, top: int | None) -> None:
-    assert _solved(block, top) is None
+    assert solve(Task(block.truncated(top))) == (None, ())
+
+
+def test_a_vertex_with_another_tag_is_no_apex() -> None:
+    """d e = 2 t makes ℤ/2, and no acyclic complex."""
+    line, groups = solve(Task(Block("1", (2,), (0, 1), {0: 1})))
+    assert line is not None
+    assert groups == (AbelianGroup(0, (2,)), AbelianGroup())
 
 
 def test_the_record_of_a_whole_product() -> None:
     """(D¹, S⁰) over two points is a circle of four edges."""
-    solved = solve(Task(CIRCLE, None))
-    assert solved is not None
-    record = json.loads(solved[0])
+    (task,) = HomologyClaim(CIRCLE, route="cells").tasks()
+    line, groups = solve(task)
+    assert line is not None
+    record = json.loads(line)
     assert list(record) == ["basis"]
     assert len(record["basis"][1]["cycles"]) == 1
-    assert solved[1] == Contribution((Z, Z), {0: 1})
+    assert groups == (Z, Z)
 
 
 # -- small spaces, by hand, through the whole of it ---------------------------------------------

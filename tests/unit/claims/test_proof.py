@@ -94,7 +94,7 @@ def test_progress_counts_the_sets_of_vertices(k: SimplicialComplex, jobs: int) -
 def test_a_restricted_claim_states_its_degrees_and_no_zero_group(tmp_path: Path) -> None:
     path = tmp_path / "circle.cert.jsonl"
     with Spool() as spool:
-        proof: Proof = prove(HomologyClaim(CIRCLE, degrees=(1, 7)), spool)
+        proof: Proof[int] = prove(HomologyClaim(CIRCLE, degrees=(1, 7)), spool)
         proof.write(path, {"claim": "circle"})
     assert proof.statement["degrees"] == [1, 7]
     assert proof.statement["groups"] == [[1, 1, []]]

@@ -71,7 +71,7 @@ def test_groups_are_read_as_in_print(text: str, group: AbelianGroup) -> None:
         ("Z ∪ Z", "'Z ∪ Z'"),
         ("Z + F2 + Z", "'F2'"),
         ("(Z/2)^10000001", "'(Z/2)^10000001'"),
-        ("Z^" + "9" * 41, "'Z^" + "9" * 41 + "'"),
+        ("Z^" + "9" * 4001, "'Z^" + "9" * 4001 + "'"),
     ],
 )
 def test_what_is_no_group_is_refused_with_the_summand(text: str, found: str) -> None:
@@ -81,7 +81,6 @@ def test_what_is_no_group_is_refused_with_the_summand(text: str, found: str) -> 
     assert caught.value.where == f"the group {text!r}"
 
 
-@pytest.mark.xfail(reason="white space inside a number is dropped, and digits of other scripts are read")
 @pytest.mark.parametrize("text", ["Z/1 2", "Z^1 0", "(Z/ 2 4)^3", "Z^٣", "Z/１２"])
 def test_what_only_looks_like_a_group_is_refused(text: str) -> None:
     with pytest.raises(BadInput):

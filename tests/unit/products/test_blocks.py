@@ -22,7 +22,7 @@ Expected = list[tuple[str, tuple[int, ...], int, dict[int, int]]]
 
 
 def _listed(space: PolyhedralProduct, top: int | None = None) -> Expected:
-    return [(b.name, b.faces, b.vertices, dict(b.shifts)) for b in block_classes(space, top)]
+    return [(b.name, b.faces, len(b.tags), dict(b.shifts)) for b in block_classes(space, top)]
 
 
 @pytest.mark.parametrize(
@@ -84,7 +84,7 @@ def test_every_set_of_vertices_is_in_one_class() -> None:
     names = [block.name for block in classes]
     assert names == sorted(set(names))
     assert sum(sum(block.shifts.values()) for block in classes) == 2**6
-    assert all(block.name.count("1") == block.vertices for block in classes)
+    assert all(block.tags == (1,) * block.name.count("1") for block in classes)
 
 
 @pytest.mark.parametrize(
@@ -109,12 +109,12 @@ def test_every_set_of_vertices_is_in_one_class() -> None:
 )
 def test_cones(faces: tuple[int, ...], vertices: int, most: int, cone: bool) -> None:
     """Does one vertex complete each face of fewer than `most` vertices to a face? (Lemma C, cut off at a degree.)"""
-    assert Block("", faces, vertices, {0: 1}).is_cone(most) is cone
+    assert Block("", (1,) * vertices, faces, {0: 1}, most).is_cone is cone
 
 
 def test_the_chains_of_a_triangle() -> None:
     """d leaves out one vertex after the other with alternating signs, + for the first; degree k has k vertices."""
-    chains = Block("111", (0, 1, 2, 4, 3, 5, 6, 7), 3, {0: 1}).chains()
+    chains = Block("111", (1, 1, 1), (0, 1, 2, 4, 3, 5, 6, 7), {0: 1}).chains()
     assert chains.boundaries == (
         ((),),
         (((0, 1),), ((0, 1),), ((0, 1),)),

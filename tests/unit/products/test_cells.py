@@ -60,10 +60,10 @@ def test_it_is_a_complex_in_canonical_form(space: PolyhedralProduct) -> None:
 
 
 def test_the_order_of_cells_and_the_signs_of_a_square() -> None:
-    """Points 00, 10, 01, 11; edges e0, e1, 0e, 1e; and d(e × e) = (1 - 0) × e - e × (1 - 0)."""
+    """Points 00, 01, 10, 11; edges e0, e1, 0e, 1e; and d(e × e) = (1 - 0) × e - e × (1 - 0)."""
     assert cell_complex(disc_product(build("simplex", m=2), 1)).boundaries == (
         ((), (), (), ()),
-        (((0, -1), (1, 1)), ((2, -1), (3, 1)), ((0, -1), (2, 1)), ((1, -1), (3, 1))),
+        (((0, -1), (2, 1)), ((1, -1), (3, 1)), ((0, -1), (1, 1)), ((2, -1), (3, 1))),
         (((0, 1), (1, -1), (2, -1), (3, 1)),),
     )
 

@@ -179,7 +179,8 @@ FAULTS = {
         '"(D2, S1)", "(D3, S2)"]',
         '"(D2, S1)",\n  "nonsense"]',
         "line 24, claim 2, key pair, item 3: "
-        "expected a disc and its boundary sphere like \"(D1, S0)\", found 'nonsense'",
+        'expected a pair like "(D1, S0)", "(S3, *)", "(CP3, *)", "(RP2, *)", "(cone 3, 3)" or "(P3(2), *)", '
+        "found 'nonsense'",
     ),
     "a pair in a list that is no text": (
         '"(D2, S1)", "(D3, S2)"]',
