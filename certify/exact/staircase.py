@@ -105,7 +105,8 @@ def arrange(size: int, family: Sequence[tuple[Entries, int]], classes: Iterable[
     for vector, home in family:
         vectors[where[lead_class[home]]].append(vector)
     groups = tuple(_group(c, v) for c, v in zip(cells, vectors, strict=True) if len(c) > 1)
-    return Layout(tuple(chain.from_iterable(cells)), groups)
+    order = tuple(chain.from_iterable(cells))
+    return NATURAL if not groups and order == tuple(reversed(range(size))) else Layout(order, groups)
 
 
 def _joined(size: int, classes: Iterable[Sequence[int]]) -> list[int]:

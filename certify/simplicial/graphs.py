@@ -12,7 +12,7 @@ from typing import Any
 import networkx as nx
 
 from certify.errors import BadInput
-from certify.simplicial.arguments import Label, check_known, distinct_labels, natural_order
+from certify.simplicial.arguments import Label, check_known, distinct_labels, items, natural_order
 from certify.simplicial.complexes import SimplicialComplex
 from certify.simplicial.inputs import label_of, pieces_of, read_by_ending
 
@@ -139,7 +139,7 @@ def graph_from_edges(edges: Iterable[Iterable[Label]], vertices: Iterable[Label]
     Traceback (most recent call last):
     certify.errors.BadInput: edge 1: expected two vertices, found 3
     """
-    pairs = [distinct_labels(edge, f"edge {number}") for number, edge in enumerate(edges, start=1)]
+    pairs = [distinct_labels(edge, f"edge {number}") for number, edge in enumerate(items(edges, "edges"), start=1)]
     for number, pair in enumerate(pairs, start=1):
         if len(pair) != 2:
             raise BadInput(where=f"edge {number}", expected="two vertices", found=str(len(pair)))

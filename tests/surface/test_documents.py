@@ -16,9 +16,20 @@ from jsonschema import Draft202012Validator
 from referencing import Registry, Resource
 
 from certify.certificate import Spool
-from certify.claims import HomologyClaim, prove
+from certify.claims import (
+    Claim,
+    HomologyClaim,
+    RealToricClaim,
+    SmashClaim,
+    SummandClaim,
+    TableClaim,
+    TorClaim,
+    prove,
+)
 from certify.claims.homology import Route
+from certify.products import Pair, PolyhedralProduct, parse_pair
 from certify.simplicial import SimplicialComplex
+from certify.simplicial.families import polygon, simplex
 from tests.helpers import disc_product, verifier
 
 ROOT = Path(__file__).parents[2]
@@ -28,7 +39,9 @@ REFEREES = DOCS / "for-referees.md"
 DOCUMENTS = sorted([*DOCS.glob("*.md"), *DOCS.glob("decisions/*.md")])
 
 PROJECTIVE_PLANE = ("124", "126", "134", "135", "156", "235", "236", "245", "346", "456")
-RECORDS = {"blocks": "record-blocks", "cells": "record-cells"}
+RECORDS = {"basis": "record-cells", "block": "record-blocks"} | {
+    key: f"record-{key}" for key in ("splitting", "generators")
+}
 
 
 def claim(
@@ -40,7 +53,16 @@ def claim(
     return HomologyClaim(disc_product(k, n), degrees=degrees, route=route)
 
 
-CLAIMS = {
+OWN = Pair.from_cells([(0, False, {}), (1, False, {}), (1, True, {}), (2, True, {1: 1, 2: -2})])
+
+
+def over(*pairs: str | Pair, route: Route = "blocks") -> HomologyClaim:
+    """Return a claim over a simplex with these pairs."""
+    chosen = tuple(pair if isinstance(pair, Pair) else parse_pair(pair) for pair in pairs)
+    return HomologyClaim(PolyhedralProduct(simplex(len(pairs)), chosen), route=route)
+
+
+CLAIMS: dict[str, Claim[Any]] = {
     "two-points": claim("1", "2"),
     "two-points-by-cells": claim("1", "2", route="cells"),
     "point": claim(""),
@@ -50,6 +72,14 @@ CLAIMS = {
     "torsion": claim(*PROJECTIVE_PLANE),
     "torsion-by-cells": claim(*PROJECTIVE_PLANE, n=2, route="cells"),
     "torsion-in-one-degree": claim(*PROJECTIVE_PLANE, n=2, degrees=(8,)),
+    "group": over("(P2(4), *)", "(P2(6), *)"),
+    "own-pair": over(OWN, "(cone 3, 3)", "(RP3, *)"),
+    "orbits": over("(D1, S0)", "(D1, S0)", OWN, route="orbits"),
+    "smash": SmashClaim(over("(CP2, *)", "(S3, *)").product),
+    "real-toric": RealToricClaim(polygon(5), ("10101", "01011")),
+    "tor": TorClaim(polygon(5)),
+    "table": TableClaim(polygon(4)),
+    "summand": SummandClaim(polygon(5), (2, 3, 5), (1,)),
 }
 """Claims that together make the prover write everything that the format has; the first four are in the documents."""
 
@@ -84,7 +114,8 @@ def is_valid(kind: str, value: object) -> bool:
 
 
 def test_there_is_a_schema_for_each_kind_of_line() -> None:
-    assert set(schemas()) == {"header", "record-blocks", "record-cells", "end", "values"}
+    openings = {"record-splitting", "record-generators"}
+    assert set(schemas()) == {"header", "record-blocks", "record-cells", "end", "values"} | openings
     for name, schema in schemas().items():
         Draft202012Validator.check_schema(schema)
         assert schema["$id"] == f"{name}.schema.json"
@@ -96,13 +127,13 @@ def test_what_the_prover_writes_is_valid(name: str, written: Any) -> None:
     assert is_valid("header", header)
     assert is_valid("end", end)
     for record in records:
-        assert is_valid(RECORDS[header["route"]], record)
+        assert is_valid(RECORDS[max(record)], record)
 
 
 def test_the_claims_make_the_prover_write_every_key_of_a_basis(written: Any) -> None:
     """Otherwise the test above would say less than it seems to."""
     records = [json.loads(line) for name in CLAIMS for line in written(name).splitlines()[1:-1]]
-    keys = {key for record in records for degree in record["basis"] for key in degree}
+    keys = {key for record in records if "basis" in record for degree in record["basis"] for key in degree}
     assert keys == set(schemas()["values"]["$defs"]["basis"]["items"]["properties"])
 
 
@@ -245,7 +276,8 @@ def blocks(path: Path, language: str) -> list[str]:
 
 def test_the_certificates_that_are_shown_are_those_that_the_prover_writes(written: Any) -> None:
     end, *whole = blocks(FORMAT, "jsonl")
-    shown, by_cells, record = blocks(REFEREES, "jsonl")
+    shown, by_cells, record, group = blocks(REFEREES, "jsonl")
+    assert group == written("group").splitlines(keepends=True)[-2]
     assert whole == [written(name) for name in ("two-points", "two-points-by-cells", "point", "degree-3")]
     assert end == written("two-points").splitlines(keepends=True)[-1]
     assert [shown, by_cells] == whole[:2]

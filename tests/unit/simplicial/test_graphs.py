@@ -77,16 +77,15 @@ def test_a_full_subcomplex_belongs_to_an_induced_subgraph(graph: nx.Graph[int], 
 @pytest.mark.parametrize(
     ("graph", "message"),
     [
-        (nx.DiGraph([(1, 2)]), "graph: expected edges without direction, found a directed graph"),
-        (nx.Graph([(1, 2), ("a", "a")]), "graph: expected no loop, found one at node 'a'"),
-        (nx.empty_graph([2, True]), "facet 1: expected numbers or names as labels, found True"),
+        (nx.DiGraph([(1, 2)]), "expected edges without direction, found a directed graph"),
+        (nx.Graph([(1, 2), ("a", "a")]), "expected no loop, found one at node 'a'"),
+        (nx.empty_graph([2, True]), "expected numbers or names as labels, found True"),
     ],
 )
 def test_graphs_that_have_no_such_complex(make: Any, graph: Any, message: str) -> None:
     with pytest.raises(BadInput) as caught:
         make(graph)
-    # The two complexes have other facets, so the label may turn up in another one.
-    assert str(caught.value).partition(":")[2] == message.partition(":")[2]
+    assert str(caught.value).partition(": ")[2] == message
 
 
 # -- edges ------------------------------------------------------------------------------------
@@ -182,10 +181,10 @@ def test_graph6(text: str, nodes: list[int], edges: list[tuple[int, int]]) -> No
 
 @given(graphs(9))
 def test_graph6_both_ways(graph: nx.Graph[int]) -> None:
-    nodes = range(1, len(graph) + 1)
-    read = read_graph6(nx.to_graph6_bytes(graph, nodes=nodes).decode("ascii"))
-    assert list(read) == list(nodes)
-    assert nx.utils.edges_equal(read.edges, graph.edges)
+    read = read_graph6(nx.to_graph6_bytes(graph).decode("ascii"))
+    number = {node: i for i, node in enumerate(graph, start=1)}
+    assert list(read) == list(number.values())
+    assert nx.utils.edges_equal(read.edges, [(number[a], number[b]) for a, b in graph.edges])
 
 
 def test_graph6_with_more_than_62_nodes() -> None:

@@ -53,7 +53,8 @@ def test_a_polygon_is_simple_and_simplicial(n: int) -> None:
 def test_both_ways_to_read_a_polygon_agree_up_to_isomorphism() -> None:
     matrix = ["1001", "0011", "1100", "0110"]
     turned = ["".join(row[i] for row in matrix) for i in range(4)]
-    assert str(from_incidence(matrix)) == "4 vertices, facets 13 34 24 12".replace("13 34 24 12", "12 13 24 34")
+    assert str(from_incidence(matrix)) == "4 vertices, facets 12 13 24 34"
+    assert str(from_incidence(turned)) == "4 vertices, facets 12 14 23 34"
     assert are_isomorphic(from_incidence(matrix), from_incidence(turned))
 
 
@@ -101,7 +102,7 @@ def test_rows_may_be_texts_or_lists() -> None:
         ),
         ([], "incidence: expected at least one row and one column, found none"),
         (["", ""], "incidence: expected at least one row and one column, found none"),
-        ("0110", "row 1: expected digits 0 and 1, found '0'"),
+        ("0110", "incidence: expected a list, found '0110'"),
         (7, "incidence: expected a list, found 7"),
         ([7], "row 1: expected a list, found 7"),
         (["110", "10"], "row 2: expected 3 entries like row 1, found 2"),
@@ -114,24 +115,27 @@ def test_rows_may_be_texts_or_lists() -> None:
 def test_what_is_no_incidence_of_a_simple_or_simplicial_polytope(rows: Any, message: str) -> None:
     with pytest.raises(BadInput) as caught:
         from_incidence(rows)
-    if rows == "0110":
-        assert caught.value.where == "incidence"
-    else:
-        assert str(caught.value) == message
+    assert str(caught.value) == message
 
 
 @pytest.mark.parametrize(
-    "rows",
+    "columns",
     [
-        ["0"],
-        # A graph with an edge too many, one with two circles, and facets that are given twice.
-        transposed([[int(v in edge) for v in range(4)] for edge in combinations(range(4), 2)]),
-        transposed([[int(v in edge) for v in range(6)] for edge in ((0, 1), (1, 2), (0, 2), (3, 4), (4, 5), (3, 5))]),
-        ["11", "11"],
-        # A vertex on no facet.
-        ["101", "110", "011", "000"],
+        [[]],
+        # The edges of a tetrahedron, where three meet in each vertex; two triangles apart; one triangle twice.
+        list(combinations(range(4), 2)),
+        [*combinations(range(3), 2), *combinations(range(3, 6), 2)],
+        [*combinations(range(3), 2), *combinations(range(3), 2)],
+        # A triangle with a vertex that lies on no facet.
+        [*combinations(range(3), 2), ()],
     ],
 )
-def test_facets_that_do_not_close_up(rows: Any) -> None:
-    with pytest.raises(BadInput, match="incidence|row"):
+def test_facets_that_do_not_close_up(columns: list[tuple[int, ...]]) -> None:
+    vertices = 1 + max((v for column in columns for v in column), default=0)
+    rows = [[int(v in column) for column in columns] for v in range(vertices)]
+    with pytest.raises(BadInput) as caught:
         from_incidence(rows)
+    assert (
+        str(caught.value)
+        == "incidence: expected the vertices and facets of a polytope, found facets that do not close up"
+    )
