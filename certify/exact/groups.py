@@ -26,7 +26,7 @@ _MOST_SUMMANDS = 10**6
 _Power = Callable[[int], str]
 
 
-@dataclass(frozen=True, slots=True)
+@dataclass(frozen=True, slots=True, repr=False)
 class AbelianGroup:
     """The group ℤ^rank ⊕ ℤ/d_1 ⊕ … ⊕ ℤ/d_s with invariant factors 1 < d_1 | d_2 | … | d_s.
 
@@ -34,7 +34,7 @@ class AbelianGroup:
 
     Examples
     --------
-    >>> print(AbelianGroup.of(2, [2, 6, 4]))
+    >>> AbelianGroup.of(2, [2, 6, 4])
     ℤ² ⊕ (ℤ/2)² ⊕ ℤ/12
     >>> AbelianGroup.parse("Z/2 + Z/3") == AbelianGroup.parse("Z/6")
     True
@@ -87,6 +87,38 @@ class AbelianGroup:
     def __str__(self) -> str:
         """Write the group as in print."""
         return self._written("ℤ", " ⊕ ", superscript)
+
+    def __repr__(self) -> str:
+        """Write the group as in print: at a prompt, people want to read it."""
+        return str(self)
+
+    def latex(self) -> str:
+        r"""Write the group in LaTeX, to be used in mathematics mode.
+
+        Examples
+        --------
+        >>> print(AbelianGroup.of(34, [2, 2]).latex())
+        \mathbb{Z}^{34} \oplus (\mathbb{Z}/2)^{2}
+        """
+        return self._written(r"\mathbb{Z}", r" \oplus ", lambda exponent: f"^{{{decimal(exponent)}}}")
+
+    def html(self) -> str:
+        """Write the group in HTML.
+
+        Examples
+        --------
+        >>> AbelianGroup.of(34, [2]).html()
+        'ℤ<sup>34</sup> ⊕ ℤ/2'
+        """
+        return self._written("ℤ", " ⊕ ", lambda exponent: f"<sup>{decimal(exponent)}</sup>")
+
+    def _repr_latex_(self) -> str:
+        """Tell a notebook how to show the group in LaTeX."""
+        return f"${self.latex()}$"
+
+    def _repr_html_(self) -> str:
+        """Tell a notebook how to show the group in HTML."""
+        return self.html()
 
     def plain(self) -> str:
         """Write the group in ASCII, as claim sheets do.

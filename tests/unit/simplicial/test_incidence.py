@@ -119,23 +119,21 @@ def test_what_is_no_incidence_of_a_simple_or_simplicial_polytope(rows: Any, mess
 
 
 @pytest.mark.parametrize(
-    "columns",
+    ("vertices", "columns"),
     [
-        [[]],
+        (1, [[]]),
         # The edges of a tetrahedron, where three meet in each vertex; two triangles apart; one triangle twice.
-        list(combinations(range(4), 2)),
-        [*combinations(range(3), 2), *combinations(range(3, 6), 2)],
-        [*combinations(range(3), 2), *combinations(range(3), 2)],
-        # A triangle with a vertex that lies on no facet.
-        [*combinations(range(3), 2), ()],
+        (4, list(combinations(range(4), 2))),
+        (6, [*combinations(range(3), 2), *combinations(range(3, 6), 2)]),
+        (3, [*combinations(range(3), 2), *combinations(range(3), 2)]),
+        # A triangle with a facet that has no vertex, and with a vertex that lies on no facet.
+        (3, [*combinations(range(3), 2), ()]),
+        (4, list(combinations(range(3), 2))),
     ],
 )
-def test_facets_that_do_not_close_up(columns: list[tuple[int, ...]]) -> None:
-    vertices = 1 + max((v for column in columns for v in column), default=0)
+def test_facets_that_do_not_close_up(vertices: int, columns: list[tuple[int, ...]]) -> None:
     rows = [[int(v in column) for column in columns] for v in range(vertices)]
     with pytest.raises(BadInput) as caught:
         from_incidence(rows)
-    assert (
-        str(caught.value)
-        == "incidence: expected the vertices and facets of a polytope, found facets that do not close up"
-    )
+    assert caught.value.where == "incidence"
+    assert caught.value.found == "facets that do not close up"

@@ -10,6 +10,7 @@ from certify.simplicial import (
     SimplicialComplex,
     alexander_dual,
     build,
+    connected_sum,
     deletion,
     disjoint_union,
     full_subcomplex,
@@ -66,6 +67,69 @@ def test_a_label_in_both_is_told_apart(
     other = from_facets([[2, 5]])
     assert operation(EDGE, other).labels == ((0, 1), (0, 2), (1, 2), (1, 5))
     assert operation(EDGE, from_facets([[4, 5]])).labels == (1, 2, 4, 5)
+
+
+def test_many_complexes_are_numbered_through() -> None:
+    assert join(EDGE, POINT, EDGE).labels == ((0, 1), (0, 2), (1, "a"), (2, 1), (2, 2))
+    assert str(disjoint_union(EDGE, POINT, from_facets([["b"]]))) == "4 vertices, facets 12 a b"
+    assert join() == disjoint_union() == NOTHING
+
+
+# -- connected sums ---------------------------------------------------------------------------
+
+TRIANGLE = from_facets([["x", "y"], ["y", "z"], ["x", "z"]])
+
+
+def test_two_polygons_make_one() -> None:
+    found = connected_sum(SQUARE, TRIANGLE, [4, 1], ["x", "z"])
+    assert str(found) == "5 vertices, facets 12 1y 23 34 4y"
+    assert str(connected_sum(SQUARE, TRIANGLE, [1, 4], ["x", "z"])) == str(found)
+
+
+def test_the_order_of_the_vertices_tells_how_to_glue() -> None:
+    """Two tetrahedra with a flag attached to the edge a b or b c: the flags may meet or not."""
+    k = from_facets([[1, 2, 3], [1, 2, 4]])
+    other = from_facets([["a", "b", "c"], ["a", "b", "d"]])
+    assert str(connected_sum(k, other, [1, 2, 3], ["a", "b", "c"])) == "5 vertices, facets 124 12d 13 23"
+    assert str(connected_sum(k, other, [1, 2, 3], ["c", "a", "b"])) == "5 vertices, facets 124 13 23d"
+
+
+def test_labels_of_a_connected_sum() -> None:
+    """Only labels that stay are told apart: the glued facet of the second complex has no labels of its own."""
+    one, two = from_facets([[1, 2], [2, 3]]), from_facets([[2, 1], [1, 9]])
+    assert connected_sum(one, two, [1, 2], [2, 1]).labels == (1, 2, 3, 9)
+    assert connected_sum(one, one, [1, 2], [2, 1]).labels == ((0, 1), (0, 2), (0, 3), (1, 3))
+
+
+def test_points_are_glued_and_taken_out_but_stay_as_ghosts() -> None:
+    two, three = from_facets([[1], [2]]), from_facets([["a"], ["b"], ["c"]])
+    assert str(connected_sum(two, three, [2], ["b"])) == "4 vertices, facets 1 a c, ghosts 2"
+
+
+@pytest.mark.parametrize(
+    ("facet", "other_facet", "message"),
+    [
+        ([1, 3], ["x", "y"], "facet 1: expected the vertices of a facet, at least one, found 1 3"),
+        ([1], ["x"], "facet 1: expected the vertices of a facet, at least one, found 1"),
+        ([1, 2], [], "facet 2: expected the vertices of a facet, at least one, found no vertex"),
+        ([1, 2], ["x", "q"], "facet 2: expected vertices of the complex, found vertex 'q', which is none"),
+        ([1, 2], ["x", "x"], "facet 2: expected each vertex once, found vertex 'x' twice"),
+        ("12", ["x", "y"], "facet 1: expected a list, found '12'"),
+    ],
+)
+def test_connected_sums_need_facets(facet: Any, other_facet: Any, message: str) -> None:
+    with pytest.raises(BadInput) as caught:
+        connected_sum(SQUARE, TRIANGLE, facet, other_facet)
+    assert str(caught.value) == message
+
+
+def test_facets_of_different_size_cannot_be_glued() -> None:
+    with pytest.raises(BadInput) as caught:
+        connected_sum(SQUARE, from_facets([["a", "b", "c"]]), [1, 2], ["a", "b", "c"])
+    assert str(caught.value) == "facet 2: expected 2 vertices like the first facet, found 3"
+
+
+# -- parts ------------------------------------------------------------------------------------
 
 
 @pytest.mark.parametrize(
