@@ -9,9 +9,10 @@ from typing import TYPE_CHECKING
 
 from certify.answers.certificates import Certificate
 from certify.answers.graded import GradedGroups
-from certify.answers.writing import check_characteristic, divisible, html_table, html_text, latex_set, plain_set
+from certify.answers.writing import check_characteristic, divisible, html_table, html_text
 from certify.exact import AbelianGroup
 from certify.simplicial import Label, SimplicialComplex, face_of, mask_of
+from certify.simplicial.writing import latex_set, plain_set
 
 if TYPE_CHECKING:
     import sympy

@@ -8,13 +8,13 @@ from typing import get_args
 from certify.answers.bigraded import Splitting, Tor
 from certify.answers.certificates import proved
 from certify.answers.graded import Homology
-from certify.answers.writing import plain_set
 from certify.claims import HomologyClaim, RealToricClaim, SmashClaim, SummandClaim, TableClaim, TorClaim
 from certify.claims.homology import Route
 from certify.errors import BadInput
 from certify.products import Pair, PolyhedralProduct, parse_pair
 from certify.products.real_toric import RealToricSpace
 from certify.simplicial import Label, SimplicialComplex
+from certify.simplicial.writing import plain_set
 
 __all__ = [
     "homology",

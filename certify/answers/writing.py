@@ -2,17 +2,13 @@
 
 from __future__ import annotations
 
-import re
 from collections.abc import Iterable, Sequence
 from html import escape
 
 from certify.errors import BadInput
 from certify.exact import AbelianGroup
-from certify.simplicial import Label
 
-__all__ = ["check_characteristic", "divisible", "html_table", "html_text", "latex_set", "plain_set"]
-
-_SPECIAL = {"\\": r"\backslash "} | {letter: rf"\{letter}" for letter in "{}_&%$#"}
+__all__ = ["check_characteristic", "divisible", "html_table", "html_text"]
 
 
 def check_characteristic(p: int) -> None:
@@ -43,37 +39,6 @@ def html_table(head: Sequence[str], rows: Iterable[Sequence[str]]) -> str:
     lines = ("".join(f"<td>{cell}</td>" for cell in row) for row in rows)
     body = "".join(f"<tr>{line}</tr>" for line in lines)
     return f"<table><thead><tr>{top}</tr></thead><tbody>{body}</tbody></table>"
-
-
-def plain_set(labels: Iterable[Label]) -> str:
-    """Return a set of vertices as in print.
-
-    Examples
-    --------
-    >>> plain_set([1, 3]), plain_set([])
-    ('{1,3}', '∅')
-    """
-    names = ",".join(map(str, labels))
-    return f"{{{names}}}" if names else "∅"
-
-
-def latex_set(labels: Iterable[Label]) -> str:
-    r"""Return a set of vertices in LaTeX.
-
-    Examples
-    --------
-    >>> print(latex_set([1, "red_a"]))
-    \{1, \mathrm{red\_a}\}
-    """
-    names = ", ".join(_latex_label(label) for label in labels)
-    return rf"\{{{names}\}}" if names else r"\varnothing"
-
-
-def _latex_label(label: Label) -> str:
-    text = str(label)
-    if re.fullmatch(r"-?[0-9]+|[A-Za-z]", text, re.ASCII):
-        return text
-    return r"\mathrm{" + "".join(_SPECIAL.get(letter, letter) for letter in text) + "}"
 
 
 def _is_prime(number: int) -> bool:

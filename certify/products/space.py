@@ -11,7 +11,7 @@ from certify.simplicial.complexes import SimplicialComplex
 __all__ = ["PolyhedralProduct"]
 
 
-@dataclass(frozen=True, slots=True)
+@dataclass(frozen=True, slots=True, repr=False)
 class PolyhedralProduct:
     """The polyhedral product (X, A)^K, the union over the faces σ of K of ∏_{i ∈ σ} X_i × ∏_{i ∉ σ} A_i.
 
@@ -44,3 +44,8 @@ class PolyhedralProduct:
         if len(set(self.pairs)) == 1:
             return f"{self.pairs[0].symbol}^K"
         return "(X,A)^K"
+
+    def __repr__(self) -> str:
+        """Write the space as in print, with K; and with the pairs where they differ."""
+        pairs = [pair.symbol for pair in self.pairs] if len(set(self.pairs)) > 1 else []
+        return f"{self}, where K has {self.complex}" + (f", and the pairs are {', '.join(pairs)}" if pairs else "")

@@ -4,12 +4,14 @@ from __future__ import annotations
 
 from collections.abc import Iterable, Mapping, Sequence
 from dataclasses import dataclass
+from html import escape
 from itertools import chain
 from math import comb
 
 from certify.errors import BadInput
 from certify.simplicial.arguments import Label, check_known, distinct_labels, items, natural_order
 from certify.simplicial.masks import Face, face_of, levels, mask_of, maximal, minimal_non_faces
+from certify.simplicial.writing import latex_set
 
 __all__ = ["Face", "Label", "SimplicialComplex"]
 
@@ -238,6 +240,27 @@ class SimplicialComplex:
         ghosts = " ".join(str(label) for label in self.ghosts())
         count = "1 vertex" if len(names) == 1 else f"{len(names)} vertices"
         return f"{count}, facets {facets}" + (f", ghosts {ghosts}" if ghosts else "")
+
+    def latex(self) -> str:
+        r"""Write the facets in LaTeX, to be used in mathematics mode; and all vertices, if there are ghosts.
+
+        Examples
+        --------
+        >>> print(SimplicialComplex.from_facets([[1, 2], [3]]).latex())
+        \langle \{1, 2\}, \{3\} \rangle
+        """
+        facets = ", ".join(latex_set(self.labels[vertex] for vertex in facet) for facet in self.facets)
+        within = rf" \text{{ on }} {latex_set(self.labels)}" if self.ghosts() else ""
+        return rf"\langle {facets} \rangle{within}"
+
+    def _repr_latex_(self) -> str:
+        """Tell a notebook how to show the complex in LaTeX."""
+        return f"${self.latex()}$"
+
+    def _repr_html_(self) -> str:
+        """Tell a notebook how to show the complex: its facets, and how many faces there are of each dimension."""
+        counts = ", ".join(map(str, self.f_vector()))
+        return f"<p>{escape(str(self))}; f-vector ({counts})</p>"
 
 
 def _numbers(facet: Sequence[Label], number: Mapping[Label, int], where: str) -> list[int]:

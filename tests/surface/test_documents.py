@@ -174,7 +174,7 @@ INVALID: dict[str, tuple[str, Any, tuple[str | int, ...], Any]] = {
     "an unknown kind": ("header", HEADER, ("statement", "kind"), "cohomology"),
     "a pair without its space": ("header", HEADER, ("statement", "pairs", 0), "(D1,S0)"),
     "a small integer as text": ("header", HEADER, ("statement", "vertices"), "2"),
-    "a block that is no word": ("record-blocks", RECORD, ("block",), "12"),
+    "a block that is no word": ("record-blocks", RECORD, ("block",), "1-"),
     "a block on the other route": ("record-cells", {"basis": RECORD["basis"]}, ("block",), "11"),
     "an empty list": ("record-blocks", RECORD, ("basis", 0, "matched"), []),
     "a matched cell twice": ("record-blocks", RECORD, ("basis", 0, "matched"), [0, 0]),

@@ -92,7 +92,7 @@ FAULTS: dict[str, tuple[str, str]] = {
     ),
     "an unknown key": (
         "facets = [[1]]\nghosts = [2]",
-        ", key ghosts: expected no other keys than facets, vertices, found a list",
+        ", key ghosts: expected no other keys than facets, vertices, found 'ghosts'",
     ),
     "facets that are no list": ('facets = "1 2"', ", key facets: expected a list, found '1 2'"),
     "no facet": ("facets = []", ", key facets: expected at least one facet ([[]] has the empty face), found none"),
@@ -163,7 +163,7 @@ FAULTS: dict[str, tuple[str, str]] = {
     ),
     "an argument too many": (
         'family = "polygon"\nn = 4\nm = 4',
-        ", key m: expected no other keys than family, n, found 4",
+        ", key m: expected no other keys than family, n, found 'm'",
     ),
     "a graph6 text that is none": (
         'graph6 = "Dh"\nas = "clique"',

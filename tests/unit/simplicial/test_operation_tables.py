@@ -29,7 +29,7 @@ STAGE = SimplicialComplex.from_facets([["left", "right"], ["front"]])
 DOUBLED = join(STAGE, STAGE)
 KNOWN = {"ring": RING, "stage": STAGE, "doubled": DOUBLED, "full": build("simplex", m=2)}
 
-GOOD = {
+GOOD: dict[str, tuple[dict[str, Any], SimplicialComplex]] = {
     "join": ({"of": ["ring", "stage"]}, join(RING, STAGE)),
     "disjoint-union": ({"of": ["stage", "stage", "ring"]}, disjoint_union(STAGE, STAGE, RING)),
     "link": ({"of": "ring", "face": [1]}, link(RING, [1])),
@@ -79,7 +79,7 @@ FAULTS: dict[str, tuple[dict[str, Any], str]] = {
     "an operation that is no text": ({"operation": 1}, "key operation: expected the name of an operation, found 1"),
     "a key that nobody reads": (
         {"operation": "link", "of": "ring", "face": [1], "faces": [1]},
-        "key faces: expected no other keys than operation, of, face, found a list",
+        "key faces: expected no other keys than operation, of, face, found 'faces'",
     ),
     "no complex": (
         {"operation": "alexander-dual"},
