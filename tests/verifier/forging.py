@@ -55,6 +55,8 @@ CLAIMS: dict[str, Claim[Any]] = {
     "points-of-a-cone": _over(build("points", m=3), "(cone 3, 3)"),
     "moore": _mixed("(P2(4), *)", "(P2(6), *)"),
     "real-projective": _mixed("(RP3, *)", "(RP2, *)", route="cells"),
+    "moore-alone": _mixed("(P2(3), *)", route="cells"),
+    "circle": _over(SimplicialComplex.from_facets([[]], vertices=[1]), "(D2, S1)", "cells"),
     "own-pair": _mixed(DEGREE_TWO, "(D1, S0)"),
     "smash": SmashClaim(PolyhedralProduct(build("projective-plane"), parse_pairs("(D1, S0)", 6))),
     "real-toric": RealToricClaim(polygon(5), ("10101", "01011")),
@@ -96,7 +98,7 @@ def forged(name: str, edit: Edit) -> bytes:
     return signed(values)
 
 
-def judged(content: bytes, name: str = "x.cert.jsonl", **changed: float) -> dict[str, Any]:
+def judged(content: bytes, name: str = "x.cert.jsonl", **changed: Any) -> dict[str, Any]:
     """Return the report of the verifier on a file with this content."""
     with TemporaryDirectory() as folder:
         path = Path(folder) / name

@@ -1,0 +1,63 @@
+"""What is true: groups computed from a statement with python-flint's Smith forms, without any certificate."""
+
+from __future__ import annotations
+
+from typing import Any
+
+from flint import fmpz_mat
+
+from certify.exact import AbelianGroup, BasedComplex
+from certify.products import Block, Pair, PolyhedralProduct, cell_complex, parse_pair
+from certify.products.real_toric import RealToricSpace
+from certify.simplicial import SimplicialComplex
+from certify.simplicial.operations import full_subcomplex, link
+
+__all__ = ["is_true"]
+
+
+def is_true(statement: dict[str, Any]) -> bool:
+    """Tell whether a statement of the kinds homology, real-toric or summand is true."""
+    complex_, least = _space(statement)
+    found = {k + least: group for k, group in enumerate(_homology(complex_)) if group}
+    stated = {k: AbelianGroup.of(int(rank), map(int, torsion)) for k, rank, torsion in statement["groups"]}
+    degrees = statement.get("degrees")
+    return stated == {k: group for k, group in found.items() if degrees is None or k in degrees}
+
+
+def _space(statement: dict[str, Any]) -> tuple[BasedComplex, int]:
+    """Return the whole chain complex that a statement is about, and its lowest degree."""
+    vertices = range(1, statement["vertices"] + 1)
+    k = SimplicialComplex.from_facets(statement["facets"], vertices)
+    match statement["kind"]:
+        case "homology":
+            return cell_complex(PolyhedralProduct(k, tuple(map(_pair, statement["pairs"])))), 0
+        case "real-toric":
+            return RealToricSpace(k, tuple(statement["rows"])).chains(), 0
+        case "summand":
+            part = full_subcomplex(link(k, statement["out"]), statement["kept"])
+            return Block("", (1,) * part.vertex_count, part.face_masks(), {0: 1}).chains(), -1
+        case kind:
+            raise NotImplementedError(kind)
+
+
+def _pair(value: Any) -> Pair:
+    if isinstance(value, str):
+        return parse_pair(value)
+    cells = [(d, bool(side), dict(zip(b[::2], b[1::2], strict=True))) for d, side, b in value["cells"]]
+    return Pair.from_cells(cells)
+
+
+def _homology(complex_: BasedComplex) -> list[AbelianGroup]:
+    """Return the homology by ranks and invariant factors of the dense boundary matrices."""
+    forms = [_invariants(complex_.dense(k)) if k else [] for k in range(len(complex_.sizes))] + [[]]
+    return [
+        AbelianGroup.of(size - len(forms[k]) - len(forms[k + 1]), forms[k + 1]) for k, size in enumerate(complex_.sizes)
+    ]
+
+
+def _invariants(matrix: list[list[int]]) -> list[int]:
+    """Return the non-zero diagonal entries of the Smith form."""
+    if not matrix or not matrix[0]:
+        return []
+    form = fmpz_mat(matrix).snf()
+    return [abs(int(form[i, i])) for i in range(min(form.nrows(), form.ncols())) if form[i, i] != 0]
