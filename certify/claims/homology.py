@@ -10,7 +10,7 @@ from __future__ import annotations
 from collections.abc import Iterable, Iterator, Mapping
 from dataclasses import dataclass, replace
 from math import prod
-from typing import Any, ClassVar, Literal
+from typing import Any, ClassVar, Literal, get_args
 
 from certify.certificate.canonical import integer_value
 from certify.certificate.records import vector_value
@@ -59,7 +59,9 @@ class HomologyClaim(Claim[int]):
     kind: ClassVar[str] = "homology"
 
     def __post_init__(self) -> None:
-        """Refuse degrees that are none, and groups outside the degrees."""
+        """Refuse degrees that are none, groups outside the degrees, and routes that are none."""
+        if self.route not in get_args(Route):
+            raise BadInput(where="route", expected=" or ".join(get_args(Route)), found=repr(self.route))
         object.__setattr__(self, "degrees", checked_degrees(self.degrees, self.groups))
 
     @property
