@@ -42,10 +42,13 @@ class ClaimIsFalse(CertifyError):
         The quantity, in the notation of mathematics.
     claimed, found : str
         The value that the author stated, and the value that was computed.
+    more : int
+        How many other values of the claim are wrong, too.
     """
 
-    def __init__(self, *, what: str, claimed: str, found: str) -> None:
-        super().__init__(f"{what} is claimed to be {claimed}, but is {found}")
+    def __init__(self, *, what: str, claimed: str, found: str, more: int = 0) -> None:
+        rest = f" ({more} more values are wrong)" if more > 1 else " (one more value is wrong)" if more else ""
+        super().__init__(f"{what} is claimed to be {claimed}, but is {found}{rest}")
         self.what = what
         self.claimed = claimed
         self.found = found

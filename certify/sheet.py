@@ -1,25 +1,29 @@
 """Claim sheets: from a TOML file to claims, with faults that name file, line and key.
 
-A sheet has a ``title``, complexes ``[complexes.NAME]`` and claims ``[[claims]]``. It is read whole and checked before
-anything is computed, and a key that nobody reads is a fault.
+A sheet has a ``title``, complexes ``[complexes.NAME]``, pairs ``[pairs.NAME]`` and claims ``[[claims]]``. It is read
+whole and checked before anything is computed, and a key that nobody reads is a fault.
 """
 
 from __future__ import annotations
 
-import re
 import tomllib
 from collections.abc import Mapping
 from dataclasses import dataclass
 from pathlib import Path
+from typing import Any
 
-from certify.claims import HomologyClaim
-from certify.claims.reading import KINDS, KeyFault, Keys, Table, shown
+from certify.certificate.about import NAME_RULE, about_claim, is_claim_name
+from certify.claims import Claim
+from certify.claims.reading import KINDS, Given
 from certify.errors import BadInput
-from certify.simplicial import SimplicialComplex, build, complex_from_table
+from certify.products import Pair
+from certify.products.reading import pair_from_table
+from certify.simplicial import SimplicialComplex
+from certify.simplicial.definitions import complex_from_definition
+from certify.tables import KeyFault, Keys, Table, shown
 
 __all__ = ["NamedClaim", "Sheet", "line_of", "parse_sheet", "read_sheet"]
 
-_ID = re.compile(r"[A-Za-z0-9][A-Za-z0-9._-]{0,99}", re.ASCII)
 _COMMON = ("id", "kind", "title", "source")
 
 # What `tomllib` says, and what that means to somebody who writes a sheet; anything else is passed on as it stands.
@@ -43,8 +47,8 @@ class NamedClaim:
     id : str
         The claim's name, which is also the name of its certificate.
     complex : str
-        The name that the sheet gives to K.
-    claim : HomologyClaim
+        The name that the sheet gives to K; for a space of a family, that of the family.
+    claim : Claim
     about : mapping
         What the certificate says besides the statement: the claim's name under ``claim``, ``title`` and ``source`` if
         the sheet has them, and ``labels`` of the vertices where these are not 1, 2, ….
@@ -52,16 +56,8 @@ class NamedClaim:
 
     id: str
     complex: str
-    claim: HomologyClaim
+    claim: Claim[Any]
     about: Mapping[str, str | list[str]]
-
-    @classmethod
-    def of(cls, id: str, complex: str, claim: HomologyClaim, prose: Mapping[str, str]) -> NamedClaim:
-        """Return a claim with what its certificate says about it; `prose` may hold ``title`` and ``source``."""
-        labels = claim.product.complex.labels
-        plain = labels == tuple(range(1, len(labels) + 1))
-        named = {} if plain else {"labels": [str(label) for label in labels]}
-        return cls(id, complex, claim, {"claim": id, **prose, **named})
 
 
 @dataclass(frozen=True, slots=True)
@@ -97,14 +93,21 @@ def read_sheet(path: Path) -> Sheet:
     except OSError as error:
         raise BadInput(where=str(path), expected="a claim sheet", found=f"{error.strerror or error}") from error
     try:
-        title, claims = parse_sheet(_text_of(data))
+        title, claims = parse_sheet(_text_of(data), path.parent)
     except BadInput as fault:
         raise fault.inside(str(path)) from fault
     return Sheet(path, title, claims)
 
 
-def parse_sheet(text: str) -> tuple[str, tuple[NamedClaim, ...]]:
+def parse_sheet(text: str, folder: Path = Path()) -> tuple[str, tuple[NamedClaim, ...]]:
     """Return the title and the claims of a sheet.
+
+    Parameters
+    ----------
+    text : str
+        The sheet.
+    folder : Path
+        Where files that it mentions are looked for.
 
     Raises
     ------
@@ -113,9 +116,9 @@ def parse_sheet(text: str) -> tuple[str, tuple[NamedClaim, ...]]:
     """
     table = Table((), _toml(text))
     try:
-        table.only(("title", "complexes", "claims"))
+        table.only(("title", "complexes", "pairs", "claims"))
         title = table.text("title") if "title" in table.values else ""
-        return title, _claims(table, _complexes(table))
+        return title, _claims(table, Given(_complexes(table, folder), _pairs(table)))
     except KeyFault as fault:
         raise fault.inside(f"line {line_of(text, fault.keys)}") from fault
 
@@ -145,45 +148,32 @@ def _toml(text: str) -> dict[str, object]:
         raise BadInput(where="the sheet", expected="TOML of an ordinary size", found=str(error)) from error
 
 
-# -- complexes ----------------------------------------------------------------------------------
+# -- complexes and pairs ------------------------------------------------------------------------
 
 
-def _complexes(table: Table) -> dict[str, SimplicialComplex]:
-    tables = Table.of(("complexes",), table.values.get("complexes", {}))
-    return {name: _complex(Table.of(("complexes", name), value)) for name, value in tables.values.items()}
+def _complexes(table: Table, folder: Path) -> dict[str, SimplicialComplex]:
+    """Return the complexes by name; each may refer to those above it."""
+    known: dict[str, SimplicialComplex] = {}
+    for name, value in Table.of(("complexes",), table.values.get("complexes", {})).values.items():
+        known[name] = complex_from_definition(Table.of(("complexes", name), value), known, folder)
+    return known
 
 
-def _complex(table: Table) -> SimplicialComplex:
-    """Return the complex of a table with facets, or with a family and its arguments."""
-    try:
-        if "family" not in table.values:
-            return complex_from_table(table.values)
-        name = table.text("family", "the name of a family")
-        return build(name, **{key: value for key, value in table.values.items() if key != "family"})
-    except KeyFault:
-        raise
-    except BadInput as fault:
-        raise table.fault(*_place(fault, table), expected=fault.expected, found=fault.found) from fault
-
-
-def _place(fault: BadInput, table: Table) -> Keys:
-    """Return where in the table of a complex a fault lies: readers of complexes end ``where`` with facet or key."""
-    *_, before, last = ["", *fault.where.split()]
-    if before == "facet" and last.isdigit():
-        return ("facets", int(last) - 1)
-    return (last,) if last in table.values else ()
+def _pairs(table: Table) -> dict[str, Pair]:
+    tables = Table.of(("pairs",), table.values.get("pairs", {}))
+    return {name: pair_from_table(Table.of(("pairs", name), value), name) for name, value in tables.values.items()}
 
 
 # -- claims -------------------------------------------------------------------------------------
 
 
-def _claims(table: Table, complexes: Mapping[str, SimplicialComplex]) -> tuple[NamedClaim, ...]:
+def _claims(table: Table, given: Given) -> tuple[NamedClaim, ...]:
     if not table.values.get("claims"):
         raise BadInput(where="the sheet", expected="at least one claim ([[claims]])", found="none")
     claims: dict[str, NamedClaim] = {}
     for number, value in enumerate(table.items("claims", "a list of tables ([[claims]])")):
         entry = Table.of(("claims", number), value)
-        claim = _claim(entry, complexes)
+        claim = _claim(entry, given)
         # Some systems take two names that differ only in case for the same file.
         twin = claims.setdefault(claim.id.lower(), claim)
         if twin is not claim:
@@ -192,18 +182,18 @@ def _claims(table: Table, complexes: Mapping[str, SimplicialComplex]) -> tuple[N
     return tuple(claims.values())
 
 
-def _claim(table: Table, complexes: Mapping[str, SimplicialComplex]) -> NamedClaim:
+def _claim(table: Table, given: Given) -> NamedClaim:
     name = table.text("id")
-    if not _ID.fullmatch(name):
-        expected = "1 to 100 letters, digits, dots, dashes and underscores, a letter or digit first"
-        raise table.fault("id", expected=expected, found=shown(name))
-    kind = table.text("kind", " or ".join(f'"{known}"' for known in KINDS))
+    if not is_claim_name(name):
+        raise table.fault("id", expected=NAME_RULE, found=shown(name))
+    kind = table.text("kind", "the name of a claim kind")
     if kind not in KINDS:
         raise table.fault("kind", expected=f"one of the claim kinds {', '.join(KINDS)}", found=shown(kind))
     table.only((*_COMMON, *KINDS[kind].keys))
     prose = {key: table.text(key) for key in ("title", "source") if key in table.values}
-    claim = KINDS[kind].read(table, complexes)
-    return NamedClaim.of(name, table.text("complex"), claim, prose)
+    claim = KINDS[kind].read(table, given)
+    complex_ = table.text("complex" if "complex" in table.values else "family")
+    return NamedClaim(name, complex_, claim, about_claim(name, claim.base.labels, prose))
 
 
 # -- lines --------------------------------------------------------------------------------------

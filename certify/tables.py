@@ -120,6 +120,8 @@ def in_words(keys: Keys) -> str:
             head = [f"claim {number + 1}"]
         case ("complexes", str(name), *rest):
             head = [f"complex {_bare(name)}"]
+        case ("pairs", str(name), *rest):
+            head = [f"pair {_bare(name)}"]
         case _:
             head, rest = [], list(keys)
     names = ".".join(_bare(key) for key in rest if isinstance(key, str))

@@ -16,9 +16,10 @@ from types import ModuleType
 from typing import Any
 
 from certify.certificate import Spool
-from certify.claims import Claim, HomologyClaim, TableClaim, prove
+from certify.claims import Claim, GroupsClaim, HomologyClaim, TableClaim, prove
 from certify.claims.base import Key
 from certify.claims.homology import Route
+from certify.claims.workers import processes
 from certify.exact import AbelianGroup
 from certify.products import Pair, PolyhedralProduct, parse_pair, parse_pairs
 from certify.simplicial import SimplicialComplex
@@ -94,11 +95,11 @@ def disc_dimensions(space: PolyhedralProduct) -> list[int]:
     return [int(pair.name.removeprefix("(D").partition(",")[0]) for pair in space.pairs]
 
 
-def certificate_of(claim: Claim[Key], jobs: int = 1) -> bytes:
+def certificate_of(claim: Claim[Any], jobs: int = 1) -> bytes:
     """Return the bytes of the certificate of a claim."""
-    with TemporaryDirectory() as folder, Spool() as spool:
+    with TemporaryDirectory() as folder, Spool() as spool, processes(jobs) as workers:
         path = Path(folder) / "claim.cert.jsonl"
-        prove(claim, spool, jobs=jobs).write(path, {"claim": "claim"})
+        prove(claim, spool, workers=workers).write(path, {"claim": "claim"})
         return path.read_bytes()
 
 
@@ -119,7 +120,7 @@ def accepted_groups(certificate: bytes, expected: Mapping[str, Any]) -> dict[tup
     return {tuple(key): AbelianGroup.of(int(rank), map(int, torsion)) for *key, rank, torsion in groups}
 
 
-def certified_groups(claim: Claim[Key], **fields: Any) -> dict[tuple[int, ...], AbelianGroup]:
+def certified_groups(claim: GroupsClaim[Key], **fields: Any) -> dict[tuple[int, ...], AbelianGroup]:
     """Prove, write, let the verifier check the file, and return the groups that the accepted statement holds.
 
     The statement must be about the complex of the claim and have these fields besides.

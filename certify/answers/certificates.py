@@ -4,7 +4,6 @@ from __future__ import annotations
 
 import json
 import os
-import re
 import subprocess
 import sys
 import tempfile
@@ -14,15 +13,14 @@ from pathlib import Path
 from typing import Any
 
 from certify.certificate import Spool
-from certify.claims import Claim, Proof, prove
-from certify.claims.base import Key
+from certify.certificate.about import about_claim, name_in
+from certify.claims import Proof, prove
+from certify.claims.base import GroupsClaim, Key
+from certify.claims.workers import processes
 from certify.errors import BadInput, InternalError, LimitReached
 from certify.exact import AbelianGroup
-from certify.simplicial import SimplicialComplex
 
 __all__ = ["Certificate", "proved"]
-
-_NAME = re.compile(r"([A-Za-z0-9][A-Za-z0-9._-]{0,99})\.cert\.jsonl(\.gz)?", re.ASCII)
 
 
 class Certificate:
@@ -48,8 +46,8 @@ class Certificate:
         os.close(handle)
         self._file = Path(name)
         weakref.finalize(self, self._file.unlink, missing_ok=True)
-        self._about = _about(proof.claim.base)
-        proof.write(self._file, {"claim": "answer", **self._about})
+        self._labels = proof.claim.base.labels
+        proof.write(self._file, about_claim("answer", self._labels))
 
     def __repr__(self) -> str:
         """Say what is proved, and the fingerprint."""
@@ -69,8 +67,8 @@ class Certificate:
             If the file has another name, or cannot be written.
         """
         target = Path(path)
-        match = _NAME.fullmatch(target.name)
-        if match is None:
+        name = name_in(target)
+        if name is None:
             raise BadInput(where="the path", expected="a file NAME.cert.jsonl or NAME.cert.jsonl.gz", found=str(path))
         with Spool() as spool, self._file.open("rb") as lines:
             header = json.loads(next(lines))
@@ -79,7 +77,7 @@ class Certificate:
             for line in lines:
                 spool.add(waiting)
                 waiting = line
-            spool.write(target, header | {"about": {"claim": match[1], **self._about}})
+            spool.write(target, header | {"about": about_claim(name, self._labels)})
 
     def verify(self) -> str:
         """Let the verifier check the certificate, as a referee would, and return the statement that it proves.
@@ -111,16 +109,8 @@ class Certificate:
         return str(report["statement"])
 
 
-def proved(claim: Claim[Key], title: str, jobs: int) -> tuple[tuple[tuple[Key, AbelianGroup], ...], Certificate]:
+def proved(claim: GroupsClaim[Key], title: str, jobs: int) -> tuple[tuple[tuple[Key, AbelianGroup], ...], Certificate]:
     """Return the groups of a claim that are not zero, keys ascending, and the certificate that proves them."""
-    if jobs < 1:
-        raise BadInput(where="jobs", expected="at least one process", found=f"{jobs}")
-    with Spool() as spool:
-        proof = prove(claim, spool, jobs=jobs)
-        return tuple(proof.groups.items()), Certificate(proof, title)
-
-
-def _about(k: SimplicialComplex) -> dict[str, Any]:
-    """Return the labels of the vertices where they are not 1, 2, …, as certificates hold them."""
-    plain = k.labels == tuple(range(1, k.vertex_count + 1))
-    return {} if plain else {"labels": [str(label) for label in k.labels]}
+    with Spool() as spool, processes(jobs) as workers:
+        proof = prove(claim, spool, workers=workers)
+        return tuple(proof.found.items()), Certificate(proof, title)

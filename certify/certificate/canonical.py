@@ -6,9 +6,11 @@ import hashlib
 import json
 from typing import Any
 
+from flint import fmpz
+
 from certify.exact.groups import decimal
 
-__all__ = ["FORMAT", "LARGEST", "canonical_bytes", "canonical_line", "fingerprint", "integer_value"]
+__all__ = ["FORMAT", "LARGEST", "canonical_bytes", "canonical_line", "fingerprint", "integer_of", "integer_value"]
 
 FORMAT = 1
 """The version of the certificate format that is written."""
@@ -30,6 +32,11 @@ def integer_value(number: int) -> int | str:
     RFC 7493, The I-JSON message format, section 2.2.
     """
     return number if -LARGEST <= number <= LARGEST else decimal(number)
+
+
+def integer_of(value: int | str) -> int:
+    """Return the integer that a JSON value stands for; the inverse of `integer_value`, for any number of digits."""
+    return value if isinstance(value, int) else int(fmpz(value))
 
 
 def canonical_bytes(value: Any) -> bytes:

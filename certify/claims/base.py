@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 from abc import ABC, abstractmethod
-from collections.abc import Iterable, Iterator, Mapping
+from collections.abc import Iterable, Iterator, Mapping, Sequence
 from dataclasses import dataclass
 from typing import Any, ClassVar, Generic, Protocol, TypeVar
 
@@ -14,10 +14,27 @@ from certify.exact import AbelianGroup, BasedComplex, adapted_basis
 from certify.products import Block
 from certify.simplicial.complexes import SimplicialComplex
 
-__all__ = ["Claim", "Contribution", "Key", "Source", "Sum", "Task", "checked_degrees", "solve"]
+__all__ = [
+    "Claim",
+    "Contribution",
+    "Found",
+    "GroupsClaim",
+    "Key",
+    "Solved",
+    "Source",
+    "Sum",
+    "Task",
+    "checked_degrees",
+    "complex_value",
+    "group_value",
+    "solve",
+]
 
 Key = TypeVar("Key", bound=int | tuple[int, int])
 """The degree of a group, or its two degrees."""
+
+Found = TypeVar("Found")
+"""What a claim is about: groups by degree, say."""
 
 
 class Source(Protocol):
@@ -43,6 +60,10 @@ class Task:
     weight: int = 1
 
 
+Solved = tuple[bytes | None, tuple[AbelianGroup, ...]]
+"""The record of a task as a line, with the groups by degree; no record and no groups for a cone."""
+
+
 @dataclass(frozen=True, slots=True)
 class Contribution:
     """What a task has found: the groups by degree from 0 (none for a cone), and where they come from."""
@@ -51,20 +72,17 @@ class Contribution:
     source: Source
 
 
-class Claim(ABC, Generic[Key]):
-    """A claim that groups, each under a degree or several, are those of a space; a kind is a subclass.
+class Claim(ABC, Generic[Found]):
+    """A claim that something found about a space is a certain value; a kind is a subclass.
 
     Attributes
     ----------
     kind, route : str
         As they stand in the certificate.
-    groups : mapping or None
-        The claimed groups; what is missing is claimed to be zero. None asks for the value.
     """
 
     kind: ClassVar[str]
     route: str
-    groups: Mapping[Key, AbelianGroup] | None
 
     @property
     @abstractmethod
@@ -76,16 +94,32 @@ class Claim(ABC, Generic[Key]):
         """Yield the work, in the order of the records."""
 
     @abstractmethod
-    def total(self, contributions: Iterable[Contribution]) -> dict[Key, AbelianGroup]:
-        """Return the groups that these contributions add up to, zero groups left out, keys ascending."""
+    def total(self, contributions: Iterable[Contribution]) -> Found:
+        """Return what these contributions add up to."""
 
     @abstractmethod
-    def name(self, key: Key) -> str:
-        """Write the group with this key as in print."""
+    def check(self, found: Found) -> None:
+        """Raise ClaimIsFalse if what is claimed is not what was found."""
 
     @abstractmethod
-    def fields(self) -> dict[str, Any]:
-        """Return what the statement holds besides complex, groups and kind."""
+    def question(self) -> dict[str, Any]:
+        """Return what the statement holds besides what was found; vertices are numbered from 1, in their order."""
+
+    @abstractmethod
+    def answer(self, found: Found) -> dict[str, Any]:
+        """Return what was found as the statement holds it."""
+
+    @abstractmethod
+    def lines(self, found: Found) -> list[str]:
+        """Write what was found as in print, a line for each part of it."""
+
+    @abstractmethod
+    def value(self, found: Found) -> dict[str, Any]:
+        """Return what was found as JSON, under the keys that sheets have for it."""
+
+    def statement(self, found: Found) -> dict[str, Any]:
+        """Return the statement of the certificate."""
+        return self.question() | self.answer(found)
 
     @property
     def weight(self) -> int:
@@ -96,24 +130,96 @@ class Claim(ABC, Generic[Key]):
         """Yield the records that come before those of the tasks."""
         yield from ()
 
+    def remarks(self) -> list[str]:
+        """Write what else a reader of the lines must know, besides the complex."""
+        return []
+
+
+class GroupsClaim(Claim[Mapping[Key, AbelianGroup]], Generic[Key]):
+    """A claim that groups, each under a degree or several, are those of a space.
+
+    Attributes
+    ----------
+    groups : mapping or None
+        The claimed groups; what is missing is claimed to be zero. None asks for the value.
+    """
+
+    groups: Mapping[Key, AbelianGroup] | None
+
+    @abstractmethod
+    def name(self, key: Key) -> str:
+        """Write the group with this key as in print."""
+
+    @property
+    @abstractmethod
+    def rest(self) -> str:
+        """Say as in print that all other groups are zero."""
+
+    @abstractmethod
+    def fields(self) -> dict[str, Any]:
+        """Return what the statement holds besides complex, groups and kind."""
+
+    def path(self, key: Key) -> tuple[str, ...]:
+        """Return the keys under which a sheet has the group."""
+        return (str(key),)
+
+    def keys(self, found: Mapping[Key, AbelianGroup]) -> Sequence[Key]:
+        """Return the keys of the groups that are worth a line, in order."""
+        return sorted(found, key=_tuple)
+
     def check(self, found: Mapping[Key, AbelianGroup]) -> None:
-        """Raise ClaimIsFalse at the first key under which the claimed group is not the one found."""
+        """Raise ClaimIsFalse with the first key under which the claimed group is not the one found."""
         if self.groups is None:
             return
+        wrong = []
         for key in sorted({*found, *self.groups}, key=_tuple):
             claimed, real = self.groups.get(key, AbelianGroup()), found.get(key, AbelianGroup())
             if claimed != real:
-                raise ClaimIsFalse(what=self.name(key), claimed=str(claimed), found=str(real))
+                wrong.append((self.name(key), str(claimed), str(real)))
+        if wrong:
+            what, first, value = wrong[0]
+            raise ClaimIsFalse(what=what, claimed=first, found=value, more=len(wrong) - 1)
 
-    def statement(self, found: Mapping[Key, AbelianGroup]) -> dict[str, Any]:
-        """Return the statement of the certificate, with vertices numbered from 1 in the order of the labels."""
+    def question(self) -> dict[str, Any]:
+        """Return the complex, the kind, and what the kind adds."""
+        return {"kind": self.kind} | complex_value(self.base) | self.fields()
+
+    def answer(self, found: Mapping[Key, AbelianGroup]) -> dict[str, Any]:
+        """Return the groups that are not zero, keys ascending."""
         groups = [
-            [*_tuple(key), integer_value(group.rank), [integer_value(order) for order in group.torsion]]
+            [*_tuple(key), *group_value(group)]
             for key, group in sorted(found.items(), key=lambda item: _tuple(item[0]))
         ]
-        facets = [[number + 1 for number in facet] for facet in self.base.facets]
-        shared = {"facets": facets, "groups": groups, "kind": self.kind, "vertices": self.base.vertex_count}
-        return shared | self.fields()
+        return {"groups": groups}
+
+    def lines(self, found: Mapping[Key, AbelianGroup]) -> list[str]:
+        """Write the groups, and that all others are zero if the claim speaks of all."""
+        keys = self.keys(found)
+        lines = [f"{self.name(key)} ≅ {found[key]}" if found.get(key) else f"{self.name(key)} = 0" for key in keys]
+        if not self.rest:
+            return lines
+        return [*lines, self.rest] if lines else [self.rest.replace(" all other ", " all ")]
+
+    def value(self, found: Mapping[Key, AbelianGroup]) -> dict[str, Any]:
+        """Return the groups that are not zero as JSON: the rank, and torsion as invariant factors."""
+        value: dict[str, Any] = {}
+        for key, group in sorted(found.items(), key=lambda item: _tuple(item[0])):
+            *outer, last = self.path(key)
+            inner = value
+            for name in outer:
+                inner = inner.setdefault(name, {})
+            inner[last] = {"rank": group.rank, "torsion": list(group.torsion)}
+        return value
+
+
+def group_value(group: AbelianGroup) -> tuple[int | str, list[int | str]]:
+    """Return rank and torsion as certificates have them."""
+    return integer_value(group.rank), [integer_value(order) for order in group.torsion]
+
+
+def complex_value(k: SimplicialComplex) -> dict[str, Any]:
+    """Return the complex as statements have it."""
+    return {"facets": [[number + 1 for number in facet] for facet in k.facets], "vertices": k.vertex_count}
 
 
 _MOST_TORSION = 10**6
@@ -142,8 +248,8 @@ class Sum(Generic[Key]):
         return {key: group for key, group in groups if group}
 
 
-def solve(task: Task) -> tuple[bytes | None, tuple[AbelianGroup, ...]]:
-    """Return the record of a task as a line, with the groups by degree; no record and no groups for a cone."""
+def solve(task: Task) -> Solved:
+    """Solve a task."""
     source = task.source
     if isinstance(source, Block) and source.is_cone:
         return None, ()

@@ -7,14 +7,14 @@ basis (Lemmas A and B of docs/mathematics.md).
 
 from __future__ import annotations
 
-from collections.abc import Iterable, Iterator, Mapping
+from collections.abc import Iterable, Iterator, Mapping, Sequence
 from dataclasses import dataclass, replace
 from math import prod
 from typing import Any, ClassVar, Literal, get_args
 
 from certify.certificate.canonical import integer_value
 from certify.certificate.records import vector_value
-from certify.claims.base import Claim, Contribution, Sum, Task, checked_degrees
+from certify.claims.base import Contribution, GroupsClaim, Sum, Task, checked_degrees
 from certify.errors import BadInput
 from certify.exact import AbelianGroup, BasedComplex
 from certify.products import Block, PolyhedralProduct, block_classes, cell_complex
@@ -39,7 +39,7 @@ class _WholeProduct:
 
 
 @dataclass(frozen=True)
-class HomologyClaim(Claim[int]):
+class HomologyClaim(GroupsClaim[int]):
     """A claim about the integral homology of a polyhedral product.
 
     Parameters
@@ -121,7 +121,28 @@ class HomologyClaim(Claim[int]):
 
     def name(self, key: int) -> str:
         """Write a homology group as in print."""
-        return f"H_{key}({self.product}; ℤ)"
+        return self._name(str(key))
+
+    def _name(self, degree: str) -> str:
+        return f"H_{degree}({self.product}; ℤ)"
+
+    @property
+    def rest(self) -> str:
+        """Say as in print that all other groups are zero, if the claim is about all."""
+        return "" if self.degrees is not None else f"{self._name('k')} = 0 for all other k"
+
+    def keys(self, found: Mapping[int, AbelianGroup]) -> Sequence[int]:
+        """Return the degrees of the claim, or those with homology."""
+        return sorted(found) if self.degrees is None else self.degrees
+
+    def remarks(self) -> list[str]:
+        """Say which vertices have which pair, where not all have the same."""
+        places: dict[str, list[str]] = {}
+        for label, pair in zip(self.base.labels, self.product.pairs, strict=True):
+            places.setdefault(pair.symbol, []).append(str(label))
+        if len(places) < 2:
+            return []
+        return ["(X,A) is " + "; ".join(f"{pair} at {', '.join(labels)}" for pair, labels in places.items())]
 
     def fields(self) -> dict[str, Any]:
         """Return degrees and pairs."""
@@ -153,9 +174,8 @@ class SmashClaim(HomologyClaim):
         if self.route == "cells":
             raise BadInput(where="route", expected="blocks or orbits for a smash product", found="cells")
 
-    def name(self, key: int) -> str:
-        """Write a reduced homology group as in print."""
-        return f"H̃_{key}(polyhedral smash product {self.product}; ℤ)"
+    def _name(self, degree: str) -> str:
+        return f"H̃_{degree}(polyhedral smash product {self.product}; ℤ)"
 
     def _reduced(self) -> PolyhedralProduct:
         """Return the product without the base points, which are the first summands."""

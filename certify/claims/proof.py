@@ -1,21 +1,21 @@
-"""Proving: tasks are solved, in this process or in several, and their records are collected in order."""
+"""Proving: tasks are solved, in this process or by workers, and their records are collected in order."""
 
 from __future__ import annotations
 
-import signal
 from collections import deque
 from collections.abc import Callable, Iterable, Iterator, Mapping
-from concurrent.futures import Future, ProcessPoolExecutor
+from concurrent.futures import Executor, Future
 from dataclasses import dataclass
 from itertools import islice
 from pathlib import Path
 from typing import Any, Generic
 
 from certify.certificate import FORMAT, Spool, canonical_line, fingerprint
-from certify.claims.base import Claim, Contribution, Key, Task, solve
-from certify.exact import AbelianGroup
+from certify.claims.base import Claim, Contribution, Found, Solved, Task, solve
+from certify.claims.journal import Journal
+from certify.errors import LimitReached
 
-__all__ = ["Progress", "Proof", "prove"]
+__all__ = ["Progress", "Proof", "Workers", "prove"]
 
 Progress = Callable[[int, int], None]
 """Called now and then with the work that is done and the whole work, in one unit."""
@@ -23,30 +23,46 @@ Progress = Callable[[int, int], None]
 _CHUNK = 64
 _AHEAD = 4
 
-_Solved = tuple[bytes | None, tuple[AbelianGroup, ...]]
+
+@dataclass(frozen=True, slots=True)
+class Workers:
+    """Processes that solve tasks: on this machine, or on others.
+
+    Parameters
+    ----------
+    executor : Executor
+    number : int
+        How many tasks it solves at the same time.
+    lost : tuple of types of exceptions
+        What is raised when these processes are gone for good.
+    """
+
+    executor: Executor
+    number: int
+    lost: tuple[type[Exception], ...] = ()
 
 
 @dataclass(frozen=True, slots=True)
-class Proof(Generic[Key]):
-    """A claim that was proved: its groups, its statement, and its records, ready to be written.
+class Proof(Generic[Found]):
+    """A claim that was proved: what was found, its statement, and its records, ready to be written.
 
     Parameters
     ----------
     claim : Claim
-    groups : mapping from degree to AbelianGroup
+    found : mapping from degree to AbelianGroup, where the claim is about groups
         The groups that are not zero.
     spool : Spool
         The records; closed by whoever called `prove`.
     """
 
-    claim: Claim[Key]
-    groups: Mapping[Key, AbelianGroup]
+    claim: Claim[Found]
+    found: Found
     spool: Spool
 
     @property
     def statement(self) -> dict[str, Any]:
         """The statement of the certificate."""
-        return self.claim.statement(self.groups)
+        return self.claim.statement(self.found)
 
     @property
     def fingerprint(self) -> str:
@@ -59,7 +75,14 @@ class Proof(Generic[Key]):
         return self.spool.write(path, header)
 
 
-def prove(claim: Claim[Key], spool: Spool, *, jobs: int = 1, progress: Progress | None = None) -> Proof[Key]:
+def prove(
+    claim: Claim[Found],
+    spool: Spool,
+    *,
+    workers: Workers | None = None,
+    journal: Journal | None = None,
+    progress: Progress | None = None,
+) -> Proof[Found]:
     """Compute a claim and collect the records that prove it.
 
     Parameters
@@ -67,21 +90,25 @@ def prove(claim: Claim[Key], spool: Spool, *, jobs: int = 1, progress: Progress 
     claim : Claim
     spool : Spool
         Receives the records.
-    jobs : int
-        The number of processes; the records do not depend on it.
+    workers : Workers, optional
+        Who solves the tasks; by default this process. The records do not depend on it.
+    journal : Journal, optional
+        Knows the solutions of the first tasks from an earlier run, and is told those of the others.
     progress : Progress, optional
 
     Raises
     ------
     ClaimIsFalse
-        If the claim states groups and they are not those found.
+        If the claim states values and they are not those found.
+    LimitReached
+        If the workers are gone before the work is done, or the claim needs more than a stated limit.
     """
 
     def contributions() -> Iterator[Contribution]:
         done = 0
         for value in claim.opening():
             spool.add(canonical_line(value))
-        for task, (line, groups) in _solved(claim.tasks(), jobs):
+        for task, (line, groups) in _solved(claim.tasks(), workers, journal):
             done += task.weight
             if progress is not None:
                 progress(done, claim.weight)
@@ -89,31 +116,43 @@ def prove(claim: Claim[Key], spool: Spool, *, jobs: int = 1, progress: Progress 
                 spool.add(line)
             yield Contribution(groups, task.source)
 
-    groups = claim.total(contributions())
-    claim.check(groups)
-    return Proof(claim, groups, spool)
+    found = claim.total(contributions())
+    claim.check(found)
+    return Proof(claim, found, spool)
 
 
-def _solved(tasks: Iterable[Task], jobs: int) -> Iterator[tuple[Task, _Solved]]:
-    """Yield the tasks with their solutions, in order."""
-    if jobs == 1:
-        yield from ((task, solve(task)) for task in tasks)
-        return
+def _solved(tasks: Iterable[Task], workers: Workers | None, journal: Journal | None) -> Iterator[tuple[Task, Solved]]:
+    """Yield the tasks with their solutions, in order: first those that the journal knows."""
     rest = iter(tasks)
-    waiting: deque[tuple[list[Task], Future[list[_Solved]]]] = deque()
-    # A worker leaves Ctrl-C to the process that started it, and ends without a word.
-    with ProcessPoolExecutor(jobs, initializer=signal.signal, initargs=(signal.SIGINT, signal.SIG_DFL)) as pool:
-        try:
-            while True:
-                while len(waiting) < _AHEAD * jobs and (chunk := list(islice(rest, _CHUNK))):
-                    waiting.append((chunk, pool.submit(_solve_all, chunk)))
-                if not waiting:
-                    return
-                chunk, future = waiting.popleft()
-                yield from zip(chunk, future.result(), strict=True)
-        finally:
-            pool.shutdown(wait=False, cancel_futures=True)
+    if journal is not None:
+        for solution in journal.known():
+            task = next(rest, None)
+            if task is None:
+                return
+            yield task, solution
+    for task, solution in _solved_by(workers, rest) if workers else ((task, solve(task)) for task in rest):
+        if journal is not None:
+            journal.add(solution)
+        yield task, solution
 
 
-def _solve_all(tasks: list[Task]) -> list[_Solved]:
+def _solved_by(workers: Workers, tasks: Iterator[Task]) -> Iterator[tuple[Task, Solved]]:
+    """Yield the tasks with their solutions, in order, while a bounded number of tasks is with the workers."""
+    waiting: deque[tuple[list[Task], Future[list[Solved]]]] = deque()
+    try:
+        while True:
+            while len(waiting) < _AHEAD * workers.number and (chunk := list(islice(tasks, _CHUNK))):
+                waiting.append((chunk, workers.executor.submit(_solve_all, chunk)))
+            if not waiting:
+                return
+            chunk, future = waiting.popleft()
+            yield from zip(chunk, future.result(), strict=True)
+    except workers.lost as error:
+        raise LimitReached("those who computed are gone; with --state, what is finished is kept for later") from error
+    finally:
+        for _, future in waiting:
+            future.cancel()
+
+
+def _solve_all(tasks: list[Task]) -> list[Solved]:
     return [solve(task) for task in tasks]

@@ -2,11 +2,11 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterable, Iterator, Mapping
+from collections.abc import Iterable, Iterator, Mapping, Sequence
 from dataclasses import dataclass
 from typing import Any, ClassVar
 
-from certify.claims.base import Claim, Contribution, Sum, Task, checked_degrees
+from certify.claims.base import Contribution, GroupsClaim, Sum, Task, checked_degrees
 from certify.exact import AbelianGroup
 from certify.products.real_toric import RealToricSpace
 from certify.simplicial.complexes import SimplicialComplex
@@ -15,7 +15,7 @@ __all__ = ["RealToricClaim"]
 
 
 @dataclass(frozen=True)
-class RealToricClaim(Claim[int]):
+class RealToricClaim(GroupsClaim[int]):
     """A claim about the integral homology of (D¹, S⁰)^K / ker λ.
 
     Parameters
@@ -65,6 +65,19 @@ class RealToricClaim(Claim[int]):
     def name(self, key: int) -> str:
         """Write a homology group as in print."""
         return f"H_{key}((D¹,S⁰)^K/ker λ; ℤ)"
+
+    @property
+    def rest(self) -> str:
+        """Say as in print that all other groups are zero, if the claim is about all."""
+        return "" if self.degrees is not None else "H_k((D¹,S⁰)^K/ker λ; ℤ) = 0 for all other k"
+
+    def keys(self, found: Mapping[int, AbelianGroup]) -> Sequence[int]:
+        """Return the degrees of the claim, or those with homology."""
+        return sorted(found) if self.degrees is None else self.degrees
+
+    def remarks(self) -> list[str]:
+        """Show λ."""
+        return [f"λ has the rows {' '.join(self.rows)}"] if self.rows else []
 
     def fields(self) -> dict[str, Any]:
         """Return degrees and rows."""

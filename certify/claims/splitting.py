@@ -6,12 +6,14 @@ from collections.abc import Hashable, Iterable, Iterator, Mapping
 from dataclasses import dataclass
 from typing import Any, ClassVar
 
-from certify.claims.base import Claim, Contribution, Sum, Task
+from certify.claims.base import Contribution, GroupsClaim, Sum, Task
 from certify.exact import AbelianGroup, BasedComplex
 from certify.products import Block, PolyhedralProduct, block_classes, parse_pairs
 from certify.products.blocks import Choices
 from certify.simplicial.complexes import SimplicialComplex
 from certify.simplicial.operations import full_subcomplex, link
+from certify.simplicial.spelling import spell_labels
+from certify.simplicial.writing import plain_set
 
 __all__ = ["SummandClaim", "TableClaim", "TorClaim"]
 
@@ -22,7 +24,7 @@ def _subcomplexes(complex_: SimplicialComplex) -> PolyhedralProduct:
 
 
 @dataclass(frozen=True)
-class TorClaim(Claim[tuple[int, int]]):
+class TorClaim(GroupsClaim[tuple[int, int]]):
     """A claim about the bigraded groups Tor_{i,2j}(ℤ[K], ℤ) of the face ring, which are H^{-i,2j} of (D², S¹)^K.
 
     Parameters
@@ -77,6 +79,15 @@ class TorClaim(Claim[tuple[int, int]]):
         i, j = key
         return f"Tor_{i},{2 * j}(ℤ[K], ℤ)"
 
+    @property
+    def rest(self) -> str:
+        """Say as in print that all other groups are zero."""
+        return "Tor_i,2j(ℤ[K], ℤ) = 0 for all other i, j"
+
+    def path(self, key: tuple[int, int]) -> tuple[str, ...]:
+        """Return i and 2j, as in print."""
+        return (f"{key[0]},{2 * key[1]}",)
+
     def fields(self) -> dict[str, Any]:
         """Return nothing more."""
         return {}
@@ -111,12 +122,23 @@ class TableClaim(TorClaim):
     def name(self, key: tuple[int, int]) -> str:
         """Write a reduced homology group as in print."""
         mask, q = key
-        labels = ",".join(str(label) for place, label in enumerate(self.complex.labels) if mask >> place & 1)
-        return f"H̃_{q}(K_{{{labels}}}; ℤ)"
+        return f"H̃_{q}(K_{plain_set(self._labels(mask))}; ℤ)"
+
+    @property
+    def rest(self) -> str:
+        """Say as in print that all other groups are zero."""
+        return "H̃_q(K_I; ℤ) = 0 for all other q and I"
+
+    def path(self, key: tuple[int, int]) -> tuple[str, ...]:
+        """Return the vertices, and the degree."""
+        return (spell_labels(self._labels(key[0])), str(key[1]))
+
+    def _labels(self, mask: int) -> list[Hashable]:
+        return [label for place, label in enumerate(self.complex.labels) if mask >> place & 1]
 
 
 @dataclass(frozen=True)
-class SummandClaim(Claim[int]):
+class SummandClaim(GroupsClaim[int]):
     """A claim about one summand of the stable splitting: the reduced homology of a link, restricted to some vertices.
 
     Parameters
@@ -162,8 +184,16 @@ class SummandClaim(Claim[int]):
 
     def name(self, key: int) -> str:
         """Write a reduced homology group as in print."""
-        kept, out = (",".join(map(str, labels)) for labels in (self.kept, self.out))
-        return f"H̃_{key}((link of {{{out}}})_{{{kept}}}; ℤ)"
+        return self._name(str(key))
+
+    @property
+    def rest(self) -> str:
+        """Say as in print that all other groups are zero."""
+        return f"{self._name('q')} = 0 for all other q"
+
+    def _name(self, degree: str) -> str:
+        space = f"(link of {plain_set(self.out)})" if self.out else "K"
+        return f"H̃_{degree}({space}_{plain_set(self.kept)}; ℤ)"
 
     def fields(self) -> dict[str, Any]:
         """Return the numbers of the vertices that are kept, and out."""

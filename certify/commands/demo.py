@@ -9,7 +9,7 @@ from pathlib import Path
 import click
 
 from certify.commands import codes
-from certify.commands.options import JOBS, PATH
+from certify.commands.options import JOBS, PATH, workers
 from certify.commands.prove import outcomes, say_outcomes
 from certify.commands.terminal import printable, say_row
 from certify.commands.verify import run_verifier
@@ -41,7 +41,9 @@ def demo(out: Path, jobs: int) -> int:
     sheet, certificates = out / "lighting-rig.toml", out / "certificates"
     _lay_out(sheet)
     _head(f"The claims stand in {sheet}. They are computed and proved now.")
-    proving = say_outcomes(claims := read_sheet(sheet), outcomes(claims, certificates, jobs=jobs))
+    claims = read_sheet(sheet)
+    with workers(jobs, None) as helpers:
+        proving = say_outcomes(claims, outcomes(claims, certificates, workers=helpers))
     _head("A second program, which shares no code with the first, checks the certificates.")
     checking = run_verifier(["--", str(certificates)])
     _explain(sheet, certificates)

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import os
 from collections.abc import Iterator, Mapping
+from contextlib import nullcontext, suppress
 from dataclasses import dataclass
 from pathlib import Path
 from typing import TYPE_CHECKING, Any, Literal
@@ -12,12 +13,12 @@ import click
 
 from certify.commands import codes
 from certify.commands.faults import OUTSIDE, sentence_of
-from certify.commands.options import JOBS, JSON, PATH
+from certify.commands.options import CLUSTER, JOBS, JSON, PATH, workers
 from certify.commands.terminal import counted, printable, progress, say_row, tell_fault
 from certify.errors import BadInput, ClaimIsFalse
 
 if TYPE_CHECKING:
-    from certify.exact import AbelianGroup
+    from certify.claims import Workers
     from certify.sheet import NamedClaim, Sheet
 
 __all__ = ["Outcome", "outcomes", "prove", "say_outcomes"]
@@ -47,6 +48,8 @@ _EPILOG = """A sheet is a TOML file. The smallest one:
 `certify demo` writes a longer one, with comments.
 """
 
+_JOURNAL = ".state.jsonl"
+
 _CODE = {"proved": codes.DONE, "false": codes.REFUSED, "undecided": codes.UNDECIDED}
 
 
@@ -62,7 +65,10 @@ class Outcome:
     verdict : {"proved", "false", "undecided"}
     sentence : str
         Why there is no certificate; empty if there is one.
-    groups : mapping from degree to AbelianGroup, or None
+    lines : tuple of str
+        What was found, as in print.
+    value : mapping or None
+        What was found, as JSON.
     size : int or None
         The bytes of the certificate.
     fingerprint : str or None
@@ -72,7 +78,8 @@ class Outcome:
     path: Path
     verdict: Literal["proved", "false", "undecided"]
     sentence: str = ""
-    groups: Mapping[int, AbelianGroup] | None = None
+    lines: tuple[str, ...] = ()
+    value: Mapping[str, Any] | None = None
     size: int | None = None
     fingerprint: str | None = None
 
@@ -92,59 +99,113 @@ class Outcome:
     help="The folder for the certificates.",
 )
 @JOBS
+@CLUSTER
+@click.option(
+    "--state",
+    metavar="DIR",
+    type=PATH,
+    help="Keep what is computed in DIR; if the run is killed, the same command goes on where it stopped.",
+)
 @click.option("--gzip", "packed", is_flag=True, help="Write compressed certificates (*.cert.jsonl.gz).")
 @JSON
-def prove(sheet: Path, out: Path | None, jobs: int, packed: bool, as_json: bool) -> int:
+def prove(
+    sheet: Path, out: Path | None, jobs: int, cluster: str | None, state: Path | None, packed: bool, as_json: bool
+) -> int:
     """Read the sheet, prove its claims, and say what came of them."""
     from certify.commands.results import say_json
     from certify.sheet import read_sheet
 
     claims = read_sheet(sheet)
     folder = sheet.parent / "certificates" if out is None else out
-    results = outcomes(claims, folder, jobs=jobs, packed=packed)
-    if not as_json:
-        return say_outcomes(claims, results)
-    done = list(results)
+    with workers(jobs, cluster) as helpers:
+        results = outcomes(claims, folder, workers=helpers, packed=packed, state=state)
+        if not as_json:
+            return say_outcomes(claims, results)
+        done = list(results)
     code = codes.worst(outcome.code for outcome in done)
     verdict = next(verdict for verdict, its_code in _CODE.items() if its_code == code)
     say_json({"verdict": verdict, "claims": [_value(outcome) for outcome in done]})
     return code
 
 
-def outcomes(sheet: Sheet, folder: Path, *, jobs: int, packed: bool = False) -> Iterator[Outcome]:
+def outcomes(
+    sheet: Sheet, folder: Path, *, workers: Workers | None = None, packed: bool = False, state: Path | None = None
+) -> Iterator[Outcome]:
     """Return what becomes of each claim of a sheet, one after the other as they are proved; faults are told at once.
+
+    Parameters
+    ----------
+    sheet : Sheet
+    folder : Path
+        Where certificates go.
+    workers : Workers, optional
+        Who computes; by default this process.
+    packed : bool
+        Whether certificates are compressed.
+    state : Path, optional
+        A folder for journals. They are removed once every claim has been decided.
 
     Raises
     ------
     BadInput
-        If the folder cannot hold files; this is looked at before the work starts.
+        If the folder cannot hold files, or the state is of another sheet; this is looked at before the work starts.
     """
     _require_folder(folder)
-    return (_outcome(item, folder, jobs, packed) for item in sheet.claims)
+    if state is not None:
+        _require_folder(state)
+        _require_own_state(state, sheet)
+    return _outcomes(sheet, folder, workers, packed, state)
 
 
-def _outcome(item: NamedClaim, folder: Path, jobs: int, packed: bool) -> Outcome:
+def _outcomes(
+    sheet: Sheet, folder: Path, workers: Workers | None, packed: bool, state: Path | None
+) -> Iterator[Outcome]:
     from certify.certificate import certificate_name
 
-    outcome = _attempt(item, folder / certificate_name(item.id, packed=packed), jobs)
-    if outcome.verdict == "undecided":
-        tell_fault(f"claim {item.id}: {outcome.sentence}")
-    return outcome
+    decided = True
+    for item in sheet.claims:
+        journal = None if state is None else state / f"{item.id}{_JOURNAL}"
+        outcome = _attempt(item, folder / certificate_name(item.id, packed=packed), workers, journal)
+        if outcome.verdict == "undecided":
+            decided = False
+            tell_fault(f"claim {item.id}: {outcome.sentence}")
+        yield outcome
+    if state is not None and decided:
+        for item in sheet.claims:
+            (state / f"{item.id}{_JOURNAL}").unlink(missing_ok=True)
+        with suppress(OSError):
+            state.rmdir()
 
 
-def _attempt(item: NamedClaim, path: Path, jobs: int) -> Outcome:
+def _attempt(item: NamedClaim, path: Path, workers: Workers | None, journal_path: Path | None) -> Outcome:
     from certify.certificate import Spool
     from certify.claims import prove as prove_claim
+    from certify.claims.journal import Journal
 
+    claim = item.claim
     try:
-        with progress(item.id) as report, Spool() as spool:
-            proof = prove_claim(item.claim, spool, jobs=jobs, progress=report)
+        with (
+            progress(item.id) as report,
+            Spool() as spool,
+            Journal(journal_path, claim) if journal_path else nullcontext() as journal,
+        ):
+            proof = prove_claim(claim, spool, workers=workers, journal=journal, progress=report)
             size = proof.write(path, item.about)
-        return Outcome(item, path, "proved", "", proof.groups, size, proof.fingerprint)
+        lines = tuple(claim.lines(proof.found))
+        return Outcome(item, path, "proved", "", lines, claim.value(proof.found), size, proof.fingerprint)
     except ClaimIsFalse as fault:
         return Outcome(item, path, "false", str(fault))
     except OUTSIDE as error:
         return Outcome(item, path, "undecided", sentence_of(error))
+
+
+def _require_own_state(state: Path, sheet: Sheet) -> None:
+    """Refuse a folder with journals of claims that the sheet does not have."""
+    own = {f"{item.id}{_JOURNAL}" for item in sheet.claims}
+    for path in sorted(state.glob(f"*{_JOURNAL}")):
+        if path.name not in own:
+            expected = "an empty folder, or the state of an earlier run with this sheet"
+            raise BadInput(where=f"the folder {state}", expected=expected, found=f"{path.name}, of another sheet")
 
 
 def _require_folder(folder: Path) -> None:
@@ -173,30 +234,29 @@ def say_outcomes(sheet: Sheet, results: Iterator[Outcome]) -> int:
 
 
 def _lines(outcome: Outcome) -> Iterator[str]:
-    from certify.commands.results import homology_lines, pair_lines
+    from certify.commands.results import shortened
 
-    claim = outcome.item.claim
-    if outcome.groups is None:
+    if outcome.verdict != "proved":
         yield f"false: {outcome.sentence}"
         if outcome.path.exists():
             yield f"no certificate was written; {outcome.path} is of an earlier run"
         return
-    yield from homology_lines(claim, outcome.groups)
-    yield f"where K is {outcome.item.complex}, on {counted(claim.product.complex.vertex_count, 'vertex', 'vertices')}"
-    yield from pair_lines(claim)
+    base = outcome.item.claim.base
+    yield from shortened(outcome.lines)
+    yield f"where K is {outcome.item.complex}, on {counted(base.vertex_count, 'vertex', 'vertices')}"
+    yield from outcome.item.claim.remarks()
     yield f"certificate {outcome.path}, {counted(outcome.size or 0, 'byte')}"
     yield f"fingerprint {outcome.fingerprint}"
 
 
 def _value(outcome: Outcome) -> dict[str, Any]:
-    from certify.commands.results import homology_value
-
     proved = outcome.verdict == "proved"
     return {
         "claim": outcome.item.id,
         "verdict": outcome.verdict,
         "sentence": outcome.sentence,
-        "homology": homology_value(outcome.groups or {}) if proved else None,
+        "kind": outcome.item.claim.kind,
+        "found": outcome.value,
         "path": str(outcome.path) if proved else None,
         "bytes": outcome.size,
         "fingerprint": outcome.fingerprint,

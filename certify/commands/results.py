@@ -3,65 +3,28 @@
 from __future__ import annotations
 
 import json
-from collections.abc import Mapping, Sequence
+from collections.abc import Sequence
 from typing import Any
 
 import click
 
-from certify.claims import HomologyClaim
-from certify.exact import AbelianGroup
+__all__ = ["say_json", "shortened"]
 
-__all__ = ["homology_lines", "homology_value", "pair_lines", "say_json"]
-
-Groups = Mapping[int, AbelianGroup]
+_MOST_LINES = 60
 
 
-def homology_lines(claim: HomologyClaim, groups: Groups) -> list[str]:
-    """Return one line a degree, in the degrees that the claim speaks of, and one for all others where it is about all.
-
-    Parameters
-    ----------
-    claim : HomologyClaim
-    groups : mapping from degree to AbelianGroup
-        The groups that are not zero.
+def shortened(lines: Sequence[str]) -> list[str]:
+    """Return lines for a person, who does not want to read thousands of them; the last one always stays.
 
     Examples
     --------
-    >>> from certify import PolyhedralProduct, SimplicialComplex, parse_pairs
-    >>> two_points = SimplicialComplex.from_facets([[1], [2]])
-    >>> claim = HomologyClaim(PolyhedralProduct(two_points, parse_pairs("(D2, S1)", 2)), degrees=(2, 3))
-    >>> for line in homology_lines(claim, {3: AbelianGroup(1)}):
-    ...     print(line)
-    H_2((D²,S¹)^K; ℤ) = 0
-    H_3((D²,S¹)^K; ℤ) ≅ ℤ
+    >>> shortened([f"H_{k} = 0" for k in range(1000)])[59:]
+    ['H_59 = 0', '… 939 more, in the certificate and with --json …', 'H_999 = 0']
     """
-    space = str(claim.product)
-    degrees: Sequence[int] = sorted(groups) if claim.degrees is None else claim.degrees
-    lines = [f"H_{k}({space}; ℤ) ≅ {groups[k]}" if groups.get(k) else f"H_{k}({space}; ℤ) = 0" for k in degrees]
-    return lines if claim.degrees is not None else [*lines, f"H_k({space}; ℤ) = 0 for all other k"]
-
-
-def pair_lines(claim: HomologyClaim) -> list[str]:
-    """Return a line that says which vertices have which pair, or none where all have the same."""
-    places: dict[str, list[str]] = {}
-    for label, pair in zip(claim.product.complex.labels, claim.product.pairs, strict=True):
-        places.setdefault(pair.symbol, []).append(str(label))
-    if len(places) < 2:
-        return []
-    return ["(X,A) is " + "; ".join(f"{pair} at {', '.join(labels)}" for pair, labels in places.items())]
-
-
-def homology_value(groups: Groups) -> dict[str, dict[str, Any]]:
-    """Return the groups that are not zero as JSON has them: the rank, and torsion as invariant factors.
-
-    Examples
-    --------
-    >>> homology_value({2: AbelianGroup.of(31, [2])})
-    {'2': {'rank': 31, 'torsion': [2]}}
-    """
-    return {
-        str(degree): {"rank": group.rank, "torsion": list(group.torsion)} for degree, group in sorted(groups.items())
-    }
+    if len(lines) <= _MOST_LINES + 1:
+        return list(lines)
+    rest = len(lines) - _MOST_LINES - 1
+    return [*lines[:_MOST_LINES], f"… {rest:,} more, in the certificate and with --json …", lines[-1]]
 
 
 def say_json(value: Any) -> None:

@@ -115,13 +115,22 @@ class _Bar:
     def show(self) -> None:
         """Start to draw, from a thread of its own, since the work may be one long step."""
         from rich.console import Console
-        from rich.progress import BarColumn, Progress, TaskProgressColumn, TextColumn, TimeElapsedColumn
+        from rich.progress import (
+            BarColumn,
+            Progress,
+            TaskProgressColumn,
+            TextColumn,
+            TimeElapsedColumn,
+            TimeRemainingColumn,
+        )
 
         bar = Progress(
             TextColumn("{task.description}", markup=False),
             BarColumn(30, style="dim", complete_style="default", finished_style="default", pulse_style="default"),
             TaskProgressColumn("{task.percentage:>3.0f} %", style="default"),
             TimeElapsedColumn(),
+            TextColumn("left:"),
+            TimeRemainingColumn(),
             console=Console(stderr=True),
             transient=True,
             redirect_stdout=False,

@@ -38,7 +38,7 @@ class Pair:
     """
 
     name: str
-    symbol: str
+    symbol: str = field(compare=False)
     cells: tuple[Letter, ...] = field(compare=False)
     shapes: tuple[Shape, ...] = field(compare=False)
     splitting: Splitting | None = field(default=None, compare=False)

@@ -51,7 +51,7 @@ from certify.simplicial.operation_tables import Known, read_operation
 from certify.simplicial.registry import FAMILIES, build
 from certify.tables import KeyFault, Table, shown
 
-__all__ = ["complex_from_definition"]
+__all__ = ["complex_from_definition", "complex_of_graph"]
 
 
 def complex_from_definition(table: Table, known: Known, folder: Path) -> SimplicialComplex:
@@ -164,13 +164,26 @@ def _from_edges(table: Table, _: Known, __: Path) -> SimplicialComplex:
         return make(graph_from_edges(_label_lists(table, "edges", "edge"), _vertices(table)))
 
 
-def _of_graph(table: Table) -> Callable[[nx.Graph[Any]], SimplicialComplex]:
-    """Return what makes a complex of a graph."""
-    expected = " or ".join(f'"{name}"' for name in _OF_GRAPHS)
-    name = table.text("as", expected)
+_OF_GRAPH_NAMES = " or ".join(f'"{name}"' for name in _OF_GRAPHS)
+
+
+def complex_of_graph(name: str) -> Callable[[nx.Graph[Any]], SimplicialComplex]:
+    """Return what makes a complex of a graph: ``clique``, ``independence`` or ``nested-sets``.
+
+    Raises
+    ------
+    BadInput
+        If it is called otherwise.
+    """
     if name not in _OF_GRAPHS:
-        raise table.fault("as", expected=expected, found=shown(name))
+        raise BadInput(where="as", expected=_OF_GRAPH_NAMES, found=shown(name))
     return _OF_GRAPHS[name]
+
+
+def _of_graph(table: Table) -> Callable[[nx.Graph[Any]], SimplicialComplex]:
+    name = table.text("as", _OF_GRAPH_NAMES)
+    with table.at("as"):
+        return complex_of_graph(name)
 
 
 # -- files --------------------------------------------------------------------------------------

@@ -15,6 +15,7 @@ from certify.certificate import Spool
 from certify.claims import HomologyClaim, prove
 from certify.claims.base import Claim
 from certify.claims.homology import Route
+from certify.claims.workers import processes
 from certify.products import PolyhedralProduct, parse_pairs
 from certify.simplicial import SimplicialComplex
 
@@ -52,8 +53,8 @@ def claim_about(
 
 def prove_to_file(claim: Claim[Any], path: Path, jobs: int = 1) -> int:
     """Prove a claim, write its certificate, and return the number of its records."""
-    with Spool() as spool:
-        prove(claim, spool, jobs=jobs).write(path, {"claim": "benchmark"})
+    with Spool() as spool, processes(jobs) as workers:
+        prove(claim, spool, workers=workers).write(path, {"claim": "benchmark"})
         return spool.records
 
 

@@ -133,8 +133,8 @@ HELP = "(certify compute --help says more.)"
             "Invalid value for '--certificate': "
             "expected a file NAME.cert.jsonl or NAME.cert.jsonl.gz, found square.json",
         ),
-        (["--pair", "(D1, S0)"], "Give either --facets or FILE."),
-        (["k.txt", "--facets", SQUARE, "--pair", "(D1, S0)"], "Give either --facets or FILE."),
+        (["--pair", "(D1, S0)"], "Give one of --facets, --complex and FILE."),
+        (["k.txt", "--facets", SQUARE, "--pair", "(D1, S0)"], "Give one of --facets, --complex and FILE."),
         (["--facets", SQUARE], "Missing option '--pair'."),
         (
             ["--facets", SQUARE, "--pair", "(D1, S0)", "--jobs", "0"],

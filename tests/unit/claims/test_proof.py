@@ -7,8 +7,9 @@ from pathlib import Path
 import pytest
 
 from certify.certificate import Spool
-from certify.claims import HomologyClaim, Proof, prove
+from certify.claims import HomologyClaim, prove
 from certify.claims.homology import Route
+from certify.claims.workers import processes
 from certify.errors import ClaimIsFalse
 from certify.exact import AbelianGroup
 from certify.simplicial import SimplicialComplex, build
@@ -26,7 +27,7 @@ STATEMENT = (
 def test_a_proof_holds_the_groups_and_the_statement(route: Route) -> None:
     with Spool() as spool:
         proof = prove(HomologyClaim(CIRCLE, route=route), spool)
-        assert proof.groups == graded({0: "Z", 1: "Z"})
+        assert proof.found == graded({0: "Z", 1: "Z"})
         assert proof.statement == json.loads(STATEMENT)
         assert proof.fingerprint == hashlib.sha256(STATEMENT).hexdigest()
 
@@ -71,8 +72,8 @@ def test_the_fingerprint_is_that_of_the_statement_and_not_of_the_route() -> None
 @pytest.mark.parametrize("jobs", [1, 2])
 def test_a_false_claim_is_not_proved(route: Route, jobs: int) -> None:
     claim = HomologyClaim(CIRCLE, groups={0: AbelianGroup(1), 1: AbelianGroup(2)}, route=route)
-    with Spool() as spool, pytest.raises(ClaimIsFalse, match="is claimed to be ℤ², but is ℤ"):
-        prove(claim, spool, jobs=jobs)
+    with Spool() as spool, processes(jobs) as workers, pytest.raises(ClaimIsFalse, match="claimed to be ℤ², but is ℤ"):
+        prove(claim, spool, workers=workers)
 
 
 @pytest.mark.parametrize("jobs", [1, 2, 3])
@@ -82,8 +83,8 @@ def test_a_false_claim_is_not_proved(route: Route, jobs: int) -> None:
 def test_progress_counts_the_sets_of_vertices(k: SimplicialComplex, jobs: int) -> None:
     calls: list[tuple[int, int]] = []
     claim = HomologyClaim(disc_product(k, 1))
-    with Spool() as spool:
-        prove(claim, spool, jobs=jobs, progress=lambda done, whole: calls.append((done, whole)))
+    with Spool() as spool, processes(jobs) as workers:
+        prove(claim, spool, workers=workers, progress=lambda done, whole: calls.append((done, whole)))
     whole = 2**k.vertex_count
     assert calls[-1] == (whole, whole)
     done = [done for done, _ in calls]
@@ -94,7 +95,7 @@ def test_progress_counts_the_sets_of_vertices(k: SimplicialComplex, jobs: int) -
 def test_a_restricted_claim_states_its_degrees_and_no_zero_group(tmp_path: Path) -> None:
     path = tmp_path / "circle.cert.jsonl"
     with Spool() as spool:
-        proof: Proof[int] = prove(HomologyClaim(CIRCLE, degrees=(1, 7)), spool)
+        proof = prove(HomologyClaim(CIRCLE, degrees=(1, 7)), spool)
         proof.write(path, {"claim": "circle"})
     assert proof.statement["degrees"] == [1, 7]
     assert proof.statement["groups"] == [[1, 1, []]]

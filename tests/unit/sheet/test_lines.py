@@ -6,8 +6,8 @@ import tomllib
 
 import pytest
 
-from certify.claims.reading import Keys, in_words, shown
 from certify.sheet import line_of
+from certify.tables import Keys, in_words, shown
 
 SHEET = '''\
 title = "Rig"
