@@ -14,7 +14,8 @@ from typing import Any
 
 from certify.certificate.about import NAME_RULE, about_claim, is_claim_name
 from certify.claims import Claim
-from certify.claims.reading import KINDS, Given
+from certify.claims.kinds import KINDS
+from certify.claims.reading import Given
 from certify.errors import BadInput
 from certify.products import Pair
 from certify.products.reading import pair_from_table
@@ -47,7 +48,8 @@ class NamedClaim:
     id : str
         The claim's name, which is also the name of its certificate.
     complex : str
-        The name that the sheet gives to K; for a space of a family, that of the family.
+        The name that the sheet gives to K; for a space of a family, that of the family; empty
+        where there is none.
     claim : Claim
     about : mapping
         What the certificate says besides the statement: the claim's name under ``claim``, ``title`` and ``source`` if
@@ -192,7 +194,7 @@ def _claim(table: Table, given: Given) -> NamedClaim:
     table.only((*_COMMON, *KINDS[kind].keys))
     prose = {key: table.text(key) for key in ("title", "source") if key in table.values}
     claim = KINDS[kind].read(table, given)
-    complex_ = table.text("complex" if "complex" in table.values else "family")
+    complex_ = next((table.text(key) for key in ("complex", "family") if key in table.values), "")
     return NamedClaim(name, complex_, claim, about_claim(name, claim.base.labels, prose))
 
 

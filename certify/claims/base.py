@@ -13,6 +13,7 @@ from certify.errors import BadInput, ClaimIsFalse, LimitReached
 from certify.exact import AbelianGroup, BasedComplex, adapted_basis
 from certify.products import Block
 from certify.simplicial.complexes import SimplicialComplex
+from certify.symmetry.actions import ActedCells
 
 __all__ = [
     "Claim",
@@ -60,16 +61,17 @@ class Task:
     weight: int = 1
 
 
-Solved = tuple[bytes | None, tuple[AbelianGroup, ...]]
-"""The record of a task as a line, with the groups by degree; no record and no groups for a cone."""
+Solved = tuple[bytes | None, tuple[AbelianGroup, ...], tuple[int, ...]]
+"""The record of a task as a line, the groups by degree, and traces; no record and no groups for a cone."""
 
 
 @dataclass(frozen=True, slots=True)
 class Contribution:
-    """What a task has found: the groups by degree from 0 (none for a cone), and where they come from."""
+    """What a task has found: the groups by degree from 0 (none for a cone), where they come from, and traces."""
 
     groups: tuple[AbelianGroup, ...]
     source: Source
+    traces: tuple[int, ...] = ()
 
 
 class Claim(ABC, Generic[Found]):
@@ -252,12 +254,14 @@ def solve(task: Task) -> Solved:
     """Solve a task."""
     source = task.source
     if isinstance(source, Block) and source.is_cone:
-        return None, ()
-    basis = adapted_basis(source.chains())
+        return None, (), ()
+    complex_ = source.chains()
+    basis = adapted_basis(complex_)
     value: dict[str, Any] = {"basis": basis_value(basis)}
-    if isinstance(source, Block):
+    if isinstance(source, Block | ActedCells) and source.name is not None:
         value["block"] = source.name
-    return canonical_line(value), basis.homology()
+    traces = source.traces(complex_, basis) if isinstance(source, ActedCells) else ()
+    return canonical_line(value), basis.homology(), traces
 
 
 def checked_degrees(degrees: Iterable[int] | None, groups: Iterable[int] | None) -> tuple[int, ...] | None:

@@ -14,7 +14,7 @@ from typing import IO, Any
 
 from certify import __version__
 from certify.certificate import canonical_line
-from certify.certificate.canonical import canonical_bytes, integer_of
+from certify.certificate.canonical import canonical_bytes, integer_of, integer_value
 from certify.claims.base import Claim, Solved, group_value
 from certify.errors import BadInput
 from certify.exact import AbelianGroup
@@ -75,19 +75,20 @@ class Journal:
                 if value is None:
                     break
                 good += len(line)
-                text, groups = value
+                text, groups, traces = value
                 found = tuple(
                     AbelianGroup(integer_of(rank), tuple(map(integer_of, torsion))) for rank, torsion in groups
                 )
-                yield None if text is None else (text + "\n").encode(), found
+                yield None if text is None else (text + "\n").encode(), found, tuple(map(integer_of, traces))
         self._file.truncate(good)
 
     def add(self, solution: Solved) -> None:
         """Append the solution of the next task."""
-        line, groups = solution
+        line, groups, traces = solution
         value = [
             None if line is None else line.decode().removesuffix("\n"),
             [group_value(group) for group in groups],
+            [integer_value(trace) for trace in traces],
         ]
         self._write(_with_checksum(value))
         if time.monotonic() > self._synced + _PATIENCE:

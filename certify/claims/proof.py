@@ -108,13 +108,13 @@ def prove(
         done = 0
         for value in claim.opening():
             spool.add(canonical_line(value))
-        for task, (line, groups) in _solved(claim.tasks(), workers, journal):
+        for task, (line, groups, traces) in _solved(claim.tasks(), workers, journal):
             done += task.weight
             if progress is not None:
                 progress(done, claim.weight)
             if line is not None:
                 spool.add(line)
-            yield Contribution(groups, task.source)
+            yield Contribution(groups, task.source, traces)
 
     found = claim.total(contributions())
     claim.check(found)

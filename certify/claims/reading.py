@@ -1,7 +1,4 @@
-"""Claims as tables of a sheet: one reader a claim kind.
-
-A new claim kind is one more reader and one more entry of `KINDS`.
-"""
+"""Claims about spaces as tables of a sheet: one reader a claim kind, and readers of values that many kinds have."""
 
 from __future__ import annotations
 
@@ -24,7 +21,17 @@ from certify.simplicial.inputs import placed, plain_labels
 from certify.simplicial.spelling import read_labels
 from certify.tables import Table, shown
 
-__all__ = ["KINDS", "Given", "Kind"]
+__all__ = [
+    "SPACE_KINDS",
+    "Given",
+    "Kind",
+    "complex_of",
+    "degrees_of",
+    "groups_by_degree",
+    "labels_of",
+    "pairs_of",
+    "product_of",
+]
 
 _DEGREE = ("0|[1-9][0-9]*", "a degree from 0 on, in plain digits")
 _REDUCED_DEGREE = ("-1|0|[1-9][0-9]*", "a degree from -1 on, in plain digits")
@@ -74,18 +81,15 @@ def _smash(table: Table, given: Given) -> HomologyClaim:
 
 
 def _about_product(kind: type[HomologyClaim], table: Table, given: Given) -> HomologyClaim:
-    complex_ = _complex(table, given)
-    pairs = _pairs(table, complex_.vertex_count, given.pairs)
-    with table.at("pair"):
-        product = PolyhedralProduct(complex_, pairs)
-    degrees, groups, route = _degrees(table), _groups_by_degree(table), _route(table)
+    product = product_of(table, given)
+    degrees, groups, route = degrees_of(table), groups_by_degree(table), _route(table)
     with placed(table, "groups"):
         return kind(product, degrees, groups, route)
 
 
 def _real_toric(table: Table, given: Given) -> RealToricClaim:
     space = _real_toric_space(table, given)
-    degrees, groups = _degrees(table), _groups_by_degree(table)
+    degrees, groups = degrees_of(table), groups_by_degree(table)
     with placed(table, "groups"):
         return RealToricClaim(space.complex, space.rows, degrees, groups)
 
@@ -99,7 +103,7 @@ def _real_toric_space(table: Table, given: Given) -> RealToricSpace:
     """Return the space of a family, or of a complex with λ by rows or by name."""
     if "family" in table.values:
         return _real_toric_family(table)
-    complex_ = _complex(table, given)
+    complex_ = complex_of(table, given)
     names = " or ".join(f'"{name}"' for name in _SPACES_OVER)
     expected = f'the rows of λ as a list of texts like "110", or {names}'
     rows = table.value("rows", expected)
@@ -133,7 +137,7 @@ def _real_toric_family(table: Table) -> RealToricSpace:
 
 
 def _tor(table: Table, given: Given) -> TorClaim:
-    complex_ = _complex(table, given)
+    complex_ = complex_of(table, given)
     groups: dict[tuple[int, int], AbelianGroup] | None = None
     if "groups" in table.values:
         groups = {}
@@ -144,7 +148,7 @@ def _tor(table: Table, given: Given) -> TorClaim:
 
 
 def _table(table: Table, given: Given) -> TableClaim:
-    complex_ = _complex(table, given)
+    complex_ = complex_of(table, given)
     groups: dict[tuple[int, int], AbelianGroup] | None = None
     if "groups" in table.values:
         groups = {}
@@ -159,14 +163,14 @@ def _table(table: Table, given: Given) -> TableClaim:
 
 
 def _summand(table: Table, given: Given) -> SummandClaim:
-    complex_ = _complex(table, given)
-    kept, out = (_labels(table, key, complex_) for key in ("kept", "out"))
+    complex_ = complex_of(table, given)
+    kept, out = (labels_of(table, key, complex_) for key in ("kept", "out"))
     groups = _reduced_groups(table, ("groups",)) if "groups" in table.values else None
     with table.at("out"):
         return SummandClaim(complex_, kept, out, groups)
 
 
-KINDS: Mapping[str, Kind] = MappingProxyType(
+SPACE_KINDS: Mapping[str, Kind] = MappingProxyType(
     {
         "homology": Kind(("complex", "pair", "degrees", "groups", "route"), _homology),
         "smash": Kind(("complex", "pair", "degrees", "groups", "route"), _smash),
@@ -176,13 +180,14 @@ KINDS: Mapping[str, Kind] = MappingProxyType(
         "summand": Kind(("complex", "kept", "out", "groups"), _summand),
     }
 )
-"""The claim kinds, by the name that sheets give under ``kind``."""
+"""The claim kinds about spaces, by the name that sheets give under ``kind``."""
 
 
 # -- values that several kinds have -------------------------------------------------------------
 
 
-def _complex(table: Table, given: Given) -> SimplicialComplex:
+def complex_of(table: Table, given: Given) -> SimplicialComplex:
+    """Return the complex of the sheet that the key ``complex`` names."""
     name = table.text("complex", "the name of a complex of the sheet")
     if name not in given.complexes:
         names = ", ".join(given.complexes)
@@ -191,7 +196,15 @@ def _complex(table: Table, given: Given) -> SimplicialComplex:
     return given.complexes[name]
 
 
-def _pairs(table: Table, vertices: int, named: Mapping[str, Pair]) -> tuple[Pair, ...]:
+def product_of(table: Table, given: Given) -> PolyhedralProduct:
+    """Return the polyhedral product of the keys ``complex`` and ``pair``."""
+    complex_ = complex_of(table, given)
+    pairs = pairs_of(table, complex_.vertex_count, given.pairs)
+    with table.at("pair"):
+        return PolyhedralProduct(complex_, pairs)
+
+
+def pairs_of(table: Table, vertices: int, named: Mapping[str, Pair]) -> tuple[Pair, ...]:
     """Return one pair a vertex, from a text for all or a list with a text for each."""
     names = f" or one of the pairs {', '.join(named)} of the sheet" if named else ""
     expected = f'a pair like "(D1, S0)"{names}, or a list with one for each vertex'
@@ -208,7 +221,7 @@ def _pairs(table: Table, vertices: int, named: Mapping[str, Pair]) -> tuple[Pair
     return tuple(pairs)
 
 
-def _labels(table: Table, key: str, k: SimplicialComplex) -> tuple[Label, ...]:
+def labels_of(table: Table, key: str, k: SimplicialComplex) -> tuple[Label, ...]:
     """Return a list of vertices, empty if it is not there."""
     if key not in table.values:
         return ()
@@ -218,7 +231,7 @@ def _labels(table: Table, key: str, k: SimplicialComplex) -> tuple[Label, ...]:
         return tuple(labels)
 
 
-def _degrees(table: Table) -> tuple[int, ...] | None:
+def degrees_of(table: Table) -> tuple[int, ...] | None:
     """Return the degrees to which a claim is restricted."""
     if "degrees" not in table.values:
         return None
@@ -237,7 +250,7 @@ def _degrees(table: Table) -> tuple[int, ...] | None:
     return tuple(degrees)
 
 
-def _groups_by_degree(table: Table) -> dict[int, AbelianGroup] | None:
+def groups_by_degree(table: Table) -> dict[int, AbelianGroup] | None:
     """Return the claimed groups by degree from 0 on, or None where the claim asks for them."""
     if "groups" not in table.values:
         return None

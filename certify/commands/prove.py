@@ -243,7 +243,8 @@ def _lines(outcome: Outcome) -> Iterator[str]:
         return
     base = outcome.item.claim.base
     yield from shortened(outcome.lines)
-    yield f"where K is {outcome.item.complex}, on {counted(base.vertex_count, 'vertex', 'vertices')}"
+    if outcome.item.complex:
+        yield f"where K is {outcome.item.complex}, on {counted(base.vertex_count, 'vertex', 'vertices')}"
     yield from outcome.item.claim.remarks()
     yield f"certificate {outcome.path}, {counted(outcome.size or 0, 'byte')}"
     yield f"fingerprint {outcome.fingerprint}"

@@ -8,9 +8,10 @@ from certify.exact import BasedComplex, Entries, entries
 from certify.products.space import PolyhedralProduct
 from certify.products.splitting import Alphabet
 
-__all__ = ["cell_complex", "word_complex"]
+__all__ = ["Word", "cell_complex", "leibniz", "word_complex", "words_by_degree"]
 
-_Word = tuple[int, ...]
+Word = tuple[int, ...]
+"""A cell: the number of a cell of its pair for each vertex."""
 
 
 def cell_complex(space: PolyhedralProduct, top: int | None = None) -> BasedComplex:
@@ -25,8 +26,8 @@ def cell_complex(space: PolyhedralProduct, top: int | None = None) -> BasedCompl
     return word_complex(space.complex.face_masks(), [pair.cells for pair in space.pairs], top)
 
 
-def word_complex(faces: Iterable[int], alphabets: Sequence[Alphabet], top: int | None = None) -> BasedComplex:
-    """Return the complex whose cells have a letter for each vertex, the vertices with letters outside A forming a face.
+def words_by_degree(faces: Iterable[int], alphabets: Sequence[Alphabet], top: int | None = None) -> list[list[Word]]:
+    """Return the words with a letter for each vertex, where the vertices with letters outside A form a face, by degree.
 
     Parameters
     ----------
@@ -35,15 +36,15 @@ def word_complex(faces: Iterable[int], alphabets: Sequence[Alphabet], top: int |
     alphabets : sequence of Alphabet
         The cells at each vertex.
     top : int, optional
-        Leave out cells of larger degree.
+        Leave out words of larger degree.
 
     Notes
     -----
-    In each degree cells are ordered by the mask of that face, then lexicographically. The boundary is the Leibniz rule
-    with sign (-1)^(degree of the factors before). For (D¹, S⁰) there are Σ_σ 2^(m - |σ|) cells.
+    In each degree words are ordered by the mask of that face, then lexicographically. For (D¹, S⁰) there are
+    Σ_σ 2^(m - |σ|) words.
     """
     known = set(faces)
-    words: list[tuple[int, _Word, int]] = [(0, (), 0)]
+    words: list[tuple[int, Word, int]] = [(0, (), 0)]
     for vertex, alphabet in enumerate(alphabets):
         letters = [(i, letter.outside << vertex, letter.degree) for i, letter in enumerate(alphabet)]
         words = [
@@ -52,25 +53,29 @@ def word_complex(faces: Iterable[int], alphabets: Sequence[Alphabet], top: int |
             for i, bit, more in letters
             if mask | bit in known and (top is None or degree + more <= top)
         ]
-    degrees: list[list[_Word]] = [[] for _ in range(max((degree for _, _, degree in words), default=-1) + 1)]
+    degrees: list[list[Word]] = [[] for _ in range(max((degree for _, _, degree in words), default=-1) + 1)]
     for _, word, degree in sorted(words):
         degrees[degree].append(word)
+    return degrees
+
+
+def word_complex(faces: Iterable[int], alphabets: Sequence[Alphabet], top: int | None = None) -> BasedComplex:
+    """Return the complex of the words of `words_by_degree`, with the Leibniz rule as boundary."""
     boundaries: list[tuple[Entries, ...]] = []
-    below: dict[_Word, int] = {}
-    for cells in degrees:
-        boundaries.append(tuple(_boundary(word, alphabets, below) for word in cells))
+    below: dict[Word, int] = {}
+    for cells in words_by_degree(faces, alphabets, top):
+        boundaries.append(tuple(entries({below[end]: x for end, x in leibniz(word, alphabets)}) for word in cells))
         below = {word: number for number, word in enumerate(cells)}
     return BasedComplex(tuple(boundaries))
 
 
-def _boundary(word: _Word, alphabets: Sequence[Alphabet], below: dict[_Word, int]) -> Entries:
-    """Return d of a cell."""
-    terms: dict[int, int] = {}
+def leibniz(word: Word, alphabets: Sequence[Alphabet]) -> list[tuple[Word, int]]:
+    """Return d of a word: different words with coefficients, signed by (-1)^(degree of the letters before)."""
+    terms = []
     sign = 1
     for place, (i, alphabet) in enumerate(zip(word, alphabets, strict=True)):
         letter = alphabet[i]
-        for j, coefficient in letter.boundary:
-            terms[below[(*word[:place], j, *word[place + 1 :])]] = sign * coefficient
+        terms += [((*word[:place], j, *word[place + 1 :]), sign * x) for j, x in letter.boundary]
         if letter.degree % 2:
             sign = -sign
-    return entries(terms)
+    return terms

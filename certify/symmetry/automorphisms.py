@@ -6,7 +6,7 @@ import igraph
 
 from certify.products import PolyhedralProduct
 
-__all__ = ["Permutation", "automorphism_generators"]
+__all__ = ["Permutation", "automorphism_count", "automorphism_generators"]
 
 Permutation = tuple[int, ...]
 """The images of the vertex numbers 0, 1, …, in order."""
@@ -27,11 +27,31 @@ def automorphism_generators(product: PolyhedralProduct) -> tuple[Permutation, ..
     >>> automorphism_generators(PolyhedralProduct(points(2), parse_pairs("(D1, S0)", 2)))
     ((1, 0),)
     """
+    graph, colours = _graph(product)
+    m = product.complex.vertex_count
+    found = graph.automorphism_group(color=colours)
+    return tuple(sorted({tuple(image[:m]) for image in found} - {tuple(range(m))}))
+
+
+def automorphism_count(product: PolyhedralProduct) -> int:
+    """Return how many permutations of the vertices preserve K and the pairs.
+
+    Examples
+    --------
+    >>> from certify.products import parse_pairs
+    >>> from certify.simplicial.families import polygon
+    >>> automorphism_count(PolyhedralProduct(polygon(6), parse_pairs("(D1, S0)", 6)))
+    12
+    """
+    graph, colours = _graph(product)
+    return int(graph.count_automorphisms(color=colours))
+
+
+def _graph(product: PolyhedralProduct) -> tuple[igraph.Graph, list[int]]:
+    """Return the graph of vertices and facets, with a colour for each pair and one for facets."""
     complex_ = product.complex
     m = complex_.vertex_count
     names = sorted({pair.name for pair in product.pairs})
     colours = [names.index(pair.name) for pair in product.pairs] + [len(names)] * len(complex_.facets)
     edges = [(vertex, m + number) for number, facet in enumerate(complex_.facets) for vertex in facet]
-    graph = igraph.Graph(n=m + len(complex_.facets), edges=edges)
-    found = graph.automorphism_group(color=colours)
-    return tuple(sorted({tuple(image[:m]) for image in found} - {tuple(range(m))}))
+    return igraph.Graph(n=m + len(complex_.facets), edges=edges), colours

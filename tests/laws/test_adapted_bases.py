@@ -56,6 +56,7 @@ class _Space:
     """A based complex as the verifier handles one: sizes, boundaries, and the leads of matched cells."""
 
     complex_: BasedComplex
+    watched = -1
 
     @property
     def sizes(self) -> list[int]:

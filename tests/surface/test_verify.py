@@ -98,13 +98,13 @@ def test_the_limit_on_integers_reaches_the_verifier(certify: Certify, folder: Pa
     path = folder / "ring.cert.jsonl"
     *lines, end = path.read_bytes().splitlines(keepends=True)
     before = b"".join(lines)
-    after = before.replace(b"[1,34,[]]", f'[1,"{2**60}",[]]'.encode())
+    after = before.replace(b'"cycles":[[0,1]]', f'"cycles":[[0,"{2**60}"]]'.encode())
     old, new = (hashlib.sha256(text).hexdigest().encode() for text in (before, after))
     path.write_bytes(after + end.replace(old, new))
     ended = certify("verify", "--max-bits", "10", path)
     assert ended.code == 3
     assert "raise --max-bits" in ended.out
-    # With room for it, the integer is read, and the claim is found to be false.
+    # With room for it, the integer is read, and the vector is found to be in no basis.
     assert certify("verify", "--max-bits", "100", path).code == 1
 
 

@@ -244,7 +244,7 @@ def test_a_false_statement_is_said_to_stand_in_the_first_line() -> None:
     claim, edit, _ = CASES["a larger rank"]
     report = judged(forged(claim, edit))
     assert report["where"] == "line 1"
-    assert report["sentence"] == "in degree 1 ℤ¹² is stated, but ℤ¹⁰ is proved"
+    assert report["sentence"] == "groups: [1, 12, []] is stated, but [1, 10, []] is proved"
 
 
 def test_faces_of_a_real_toric_space_are_not_left_out_in_claims_about_some_degrees() -> None:

@@ -138,7 +138,7 @@ def test_the_tasks_of_the_block_route_settle_every_set_of_vertices(m: int) -> No
 
 def test_the_record_of_a_block() -> None:
     """Two points: ∅ is d of the first point, and the difference of the points is a cycle."""
-    line, groups = solve(Task(Block("0110", (1, 1), (0, 1, 2), {1: 3})))
+    line, groups, _ = solve(Task(Block("0110", (1, 1), (0, 1, 2), {1: 3})))
     assert line is not None
     assert json.loads(line) == {"basis": [{}, {"cycles": [[0, -1, 1, 1]], "matched": [0]}], "block": "0110"}
     assert groups == (AbelianGroup(), AbelianGroup(1))
@@ -155,12 +155,12 @@ def test_the_record_of_a_block() -> None:
     ],
 )
 def test_a_cone_has_no_record(block: Block, top: int | None) -> None:
-    assert solve(Task(block.truncated(top))) == (None, ())
+    assert solve(Task(block.truncated(top))) == (None, (), ())
 
 
 def test_a_vertex_with_another_tag_is_no_apex() -> None:
     """d e = 2 t makes ℤ/2, and no acyclic complex."""
-    line, groups = solve(Task(Block("1", (2,), (0, 1), {0: 1})))
+    line, groups, _ = solve(Task(Block("1", (2,), (0, 1), {0: 1})))
     assert line is not None
     assert groups == (AbelianGroup(0, (2,)), AbelianGroup())
 
@@ -168,7 +168,7 @@ def test_a_vertex_with_another_tag_is_no_apex() -> None:
 def test_the_record_of_a_whole_product() -> None:
     """(D¹, S⁰) over two points is a circle of four edges."""
     (task,) = HomologyClaim(CIRCLE, route="cells").tasks()
-    line, groups = solve(task)
+    line, groups, _ = solve(task)
     assert line is not None
     record = json.loads(line)
     assert list(record) == ["basis"]

@@ -7,7 +7,7 @@ from pathlib import Path
 import pytest
 
 from certify.claims import HomologyClaim
-from certify.claims.reading import KINDS
+from certify.claims.kinds import KINDS
 from certify.errors import BadInput
 from certify.exact import AbelianGroup
 from certify.products import parse_pairs

@@ -1,0 +1,310 @@
+"""The claim kinds ``character`` and ``action``: how symmetries act on homology modulo torsion."""
+
+from __future__ import annotations
+
+from collections.abc import Iterable, Iterator, Mapping
+from dataclasses import dataclass, field
+from fractions import Fraction
+from typing import Any, ClassVar, Literal
+
+from certify.certificate import vector_value
+from certify.certificate.canonical import integer_value
+from certify.claims.base import Contribution, Task
+from certify.claims.homology import HomologyClaim
+from certify.claims.values import Values, ValuesClaim
+from certify.errors import BadInput
+from certify.exact import adapted_basis
+from certify.products import Block, PolyhedralProduct, block_classes
+from certify.products.blocks import DIGITS
+from certify.simplicial.complexes import SimplicialComplex
+from certify.symmetry.actions import ActedCells, acted_blocks
+from certify.symmetry.elements import (
+    Element,
+    check_symmetries,
+    generated_group,
+    identity,
+    inverse,
+    orbit,
+    rational_classes,
+    spell_cycles,
+)
+
+__all__ = ["ActionClaim", "CharacterClaim"]
+
+
+@dataclass(frozen=True)
+class CharacterClaim(ValuesClaim):
+    """A claim about the character of a group on H_k((X, A)^K; ℚ).
+
+    Parameters
+    ----------
+    product : PolyhedralProduct
+    degree : int
+    generators : tuple of Element
+    elements : tuple of Element, or None
+        One element of each rational class; None lets them be found.
+    claimed : mapping
+        ``values``: the traces on these elements, in this order; ``multiplicities``: ⟨χ, ψ⟩ / ⟨ψ, ψ⟩ by the name of the
+        class function ψ, a function that is left out being claimed to have multiplicity 0.
+    functions : mapping
+        Class functions ψ by name, with their values on these elements. Their inner products ⟨χ, ψ⟩ and ⟨ψ, ψ⟩ are
+        proved; the quotient is the multiplicity of ψ if it is irreducible over ℚ, which is not part of the proof.
+    summands : tuple of str, or None
+        Words for summands of the stable splitting, with a digit for the summand of the pair at each vertex (for discs 1
+        where the vertex belongs to I): the character is that on the sum of their orbits. None for all summands.
+    route : {"blocks", "cells"}
+
+    Raises
+    ------
+    BadInput
+        If a generator is no symmetry, a word is none, or a rational class is missing or there twice.
+    """
+
+    product: PolyhedralProduct
+    degree: int
+    generators: tuple[Element, ...]
+    elements: tuple[Element, ...] | None = None
+    claimed: Values = field(default_factory=dict)
+    functions: Mapping[str, tuple[int, ...]] = field(default_factory=dict)
+    summands: tuple[str, ...] | None = None
+    route: Literal["blocks", "cells"] = "blocks"
+    kind: ClassVar[str] = "character"
+
+    def __post_init__(self) -> None:
+        """Refuse generators that are no symmetries, and a list of elements that does not match the classes."""
+        k = self.base
+        check_symmetries(self.generators, self.product)
+        group = generated_group(self.generators, k.vertex_count)
+        classes = rational_classes(group, self.generators)
+        if self.elements is None:
+            object.__setattr__(self, "elements", tuple(own[0] for own in classes))
+        where = {element: number for number, own in enumerate(classes) for element in own}
+        met: dict[int, Element] = {}
+        for element in self._elements:
+            shown = spell_cycles(element, k)
+            if element not in where:
+                raise BadInput(where="values", expected="elements of the group", found=f"{shown}, which is none")
+            if where[element] in met:
+                other = spell_cycles(met[where[element]], k)
+                found = f"{other} and {shown}, which are in one class"
+                raise BadInput(where="values", expected="each rational class once", found=found)
+            met[where[element]] = element
+        for number, own in enumerate(classes):
+            if number not in met:
+                found = f"none of the class of {spell_cycles(own[0], k)}"
+                raise BadInput(where="values", expected="an element of each rational class", found=found)
+        for psi in self.functions.values():
+            if len(psi) != len(classes):
+                expected = f"a value for each of the {len(classes)} classes"
+                raise BadInput(where="functions", expected=expected, found=f"{len(psi)}")
+        self._check_words()
+        object.__setattr__(self, "_sizes", tuple(len(classes[where[element]]) for element in self._elements))
+
+    def _check_words(self) -> None:
+        """Refuse words that choose no summands, and summands on the route of cells."""
+        if self.summands is not None and self.route == "cells":
+            raise BadInput(where="route", expected="blocks where single summands are meant", found="cells")
+        for word in self.summands or ():
+            sizes = [len(pair.shapes) for pair in self.product.pairs]
+            fits = len(word) == len(sizes) and all(
+                digit in DIGITS[:size] for digit, size in zip(word, sizes, strict=True)
+            )
+            if not fits:
+                expected = f"words with a digit for each of the {len(sizes)} vertices, below the number of summands"
+                raise BadInput(where="summands", expected=expected, found=repr(word))
+
+    def _chosen(self) -> set[str] | None:
+        """Return the words in the orbits of those that are meant."""
+        if self.summands is None:
+            return None
+        backs = [inverse(element) for element in self.generators]
+
+        def images(word: str) -> list[str]:
+            return ["".join(word[abs(place) - 1] for place in back) for back in backs]
+
+        return {word for given in self.summands for word in orbit(given, images)}
+
+    @property
+    def _elements(self) -> tuple[Element, ...]:
+        return self.elements or ()
+
+    @property
+    def base(self) -> SimplicialComplex:
+        """The complex K."""
+        return self.product.complex
+
+    def fields(self) -> dict[str, Any]:
+        """Return degree, elements, functions, generators and pairs."""
+        return {
+            "degree": self.degree,
+            "elements": [list(element) for element in self._elements],
+            "functions": [[integer_value(x) for x in psi] for psi in self.functions.values()],
+            "generators": [list(element) for element in self.generators],
+            "pairs": [pair.value for pair in self.product.pairs],
+            "summands": None if self.summands is None else list(self.summands),
+        }
+
+    def opening(self) -> Iterator[dict[str, Any]]:
+        """Yield the splitting of each pair that is given by its cells."""
+        if self.route == "blocks":
+            yield from HomologyClaim(self.product).opening()
+
+    def tasks(self) -> Iterator[Task]:
+        """Yield the whole product, or the blocks that each element maps to themselves; all of them for the identity."""
+        if self.route == "cells":
+            cells = tuple(pair.cells for pair in self.product.pairs)
+            yield from _with_cells(ActedCells(self.base.face_masks(), cells, self.degree, self._elements))
+            return
+        chosen = self._chosen()
+        for number, element in enumerate(self._elements):
+            if chosen is None and element == identity(self.base.vertex_count):
+                for block in block_classes(self.product, self.degree + 1):
+                    yield Task(block)
+            else:
+                for acted in acted_blocks(self.product, self.degree, element, number):
+                    if chosen is None or acted.name in chosen:
+                        yield Task(acted)
+
+    def found(self, contributions: Iterable[Contribution]) -> dict[str, Any]:
+        """Return the values of the character, and the inner products."""
+        values = [0] * len(self._elements)
+        for contribution in contributions:
+            source = contribution.source
+            if isinstance(source, ActedCells):
+                for place, trace in enumerate(contribution.traces, source.number):
+                    values[place] += source.factor * trace
+            elif isinstance(source, Block):
+                one = self._elements.index(identity(self.base.vertex_count))
+                for shift, times in source.shifts.items():
+                    if 0 <= self.degree - shift < len(contribution.groups):
+                        values[one] += times * contribution.groups[self.degree - shift].rank
+        products = [[self._inner(values, psi), self._inner(psi, psi)] for psi in self.functions.values()]
+        return {"products": products, "values": values}
+
+    def _inner(self, some: Iterable[int], others: Iterable[int]) -> int:
+        sizes: tuple[int, ...] = getattr(self, "_sizes")  # noqa: B009 - no field, and so not compared
+        total = sum(n * x * y for n, x, y in zip(sizes, some, others, strict=True))
+        if total % sum(sizes):
+            found = f"one with an inner product of {total}/{sum(sizes)}"
+            raise BadInput(where="functions", expected="class functions with whole inner products", found=found)
+        return total // sum(sizes)
+
+    def check(self, found: Values) -> None:
+        """Raise ClaimIsFalse at the first value of the character, or multiplicity, that is not the one claimed."""
+        if "values" in self.claimed:
+            pairs = zip(self._elements, self.claimed["values"], found["values"], strict=True)
+            for element, claimed, real in pairs:
+                self.compare_one(f"χ({spell_cycles(element, self.base)})", claimed, real)
+        if "multiplicities" in self.claimed:
+            for name, real in self._multiplicities(found).items():
+                self.compare_one(f"the multiplicity of {name}", self.claimed["multiplicities"].get(name, 0), real)
+
+    def _multiplicities(self, found: Values) -> dict[str, Fraction]:
+        pairs = zip(self.functions, found["products"], strict=True)
+        return {name: Fraction(inner, norm) if norm else Fraction(0) for name, (inner, norm) in pairs}
+
+    def answer(self, found: Values) -> dict[str, Any]:
+        """Return values and products as the statement holds them."""
+        products = [[integer_value(x) for x in pair] for pair in found["products"]]
+        return {"products": products, "values": [integer_value(value) for value in found["values"]]}
+
+    def lines(self, found: Values) -> list[str]:
+        """Write the values of the character, class by class."""
+        of = f"on H_{self.degree}({self.product}; ℚ)"
+        lines = [
+            f"χ({spell_cycles(element, self.base)}) = {value} {of}, {size} in the class"
+            for element, value, size in zip(self._elements, found["values"], getattr(self, "_sizes"), strict=True)  # noqa: B009
+        ]
+        for name, multiplicity in self._multiplicities(found).items():
+            if multiplicity:
+                values = ", ".join(map(str, self.functions[name]))
+                lines.append(f"multiplicity {multiplicity} of {name}, which has the values {values}")
+        return lines
+
+    def name(self, key: str) -> str:
+        """Write in words what a value is."""
+        return f"the {key} of the character"
+
+    def value(self, found: Values) -> dict[str, Any]:
+        """Return the values under the elements, and the products."""
+        elements = [spell_cycles(element, self.base) for element in self._elements]
+        multiplicities = {name: str(value) for name, value in self._multiplicities(found).items()}
+        return {"values": dict(zip(elements, found["values"], strict=True)), "multiplicities": multiplicities}
+
+
+@dataclass(frozen=True)
+class ActionClaim(ValuesClaim):
+    """A claim about the integer matrix of a symmetry on H_k((X, A)^K; ℤ) modulo torsion, in a basis of cycles.
+
+    Parameters
+    ----------
+    product : PolyhedralProduct
+    degree : int
+    element : Element
+    claimed : mapping
+        ``matrix``, by rows; it belongs to the basis that is found, so it is mostly asked for.
+
+    Raises
+    ------
+    BadInput
+        If the element is no symmetry.
+    """
+
+    product: PolyhedralProduct
+    degree: int
+    element: Element
+    claimed: Values = field(default_factory=dict)
+    route: str = "cells"
+    kind: ClassVar[str] = "action"
+
+    def __post_init__(self) -> None:
+        """Refuse an element that is no symmetry."""
+        check_symmetries([self.element], self.product)
+
+    @property
+    def base(self) -> SimplicialComplex:
+        """The complex K."""
+        return self.product.complex
+
+    @property
+    def _cells(self) -> ActedCells:
+        cells = tuple(pair.cells for pair in self.product.pairs)
+        return ActedCells(self.base.face_masks(), cells, self.degree, (self.element,))
+
+    def fields(self) -> dict[str, Any]:
+        """Return degree, element and pairs."""
+        pairs = [pair.value for pair in self.product.pairs]
+        return {"degree": self.degree, "element": list(self.element), "pairs": pairs}
+
+    def tasks(self) -> Iterator[Task]:
+        """Yield the whole product."""
+        yield from _with_cells(self._cells)
+
+    def found(self, contributions: Iterable[Contribution]) -> dict[str, Any]:
+        """Return the cycles of the basis, and the matrix by rows."""
+        list(contributions)
+        if not self._cells.is_watched:
+            return {"basis": [], "matrix": []}
+        complex_ = self._cells.chains()
+        # The same basis as in the record, since it depends on the complex alone.
+        basis = adapted_basis(complex_)
+        (columns,) = self._cells.matrices(complex_, basis)
+        cycles = [vector_value(cycle) for cycle in basis.degrees[self.degree].cycles]
+        matrix = [[integer_value(x) for x in row] for row in zip(*columns, strict=True)]
+        return {"basis": cycles, "matrix": matrix}
+
+    def name(self, key: str) -> str:
+        """Write in words what a value is."""
+        return f"the {key} of {spell_cycles(self.element, self.base)} on H_{self.degree}({self.product}; ℤ) mod torsion"
+
+    def lines(self, found: Mapping[str, Any]) -> list[str]:
+        """Write the matrix by rows, and its trace."""
+        rows = [" ".join(map(str, row)) for row in found["matrix"]]
+        trace = sum(int(row[i]) for i, row in enumerate(found["matrix"]))
+        return [f"{self.name('matrix')}, of trace {trace}:", *rows, "its basis of cycles stands in the certificate"]
+
+
+def _with_cells(cells: ActedCells) -> Iterator[Task]:
+    """Yield the task, if there are cells of the degree."""
+    if cells.is_watched:
+        yield Task(cells)

@@ -1,0 +1,92 @@
+"""The claim kind ``orbit-count``: orbits of a group on colourings of the vertices."""
+
+from __future__ import annotations
+
+from collections.abc import Iterable
+from dataclasses import dataclass, field
+from typing import Any, ClassVar
+
+from certify.certificate.canonical import integer_value
+from certify.claims.base import Contribution
+from certify.claims.values import Values, ValuesClaim
+from certify.errors import BadInput
+from certify.products import PolyhedralProduct, parse_pairs
+from certify.simplicial.complexes import SimplicialComplex
+from certify.symmetry import automorphism_generators
+from certify.symmetry.counting import colouring_orbits
+from certify.symmetry.elements import Element, check_symmetries, generated_group
+
+__all__ = ["OrbitCountClaim"]
+
+
+@dataclass(frozen=True)
+class OrbitCountClaim(ValuesClaim):
+    """A claim about the number of orbits of a group of automorphisms of K on colourings of its vertices.
+
+    Parameters
+    ----------
+    complex : SimplicialComplex
+    colours : int
+    generators : tuple of Element, or None
+        None is for the full automorphism group.
+    content : tuple of int, or None
+        How many vertices have which colour; None for all colourings.
+    claimed : mapping
+        Some of ``orbits``, and ``primitive``: those with trivial isotropy.
+
+    Raises
+    ------
+    BadInput
+        If a generator does not preserve K or has signs, or the content does not fit.
+    """
+
+    complex: SimplicialComplex
+    colours: int
+    generators: tuple[Element, ...] | None = None
+    content: tuple[int, ...] | None = None
+    claimed: Values = field(default_factory=dict)
+    route: str = "permutations"
+    kind: ClassVar[str] = "orbit-count"
+
+    def __post_init__(self) -> None:
+        """Refuse generators that are no symmetries, and a content that does not fit."""
+        check_symmetries(self.generators or (), self._product)
+        if any(to < 0 for element in self.generators or () for to in element):
+            raise BadInput(where="generators", expected="permutations of the vertices", found="changes of signs")
+        content = self.content
+        if content is not None and (len(content) != self.colours or sum(content) != self.complex.vertex_count):
+            expected = f"{self.colours} numbers with the sum {self.complex.vertex_count}"
+            raise BadInput(where="content", expected=expected, found=f"{list(content)}")
+
+    @property
+    def _product(self) -> PolyhedralProduct:
+        return PolyhedralProduct(self.complex, parse_pairs("(D2, S1)", self.complex.vertex_count))
+
+    @property
+    def base(self) -> SimplicialComplex:
+        """The complex K."""
+        return self.complex
+
+    def fields(self) -> dict[str, Any]:
+        """Return colours, content and generators."""
+        return {
+            "colours": self.colours,
+            "content": None if self.content is None else list(self.content),
+            "generators": None if self.generators is None else [list(element) for element in self.generators],
+        }
+
+    def found(self, contributions: Iterable[Contribution]) -> dict[str, Any]:
+        """Return both numbers."""
+        list(contributions)
+        generators = self.generators
+        if generators is None:
+            generators = tuple(tuple(to + 1 for to in image) for image in automorphism_generators(self._product))
+        group = generated_group(generators, self.complex.vertex_count)
+        orbits, primitive = colouring_orbits(group, self.colours, self.content)
+        return {"orbits": integer_value(orbits), "primitive": integer_value(primitive)}
+
+    def name(self, key: str) -> str:
+        """Write in words what a value is."""
+        what = f"{self.colours} colours" if self.content is None else f"the content {list(self.content)}"
+        free = " with trivial isotropy" if key == "primitive" else ""
+        return f"the number of orbits on colourings with {what}{free}"

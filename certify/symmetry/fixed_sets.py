@@ -1,0 +1,48 @@
+"""The points of a polyhedral product that a group of symmetries fixes."""
+
+from __future__ import annotations
+
+from collections.abc import Sequence
+
+from certify.products import PolyhedralProduct
+from certify.simplicial import SimplicialComplex
+from certify.simplicial.spelling import spell_labels
+from certify.symmetry.elements import Element, after, moved_mask, orbit
+
+__all__ = ["fixed_set"]
+
+
+def fixed_set(product: PolyhedralProduct, generators: Sequence[Element]) -> PolyhedralProduct | None:
+    """Return the polyhedral product that is the fixed set of the group of these symmetries, or None if it is empty.
+
+    Parameters
+    ----------
+    product : PolyhedralProduct
+    generators : sequence of Element
+        Symmetries of K and the pairs; signs only on (D¹, S⁰).
+
+    Notes
+    -----
+    A fixed point has equal coordinates on each orbit of vertices; so the fixed set is the product over the complex K_G,
+    of which the orbits are the vertices, and the sets of orbits with a face of K as union are the faces. An orbit
+    on which a coordinate must equal its negative has the coordinate 0, which is inside the interval: it belongs to
+    every support, and K_G is replaced by the link of these orbits (docs/mathematics.md).
+    """
+    k = product.complex
+    halves: dict[int, int] = {}
+    centre = 0
+    for vertex in range(1, k.vertex_count + 1):
+        met = orbit(vertex, lambda v: (after(element, (v,))[0] for element in generators))
+        mask = sum({1 << abs(v) - 1 for v in met})
+        if -vertex in met:
+            centre |= mask
+        else:
+            halves.setdefault(mask, vertex)
+    invariant = (m for m in k.face_masks() if all(moved_mask(m, element) == m for element in generators))
+    faces = [mask ^ centre for mask in invariant if mask & centre == centre]
+    if not faces:
+        return None
+    labels = [spell_labels(label for i, label in enumerate(k.labels) if mask >> i & 1) for mask in halves]
+    sets = [[place for place, half in enumerate(halves) if mask & half] for mask in faces]
+    pairs = tuple(product.pairs[vertex - 1] for vertex in halves.values())
+    return PolyhedralProduct(SimplicialComplex.from_faces(labels, sets), pairs)

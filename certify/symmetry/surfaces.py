@@ -1,0 +1,127 @@
+"""Recognising surfaces among quotients, and their branch points."""
+
+from __future__ import annotations
+
+from collections.abc import Iterable, Sequence
+from dataclasses import dataclass
+
+import networkx as nx
+
+from certify.errors import BadInput
+from certify.symmetry.orbit_spaces import Cell, OrbitSpace
+
+__all__ = ["Surface", "branch_orbits", "recognise_surface", "spell_cell"]
+
+
+@dataclass(frozen=True, slots=True)
+class Surface:
+    """A connected compact surface.
+
+    Parameters
+    ----------
+    euler : int
+        Its Euler characteristic.
+    orientable : bool
+    boundary : int
+        The number of boundary circles.
+    """
+
+    euler: int
+    orientable: bool
+    boundary: int
+
+    @property
+    def genus(self) -> int:
+        """The number of handles, or of cross-caps, of the closed surface that discs make of it."""
+        missing = 2 - self.euler - self.boundary
+        return missing // 2 if self.orientable else missing
+
+    def __str__(self) -> str:
+        """Say what it is."""
+        kind = "an orientable" if self.orientable else "a non-orientable"
+        rim = f"with {self.boundary} boundary circle{'s' * (self.boundary > 1)}" if self.boundary else "closed"
+        return f"{kind} surface of genus {self.genus}, {rim}, Euler characteristic {self.euler}"
+
+
+def recognise_surface(space: OrbitSpace) -> Surface:
+    """Return the surface that a quotient is.
+
+    Parameters
+    ----------
+    space : OrbitSpace
+        On chains, so that its triangles have vertices of dimensions 0, 1 and 2.
+
+    Raises
+    ------
+    BadInput
+        If it is no connected surface; the point and its link, or the edge, are named.
+
+    Notes
+    -----
+    A complex of triangles is a surface if each edge lies in one or two of them, and the link of each vertex is a circle
+    or a path. It is orientable if its triangles can be coloured with two colours so that they change across each edge,
+    since the vertices of a triangle are ordered by dimension.
+    """
+    if len(space.cells) != 3:
+        raise _no_surface(f"one of dimension {len(space.cells) - 1}")
+    dual: nx.Graph[Cell] = nx.Graph()
+    dual.add_nodes_from(space.cells[2])
+    sides: dict[Cell, list[Cell]] = {edge: [] for edge in space.cells[1]}
+    links: dict[Cell, nx.MultiGraph[Cell]] = {vertex: nx.MultiGraph() for vertex in space.cells[0]}
+    for triangle in space.cells[2]:
+        edges = [edge for edge, _ in space.ends(triangle)]
+        for place, edge in enumerate(edges):
+            sides[edge].append(triangle)
+            links[space.first((triangle[place],))].add_edge(*(edges[:place] + edges[place + 1 :]))
+    for edge, triangles in sides.items():
+        if len(triangles) not in (1, 2):
+            raise _no_surface(f"an edge {spell_cell(edge)} that lies in {len(triangles)} triangles")
+        if len(triangles) == 2:
+            dual.add_edge(*triangles)
+    for vertex, link in links.items():
+        if not link or not nx.is_connected(link):
+            pieces = nx.number_connected_components(link) if link else 0
+            raise _no_surface(f"the point {spell_cell(vertex)}, whose link has {pieces} pieces")
+    if not nx.is_connected(dual):
+        raise _no_surface(f"{nx.number_connected_components(dual)} pieces")
+    rim: nx.Graph[Cell] = nx.Graph()
+    for edge, triangles in sides.items():
+        if len(triangles) == 1:
+            rim.add_edge(*(end for end, _ in space.ends(edge)))
+    boundary = nx.number_connected_components(rim) if rim else 0
+    return Surface(space.euler_characteristic(), nx.is_bipartite(dual), boundary)
+
+
+def branch_orbits(space: OrbitSpace) -> list[tuple[int, int]]:
+    """Return how many orbits of points have an isotropy group of which order above 1, orders ascending.
+
+    Parameters
+    ----------
+    space : OrbitSpace
+        On chains.
+
+    Raises
+    ------
+    BadInput
+        If such points are not isolated.
+    """
+    for level, orders in zip(space.cells[1:], space.isotropy[1:], strict=True):
+        if set(orders) - {1}:
+            found = f"whole cells of dimension {len(level[0]) - 1} with isotropy"
+            raise BadInput(where="the action", expected="isolated points with isotropy", found=found)
+    return sorted((order, number) for order, number in space.isotropy[0].items() if order > 1)
+
+
+def spell_cell(cell: Iterable[Sequence[int]]) -> str:
+    """Write cells with a sign for each vertex: - and + for the ends of an interval, o for its inside.
+
+    Examples
+    --------
+    >>> spell_cell([(0, 1, 0), (2, 1, 0)])
+    '-+- < o+-'
+    """
+    return " < ".join("".join("-+o"[letter] for letter in word) for word in cell)
+
+
+def _no_surface(found: str) -> BadInput:
+    return BadInput(where="the space", expected="a connected surface", found=found)
