@@ -714,15 +714,15 @@ def homology(space: Space, basis: object, budget: Budget) -> list[tuple[int, lis
         if "order" in entry or degree == space.watched:
             family = [[(cell, 1)] for cell in matched] + vectors
             family += [space.boundary(degree + 1, [(cell, 1)]) for cell in matched_above] + boundaries
-        if degree == space.watched:
-            first = len(matched) + len(pairs)
-            space.frame = Frame(family, range(first, first + len(cycles)), entry, size)
         if "order" in entry:
             check_staircase(size, family, entry, budget)
         else:
             require("groups" not in entry, "order", "groups need an order")
             leads = matched + (space.leads(degree + 1, matched_above) if matched_above else [])
             check_natural(size, leads, vectors + boundaries)
+        if degree == space.watched:
+            first = len(matched) + len(pairs)
+            space.frame = Frame(family, range(first, first + len(cycles)), entry, size)
         groups.append((len(cycles), orders))
         above = (matched, [b for _, _, b in pairs], [e for _, e, _ in pairs if e > 1])
         budget.spend("cells", size)
@@ -910,7 +910,7 @@ def find_summands(statement: Statement, lines: Lines, budget: Budget) -> None:
     """Read the splitting of the pairs that are given by their cells; prepare a smash product."""
     unsplit = {pair.text: pair for pair in statement.pairs if type(pair.raw) is not str}
     if unsplit:
-        require(statement.kind == "homology", "pair", "only homology is known for pairs given by their cells")
+        require(statement.kind != "smash", "pair", "a smash product is known of pairs with names only")
         proofs = sequence(record(lines.next(), ("splitting",))["splitting"])
         require(len(proofs) == len(unsplit), "splitting", f"{len(unsplit)} pairs need a splitting")
         for pair, proof in zip(unsplit.values(), proofs, strict=True):

@@ -21,11 +21,18 @@ from certify.claims import (
     TableClaim,
     TorClaim,
 )
+from certify.claims.automorphisms import AutomorphismsClaim
+from certify.claims.characters import ActionClaim, CharacterClaim
+from certify.claims.counts import OrbitCountClaim
+from certify.claims.fixed_sets import FixedSetClaim
 from certify.claims.homology import Route
+from certify.claims.identities import IdentityClaim
+from certify.claims.quotients import BranchingClaim, OrbitSpaceClaim, SurfaceClaim
+from certify.claims.shellings import ShellingClaim
 from certify.products import Pair, PolyhedralProduct, parse_pair, parse_pairs
 from certify.simplicial import SimplicialComplex, build
 from certify.simplicial.families import polygon, simplex
-from tests.helpers import certificate_of, limits, verifier
+from tests.helpers import certificate_of, disc_product, limits, verifier
 
 Values = list[Any]
 """The values of the lines of a certificate, the end record included."""
@@ -44,6 +51,8 @@ def _mixed(*pairs: str | Pair, route: Route = "blocks") -> HomologyClaim:
     chosen = tuple(pair if isinstance(pair, Pair) else parse_pair(pair) for pair in pairs)
     return HomologyClaim(PolyhedralProduct(simplex(len(pairs)), chosen), route=route)
 
+
+ROTATION, REFLECTION = (2, 3, 4, 5, 1), (1, 5, 4, 3, 2)
 
 CLAIMS: dict[str, Claim[Any]] = {
     "ring": _over(polygon(5), "(D1, S0)"),
@@ -64,6 +73,27 @@ CLAIMS: dict[str, Claim[Any]] = {
     "tor": TorClaim(polygon(5)),
     "table": TableClaim(polygon(4)),
     "summand": SummandClaim(build("projective-plane"), (2, 3, 4, 5, 6), (1,)),
+    "automorphisms": AutomorphismsClaim(disc_product(polygon(5), 1)),
+    "cyclic-group": AutomorphismsClaim(disc_product(polygon(5), (1, 1, 1, 1, 1)), (ROTATION,)),
+    "character": CharacterClaim(
+        disc_product(polygon(5), 1), 1, (ROTATION, REFLECTION), functions={"trivial": (1, 1, 1), "two": (4, -1, 0)}
+    ),
+    "character-by-cells": CharacterClaim(disc_product(polygon(4), 1), 1, ((2, -3, 4, 1),), route="cells"),
+    "character-of-summands": CharacterClaim(disc_product(polygon(5), 2), 3, (ROTATION,), summands=("10100",)),
+    "character-of-own-pair": CharacterClaim(
+        PolyhedralProduct(build("points", m=2), (DEGREE_TWO, DEGREE_TWO)), 2, ((2, 1),)
+    ),
+    "action": ActionClaim(disc_product(polygon(4), 1), 1, (2, 3, 4, 1)),
+    "fixed-set": FixedSetClaim(disc_product(polygon(5), 1), generators=(REFLECTION,)),
+    "fixed-set-with-signs": FixedSetClaim(disc_product(polygon(4), 1), generators=((-1, 2, 3, 4),)),
+    "orbit-space": OrbitSpaceClaim(polygon(4), ((2, 3, 4, 1),)),
+    "free-orbit-space": OrbitSpaceClaim(polygon(4), ((-1, -2, -3, -4),)),
+    "surface": SurfaceClaim(polygon(4), ((1, 4, 3, 2),)),
+    "branching": BranchingClaim(polygon(5), (ROTATION,)),
+    "shelling": ShellingClaim(polygon(5)),
+    "orbit-count": OrbitCountClaim(polygon(5), 2, (ROTATION,)),
+    "orbit-count-by-content": OrbitCountClaim(polygon(5), 2, None, (2, 3)),
+    "count-identity": IdentityClaim("necklaces(n, 2)", "sum(lyndon(d, 2) for d in divisors(n))", 1, 6),
 }
 """Claims that together use every kind, route, pair and key of the format."""
 

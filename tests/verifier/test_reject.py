@@ -232,6 +232,125 @@ CASES: dict[str, tuple[str, Edit, str]] = {
 }
 
 
+def _state(*way: Any, to: Any) -> Edit:
+    """Return an edit of the statement."""
+
+    def edit(values: Values) -> None:
+        holder = values[0][S]
+        for key in way[:-1]:
+            holder = holder[key]
+        holder[way[-1]] = to
+
+    return edit
+
+
+SYMMETRY_CASES: dict[str, tuple[str, Edit, str]] = {
+    "a larger group": ("automorphisms", _state("order", to=20), "false"),
+    "the full group where a part is meant": ("cyclic-group", _state("order", to=10), "false"),
+    "more orbits on sets": ("automorphisms", _state("orbits", "subsets", to=9), "false"),
+    "an element that is none": ("cyclic-group", _state("generators", to=[[2, 1, 3, 4, 5]]), "symmetry"),
+    "an element that is no permutation": ("cyclic-group", _state("generators", to=[[2, 2, 3, 4, 5]]), "symmetry"),
+    "an element that is too short": ("cyclic-group", _state("generators", to=[[2, 3, 4, 1]]), "symmetry"),
+    "true as an image": ("cyclic-group", _state("generators", to=[[2, 3, 4, 5, True]]), "symmetry"),
+    "a sign on a disc": ("character-of-summands", _state("generators", to=[[-2, 3, 4, 5, 1]]), "symmetry"),
+    "an element that exchanges different pairs": (
+        "cyclic-group",
+        _state("pairs", 0, to="(D2, S1)"),
+        "symmetry",
+    ),
+    "another trace": ("character", _state("values", 1, to=1), "false"),
+    "another degree of the identity": ("character", _state("values", 0, to=11), "false"),
+    "another inner product": ("character", _state("products", 0, to=[2, 1]), "false"),
+    "a trace of cells": ("character-by-cells", _state("values", 1, to=7), "false"),
+    "a class left out": ("character", lambda v: _shorten(v, -1), "classes"),
+    "a class twice": ("character", lambda v: v[0][S]["elements"].__setitem__(2, [2, 3, 4, 5, 1]), "classes"),
+    "an element outside the group": (
+        "character-of-summands",
+        lambda v: v[0][S]["elements"].__setitem__(1, [1, 5, 4, 3, 2]),
+        "classes",
+    ),
+    "a function with a value too few": ("character", lambda v: v[0][S]["functions"][0].pop(), "statement"),
+    "a function that is none of a class": ("character", _state("functions", 0, to=[1, 0, 0]), "false"),
+    "other summands": ("character-of-summands", _state("summands", to=["11000"]), "block"),
+    "summands of too few vertices": ("character-of-summands", _state("summands", to=["101"]), "statement"),
+    "a record of a fixed block left out": ("character", lambda v: v.pop(-2), "keys"),
+    "another matrix": ("action", _state("matrix", to=[[0, 1], [1, 0]]), "false"),
+    "another basis": ("action", _state("basis", 0, to=[0, 1]), "false"),
+    "more fixed points": ("fixed-set", lambda v: v[0][S]["groups"][0].__setitem__(1, 5), "false"),
+    "fixed points of the whole group": ("fixed-set", lambda v: v[0][S]["generators"].append([2, 3, 4, 5, 1]), "block"),
+    "a quotient that is a sphere no more": ("orbit-space", _state("groups", to=[[0, 1, []], [1, 2, []]]), "false"),
+    "the quotient by another group": ("orbit-space", _state("generators", to=[[1, 4, 3, 2]]), "cycle"),
+    "a quotient on cells where the action is not free": ("orbit-space", lambda v: v[1]["basis"].pop(), "degrees"),
+    "a torus for a Klein bottle": ("free-orbit-space", _state("groups", to=[[0, 1, []], [1, 2, []]]), "false"),
+    "an orientation": ("surface", lambda v: v[0][S].update(orientable=1 - v[0][S]["orientable"]), "false"),
+    "true as orientable": ("surface", _state("orientable", to=True), "false"),
+    "a boundary": ("surface", lambda v: v[0][S].update(boundary=v[0][S]["boundary"] + 1), "false"),
+    "another Euler characteristic": ("surface", lambda v: v[0][S].update(euler=v[0][S]["euler"] + 2), "false"),
+    "a graph as a surface": ("surface", _state("facets", to=[[1], [2], [3], [4]]), "no-surface"),
+    "three discs at an edge": (
+        "surface",
+        lambda v: v[0][S].update(facets=[[1, 2], [1, 3], [1, 4]], generators=[]),
+        "no-surface",
+    ),
+    "two spheres at a point": (
+        "surface",
+        lambda v: v[0][S].update(facets=[[1, 2], [3, 4]], generators=[]),
+        "no-surface",
+    ),
+    "a branch point too many": ("branching", _state("orbits", to=[[5, 3]]), "false"),
+    "branch points on a line": ("branching", _state("generators", to=[[1, 5, 4, 3, 2]]), "not-isolated"),
+    "a facet of a shelling twice": (
+        "shelling",
+        lambda v: v[1]["order"].__setitem__(0, v[1]["order"][1]),
+        "shelling",
+    ),
+    "a shelling that falls apart": (
+        "shelling",
+        lambda v: v[1].update(order=[[1, 2], [3, 4], [2, 3], [4, 5], [1, 5]]),
+        "shelling",
+    ),
+    "a path that is no sphere": (
+        "shelling",
+        lambda v: (v[0][S].update(facets=[[1, 2], [2, 3]]), v[1].update(order=[[1, 2], [2, 3]])),
+        "shelling",
+    ),
+    "two circles": (
+        "shelling",
+        lambda v: (
+            v[0][S].update(facets=(f := [[1, 2], [1, 3], [2, 3], [4, 5], [4, 6], [5, 6]]), vertices=6),
+            v[1].update(order=f),
+        ),
+        "shelling",
+    ),
+    "an orbit too many": ("orbit-count", _state("orbits", to=9), "false"),
+    "a primitive orbit too many": ("orbit-count", _state("primitive", to=8), "false"),
+    "another content": ("orbit-count-by-content", _state("content", to=[1, 4]), "false"),
+    "a content of three colours": ("orbit-count-by-content", _state("content", to=[1, 2, 2]), "statement"),
+    "an identity that is none": ("count-identity", _state("right", to="lyndon(n, 2)"), "false"),
+    "an identity that fails at the end": ("count-identity", _state("left", to="necklaces(n, 2) + n // 6"), "false"),
+    "a range without a number": ("count-identity", _state("last", to=0), "statement"),
+    "an expression that calls for trouble": ("count-identity", _state("left", to="exit(n, 2)"), "expression"),
+    "an expression with an attribute": ("count-identity", _state("left", to="n.real"), "expression"),
+    "an expression with a lambda": ("count-identity", _state("left", to="(lambda: n)()"), "expression"),
+    "an expression that cannot be read": ("count-identity", _state("left", to="n +"), "expression"),
+    "a truth value in an expression": ("count-identity", _state("left", to="n * True"), "expression"),
+    "a fraction": ("count-identity", _state("left", to="n / 1"), "expression"),
+    "a division by zero": ("count-identity", _state("left", to="n // 0"), "expression"),
+    "a huge power": ("count-identity", _state("left", to="9 ** 9 ** 9"), "expression"),
+    "a name that is bound in a sum only": ("count-identity", _state("left", to="d"), "expression"),
+}
+CASES |= SYMMETRY_CASES
+
+
+def _shorten(values: Values, place: int) -> None:
+    """Leave a class out of a claim about a character, everywhere."""
+    statement = values[0][S]
+    for key in ("elements", "values"):
+        del statement[key][place]
+    for function in statement["functions"]:
+        del function[place]
+
+
 @pytest.mark.parametrize("name", CASES)
 def test_a_falsehood_is_rejected(name: str) -> None:
     claim, edit, code = CASES[name]
