@@ -336,7 +336,7 @@ class Pair:
 
     def __init__(self, raw: object, budget: Budget) -> None:
         self.raw = raw
-        self.shapes: list[Shape] = []
+        self.shapes: list[Shape]  # not there before `split` for a pair that lists its cells, so that none is overlooked
         if type(raw) is str:
             self.cells, self.shapes = named_pair(raw)
             self.text = re.sub("(?<=[DSP])[0-9]+", lambda digits: raised(int(digits[0])), raw).replace(", ", ",")
@@ -434,11 +434,11 @@ def group_text(group: Group) -> str:
 # ---- the space: faces, blocks up to relabelling, cells of the whole product ------------------------------------------
 
 
-def face_masks(statement: Statement, budget: Budget) -> Faces:
-    """Return the faces of K as ascending bit masks, bit i for vertex i + 1, as far as their size matters."""
+def face_masks(statement: Statement, budget: Budget, whole: bool = False) -> Faces:
+    """Return the faces of K as ascending bit masks, bit i for vertex i + 1, as far as their size matters, or all."""
     least = min((degree for pair in statement.pairs for degree, outside, _ in pair.cells if outside), default=1)
     longest = max(map(len, statement.facets))
-    sizes = range(min(longest, statement.top // least if least else longest) + 1)
+    sizes = range(min(longest, longest if whole or not least else statement.top // least) + 1)
     masks: list[set[int]] = [set() for _ in sizes]
     for facet in statement.facets:
         for size in sizes[: len(facet) + 1]:
@@ -632,6 +632,8 @@ class Chambers(Space):
             budget.spend("cells", len(values))
             values += [value ^ column for value in values] if column not in values else []
         values.sort()
+        for facet in statement.facets:  # also where faces as large as this do not matter for the homology
+            self.reduced(sum(1 << vertex - 1 for vertex in facet))
         self.pivots: dict[int, list[tuple[int, int, int]]] = {}
         cells: list[list[tuple[int, int]]] = []
         for size, masks in enumerate(face_masks(statement, budget)):
@@ -916,7 +918,7 @@ def find_summands(statement: Statement, lines: Lines, budget: Budget) -> None:
         for pair, proof in zip(unsplit.values(), proofs, strict=True):
             pair.split(proof, budget)
     for pair in statement.pairs:
-        pair.shapes = unsplit[pair.text].shapes if pair.text in unsplit else pair.shapes
+        pair.shapes = unsplit.get(pair.text, pair).shapes
         if statement.kind == "smash":  # the first summand of a pair with a name is its base point
             pair.shapes = pair.shapes[1:]
 
@@ -1415,8 +1417,8 @@ def prove_fixed_set(statement: Statement, lines: Lines, budget: Budget) -> Prove
         elif mask not in whole:
             whole[mask] = statement.pairs[vertex - 1]
     halves = list(whole)
-    level = face_masks(statement, budget)
-    invariant = [mask for masks in level for mask in masks if all(moved(mask, g) == mask for g in generators)]
+    every = [mask for masks in face_masks(statement, budget, whole=True) for mask in masks]
+    invariant = [mask for mask in every if all(moved(mask, g) == mask for g in generators)]
     faces = [mask ^ centre for mask in invariant if mask & centre == centre]
     if not faces:
         return stated_groups(statement, {})
@@ -1424,6 +1426,7 @@ def prove_fixed_set(statement: Statement, lines: Lines, budget: Budget) -> Prove
     fixed = copy(statement)
     fixed.vertices, fixed.pairs, fixed.kind = len(halves), list(whole.values()), "homology"
     fixed.facets = sorted([place for place, half in enumerate(halves, 1) if mask & half] for mask in top)
+    find_summands(fixed, lines, budget)
     return stated_groups(statement, sum_of_blocks(fixed, lines, budget))
 
 
@@ -1437,7 +1440,7 @@ class OrbitSpace(Space):
 
     def __init__(self, statement: Statement, budget: Budget, chains: bool = False) -> None:
         intervals = [tuple(pair.cells) for pair in statement.pairs]
-        words = Words(face_masks(statement, budget), intervals, LARGEST, budget)
+        words = Words(face_masks(statement, budget, whole=True), intervals, LARGEST, budget)
         self.group = group_of(statement, budget)
         budget.spend("cells", sum(words.sizes) * len(self.group))
         images = {word: [act(word, g, intervals) for g in self.group] for level in words.cells for word in level}
@@ -1593,6 +1596,7 @@ def prove_orbit_count(statement: Statement, _: Lines, budget: Budget) -> Proved:
         "colours",
     )
     group = group_of(statement, budget)
+    require(all(to > 0 for element in group for to in element), "symmetry", "elements have no signs here")
 
     def blocks(element: Element) -> frozenset[frozenset[int]]:
         return frozenset(frozenset(orbit(v, lambda w: [element[w - 1]])) for v in range(1, statement.vertices + 1))

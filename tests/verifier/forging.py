@@ -86,6 +86,9 @@ CLAIMS: dict[str, Claim[Any]] = {
     "action": ActionClaim(disc_product(polygon(4), 1), 1, (2, 3, 4, 1)),
     "fixed-set": FixedSetClaim(disc_product(polygon(5), 1), generators=(REFLECTION,)),
     "fixed-set-with-signs": FixedSetClaim(disc_product(polygon(4), 1), generators=((-1, 2, 3, 4),)),
+    "fixed-set-of-own-pair": FixedSetClaim(
+        PolyhedralProduct(build("points", m=3), (DEGREE_TWO,) * 3), generators=((2, 1, 3),)
+    ),
     "orbit-space": OrbitSpaceClaim(polygon(4), ((2, 3, 4, 1),)),
     "free-orbit-space": OrbitSpaceClaim(polygon(4), ((-1, -2, -3, -4),)),
     "surface": SurfaceClaim(polygon(4), ((1, 4, 3, 2),)),

@@ -6,6 +6,11 @@ from typing import Any
 
 import pytest
 
+from certify.claims import RealToricClaim
+from certify.claims.fixed_sets import FixedSetClaim
+from certify.claims.quotients import OrbitSpaceClaim
+from certify.simplicial.families import simplex, simplex_boundary
+from tests.helpers import certificate_of, disc_product
 from tests.verifier.forging import Edit, Values, forged, genuine, judged, signed, values_of
 
 S = "statement"
@@ -277,6 +282,11 @@ SYMMETRY_CASES: dict[str, tuple[str, Edit, str]] = {
     "another matrix": ("action", _state("matrix", to=[[0, 1], [1, 0]]), "false"),
     "another basis": ("action", _state("basis", 0, to=[0, 1]), "false"),
     "more fixed points": ("fixed-set", lambda v: v[0][S]["groups"][0].__setitem__(1, 5), "false"),
+    "fixed points of an own pair without its splitting": (
+        "fixed-set-of-own-pair",
+        _both(lambda v: v[0][S].update(groups=[]), lambda v: [v.pop(1) for _ in v[2:]]),
+        "keys",
+    ),
     "fixed points of the whole group": ("fixed-set", lambda v: v[0][S]["generators"].append([2, 3, 4, 5, 1]), "block"),
     "a quotient that is a sphere no more": ("orbit-space", _state("groups", to=[[0, 1, []], [1, 2, []]]), "false"),
     "the quotient by another group": ("orbit-space", _state("generators", to=[[1, 4, 3, 2]]), "cycle"),
@@ -324,6 +334,7 @@ SYMMETRY_CASES: dict[str, tuple[str, Edit, str]] = {
     ),
     "an orbit too many": ("orbit-count", _state("orbits", to=9), "false"),
     "a primitive orbit too many": ("orbit-count", _state("primitive", to=8), "false"),
+    "signs on colourings": ("orbit-count", _state("generators", to=[[-2, 3, 4, 5, 1]]), "symmetry"),
     "another content": ("orbit-count-by-content", _state("content", to=[1, 4]), "false"),
     "a content of three colours": ("orbit-count-by-content", _state("content", to=[1, 2, 2]), "statement"),
     "an identity that is none": ("count-identity", _state("right", to="lyndon(n, 2)"), "false"),
@@ -374,6 +385,33 @@ def test_faces_of_a_real_toric_space_are_not_left_out_in_claims_about_some_degre
     values[1] = {"basis": [{}, {}]}
     assert corners < edges
     assert judged(signed(values))["reason"] == "degrees"
+
+
+def test_a_real_toric_space_is_one_also_where_its_large_faces_do_not_matter() -> None:
+    """ker λ = {000, 111} fixes a point of the cube D³; on its boundary it acts freely, with ℝP² as the quotient."""
+    values = values_of(certificate_of(RealToricClaim(simplex_boundary(3), ("101", "011"), degrees=(1,))))
+    assert judged(signed(values))["verdict"] == "accepted"
+    values[0]["statement"]["facets"] = [[1, 2, 3]]
+    assert judged(signed(values))["reason"] == "not-injective"
+
+
+def test_a_fixed_set_has_all_faces_also_in_claims_about_low_degrees() -> None:
+    """The rotation of three vertices fixes the diagonal of the cube D³, which is in one piece."""
+    claim = FixedSetClaim(disc_product(simplex(3), 1), degrees=(0,), generators=((2, 3, 1),))
+    values = values_of(certificate_of(claim))
+    assert values[0]["statement"]["groups"] == [[0, 1, []]]
+    assert judged(signed(values))["verdict"] == "accepted"
+
+
+def test_an_orbit_space_has_all_cells_also_in_claims_about_low_degrees() -> None:
+    """D³ by x → -x is a cone; without its inside there would be ℝP², with ℤ/2 in degree 1."""
+    values = values_of(certificate_of(OrbitSpaceClaim(simplex(3), ((-1, -2, -3),), degrees=(1,))))
+    assert values[0]["statement"]["groups"] == []
+    assert judged(signed(values))["verdict"] == "accepted"
+    sphere = values_of(certificate_of(OrbitSpaceClaim(simplex_boundary(3), ((-1, -2, -3),), degrees=(1,))))
+    assert sphere[0]["statement"]["groups"] == [[1, 0, [2]]]
+    sphere[0]["statement"]["facets"] = [[1, 2, 3]]
+    assert judged(signed(sphere))["verdict"] == "rejected"
 
 
 def test_the_records_of_one_claim_do_not_prove_another() -> None:
