@@ -1484,12 +1484,15 @@ class OrbitSpace(Space):
         super().__init__(kept, self.ends)
 
     def ends(self, cell: Any) -> list[tuple[Any, int]]:
-        """Return d of a cell in the cells that stand for orbits; one may occur twice."""
+        """Return d of a cell in the cells that stand for orbits, each once."""
         if self.chains:
             left_out = [(cell[:i] + cell[i + 1 :], (-1) ** i) for i in range(len(cell)) if len(cell) > 1]
         else:
             left_out = self.words.leibniz(cell)
-        return [(self.first[end][0], sign * self.first[end][1]) for end, sign in left_out]
+        terms: Counter[Any] = Counter()
+        for end, sign in left_out:
+            terms[self.first[end][0]] += sign * self.first[end][1]
+        return [(end, coefficient) for end, coefficient in terms.items() if coefficient]
 
 
 def prove_orbit_space(statement: Statement, lines: Lines, budget: Budget) -> Proved:

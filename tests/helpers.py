@@ -33,6 +33,7 @@ __all__ = [
     "certificate_of",
     "certified_groups",
     "certified_homology",
+    "certified_statement",
     "cohomology",
     "disc_dimensions",
     "disc_product",
@@ -126,6 +127,19 @@ def certified_groups(claim: GroupsClaim[Key], **fields: Any) -> dict[tuple[int, 
     The statement must be about the complex of the claim and have these fields besides.
     """
     return accepted_groups(certificate_of(claim), _about(claim.base) | {"kind": claim.kind} | fields)
+
+
+def certified_statement(claim: Claim[Any]) -> dict[str, Any]:
+    """Prove, write, let the verifier check the file, and return the accepted statement, which must be the claim's."""
+    certificate = certificate_of(claim)
+    with TemporaryDirectory() as folder:
+        path = Path(folder) / "claim.cert.jsonl"
+        path.write_bytes(certificate)
+        report = examined(path)
+    assert report["verdict"] == "accepted", report
+    statement: dict[str, Any] = json.loads(certificate.splitlines()[0])["statement"]
+    assert claim.question().items() <= statement.items()
+    return statement
 
 
 def _about(k: SimplicialComplex) -> dict[str, Any]:

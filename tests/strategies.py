@@ -10,6 +10,7 @@ from hypothesis import strategies as st
 from certify.exact import AbelianGroup, BasedComplex
 from certify.products import PolyhedralProduct, parse_pair
 from certify.simplicial import Label, SimplicialComplex, build, face_of, join
+from certify.symmetry.elements import Element, moved_mask, orbit
 from tests.helpers import disc_dimensions
 
 __all__ = [
@@ -31,6 +32,7 @@ __all__ = [
     "relabelled_products",
     "sphere_products",
     "spheres",
+    "symmetric_complexes",
     "unimodular_matrices",
 ]
 
@@ -290,3 +292,21 @@ def relabelled_products(draw: st.DrawFn) -> tuple[PolyhedralProduct, PolyhedralP
     labels = [space.complex.labels[vertex] for vertex in order]
     moved = SimplicialComplex.from_faces(labels, faces)
     return space, PolyhedralProduct(moved, tuple(space.pairs[vertex] for vertex in order))
+
+
+# -- symmetries ---------------------------------------------------------------------------------
+
+
+@st.composite
+def symmetric_complexes(
+    draw: st.DrawFn, max_vertices: int = 5, signs: bool = False
+) -> tuple[SimplicialComplex, tuple[Element, ...]]:
+    """Draw a complex with one or two symmetries of it, which may have signs; faces are drawn, and all their images."""
+    m = draw(st.integers(1, max_vertices))
+    generators = draw(st.lists(st.permutations(range(1, m + 1)).map(tuple), min_size=1, max_size=2))
+    drawn = draw(st.lists(st.integers(0, 2**m - 1), max_size=3))
+    masks = {0} | {mask for start in drawn for mask in orbit(start, lambda x: [moved_mask(x, g) for g in generators])}
+    if signs:
+        flips = st.lists(st.sampled_from((1, -1)), min_size=m, max_size=m)
+        generators = [tuple(s * to for s, to in zip(draw(flips), g, strict=True)) for g in generators]
+    return SimplicialComplex.from_masks(range(1, m + 1), sorted(masks)), tuple(generators)

@@ -9,7 +9,7 @@ import pytest
 from certify.claims import RealToricClaim
 from certify.claims.fixed_sets import FixedSetClaim
 from certify.claims.quotients import OrbitSpaceClaim
-from certify.simplicial.families import simplex, simplex_boundary
+from certify.simplicial.families import points, simplex, simplex_boundary
 from tests.helpers import certificate_of, disc_product
 from tests.verifier.forging import Edit, Values, forged, genuine, judged, signed, values_of
 
@@ -401,6 +401,21 @@ def test_a_fixed_set_has_all_faces_also_in_claims_about_low_degrees() -> None:
     values = values_of(certificate_of(claim))
     assert values[0]["statement"]["groups"] == [[0, 1, []]]
     assert judged(signed(values))["verdict"] == "accepted"
+
+
+def test_an_edge_that_becomes_a_loop_has_no_boundary() -> None:
+    """(D¹, S⁰) on one vertex is an interval; exchanging its ends by x → -x on a second, ghost vertex makes no loop.
+
+    Two edges of the square modulo the half turn do: their ends are one point, and cancel.
+    """
+    half_turn = (-1, -2)
+    values = values_of(certificate_of(OrbitSpaceClaim(points(2), (half_turn,))))
+    assert values[0]["statement"]["groups"] == [[0, 1, []], [1, 1, []]]
+    assert judged(signed(values))["verdict"] == "accepted"
+    values[0]["statement"]["groups"] = [[0, 1, []]]
+    for basis in ([{"cycles": [[0, 1]]}, {"matched": [0, 1]}], [{}, {"matched": [0, 1]}]):
+        values[1]["basis"] = basis
+        assert judged(signed(values))["verdict"] == "rejected"
 
 
 def test_an_orbit_space_has_all_cells_also_in_claims_about_low_degrees() -> None:
