@@ -53,8 +53,12 @@ class Journal:
             self._file: IO[bytes] = open(path, "a+b", buffering=0)  # noqa: SIM115 - closed by __exit__
         except OSError as error:
             raise self._refusal(error) from error
-        self._lock()
-        self._begin()
+        try:
+            self._lock()
+            self._begin()
+        except BaseException:
+            self._file.close()
+            raise
 
     def __enter__(self) -> Journal:
         """Return the journal itself."""

@@ -22,6 +22,8 @@ Progress = Callable[[int, int], None]
 
 _CHUNK = 64
 _AHEAD = 4
+_PATIENCE = 1.0
+_GONE = "those who computed are gone; with --state, what is finished is kept for later"
 
 
 @dataclass(frozen=True, slots=True)
@@ -35,11 +37,14 @@ class Workers:
         How many tasks it solves at the same time.
     lost : tuple of types of exceptions
         What is raised when these processes are gone for good.
+    alive : callable
+        Tells whether they may still answer; it is asked now and then while somebody waits.
     """
 
     executor: Executor
     number: int
     lost: tuple[type[Exception], ...] = ()
+    alive: Callable[[], bool] = lambda: True
 
 
 @dataclass(frozen=True, slots=True)
@@ -146,12 +151,22 @@ def _solved_by(workers: Workers, tasks: Iterator[Task]) -> Iterator[tuple[Task, 
             if not waiting:
                 return
             chunk, future = waiting.popleft()
-            yield from zip(chunk, future.result(), strict=True)
+            yield from zip(chunk, _result(future, workers), strict=True)
     except workers.lost as error:
-        raise LimitReached("those who computed are gone; with --state, what is finished is kept for later") from error
+        raise LimitReached(_GONE) from error
     finally:
         for _, future in waiting:
             future.cancel()
+
+
+def _result(future: Future[list[Solved]], workers: Workers) -> list[Solved]:
+    """Return what the workers have found, however long it takes while they are alive."""
+    while True:
+        try:
+            return future.result(timeout=_PATIENCE)
+        except TimeoutError as error:
+            if not workers.alive():
+                raise LimitReached(_GONE) from error
 
 
 def _solve_all(tasks: list[Task]) -> list[Solved]:

@@ -64,7 +64,9 @@ def cluster(address: str) -> Iterator[Workers]:
         found = "no Dask; install certify with the extra cluster"
         raise BadInput(where="the cluster", expected="dask.distributed", found=found) from error
     # What it logs about lost connections is told in one sentence by whoever waits for the work.
-    logging.getLogger("distributed").setLevel(logging.CRITICAL)
+    for name in ("tornado.application", *logging.root.manager.loggerDict):
+        if name.startswith(("distributed", "tornado")):
+            logging.getLogger(name).setLevel(logging.CRITICAL + 1)
     try:
         client = Client(address, timeout=_SECONDS, set_as_default=False)
     except (OSError, ValueError) as error:
@@ -73,7 +75,12 @@ def cluster(address: str) -> Iterator[Workers]:
     try:
         client.wait_for_workers(1, timeout=_SECONDS)
         number = sum(client.nthreads().values())
-        yield Workers(client.get_executor(pure=False), max(number, 1), lost=(CancelledError, KilledWorker))
+        yield Workers(
+            client.get_executor(pure=False),
+            max(number, 1),
+            lost=(CancelledError, KilledWorker),
+            alive=lambda: client.status == "running",
+        )
     except TimeoutError as error:
         raise BadInput(where="the cluster", expected="at least one worker", found="none") from error
     finally:
