@@ -2,18 +2,24 @@
 
 from __future__ import annotations
 
+from collections import Counter
 from itertools import combinations
+from math import prod
 
 import networkx as nx
+from hypothesis import assume
 from hypothesis import strategies as st
 
+from certify.errors import BadInput
 from certify.exact import AbelianGroup, BasedComplex
-from certify.products import PolyhedralProduct, parse_pair
+from certify.products import Pair, PolyhedralProduct, parse_pair
+from certify.products.real_toric import RealToricSpace
 from certify.simplicial import Label, SimplicialComplex, build, face_of, join
 from certify.symmetry.elements import Element, moved_mask, orbit
 from tests.helpers import disc_dimensions
 
 __all__ = [
+    "NAMED_PAIRS",
     "based_complexes",
     "complexes",
     "complexes_with_face",
@@ -28,7 +34,10 @@ __all__ = [
     "disc_products_with_torsion",
     "graphs",
     "integer_matrices",
+    "mixed_products",
+    "own_pairs",
     "products_with_degrees",
+    "real_toric_spaces",
     "relabelled_products",
     "sphere_products",
     "spheres",
@@ -310,3 +319,81 @@ def symmetric_complexes(
         flips = st.lists(st.sampled_from((1, -1)), min_size=m, max_size=m)
         generators = [tuple(s * to for s, to in zip(draw(flips), g, strict=True)) for g in generators]
     return SimplicialComplex.from_masks(range(1, m + 1), sorted(masks)), tuple(generators)
+
+
+# -- pairs --------------------------------------------------------------------------------------
+
+NAMED_PAIRS = (
+    *("(D1, S0)", "(D2, S1)", "(D3, S2)", "(S1, *)", "(S2, *)", "(CP1, *)", "(CP2, *)", "(RP1, *)", "(RP2, *)"),
+    *("(RP3, *)", "(cone 1, 1)", "(cone 2, 2)", "(cone 3, 3)", "(P2(3), *)", "(P3(2), *)"),
+)
+"""A pair of every form that has a name."""
+
+
+@st.composite
+def own_pairs(draw: st.DrawFn) -> Pair:
+    """Draw a pair by its cells: elementary pieces on both sides of A, in another basis that respects A.
+
+    Pieces are single cells, and e and t with d e = n t inside A, outside, or across. Adding multiples of earlier cells
+    of the same degree to later ones, those of A to any, leaves d d = 0 and A closed, but hides the pieces.
+    """
+    pieces = draw(st.lists(st.tuples(st.integers(0, 2), st.integers(0, 3), st.integers(1, 3)), min_size=1, max_size=3))
+    cells: list[tuple[int, bool, dict[int, int]]] = [(0, False, {})]
+    for degree, sides, n in pieces:
+        if sides == 3:
+            cells.append((degree, draw(st.booleans()), {}))
+        else:
+            inner, outer = ((False, False), (True, True), (False, True))[sides]
+            cells.append((degree, inner, {}))
+            cells.append((degree + 1, outer, {len(cells) - 1: n}))
+    return Pair.from_cells(_mixed(draw, cells))
+
+
+def _mixed(draw: st.DrawFn, cells: list[tuple[int, bool, dict[int, int]]]) -> list[tuple[int, bool, dict[int, int]]]:
+    """Return the same complex in another basis: x' = x + c y for cells x, y of one degree, y in A if x is."""
+    order = sorted(range(len(cells)), key=lambda number: (cells[number][0], cells[number][1]))
+    place = {number: new for new, number in enumerate(order)}
+    moved = [
+        (cells[number][0], cells[number][1], {place[low]: n for low, n in cells[number][2].items()}) for number in order
+    ]
+    for _ in range(draw(st.integers(0, 4))):
+        x, y = draw(st.integers(0, len(moved) - 1)), draw(st.integers(0, len(moved) - 1))
+        c = draw(st.integers(-2, 2))
+        fits = x != y and moved[x][0] == moved[y][0] and moved[y][1] <= moved[x][1] and c
+        if not fits:
+            continue
+        # x' = x + c y: d x' = d x + c d y, and in boundaries x = x' - c y.
+        boundary = Counter(moved[x][2])
+        for cell, n in moved[y][2].items():
+            boundary[cell] += c * n
+        moved[x] = (moved[x][0], moved[x][1], {cell: n for cell, n in boundary.items() if n})
+        for number, (degree, outside, terms) in enumerate(moved):
+            if x in terms:
+                changed = Counter(terms)
+                changed[y] -= c * terms[x]
+                moved[number] = (degree, outside, {cell: n for cell, n in changed.items() if n})
+    return moved
+
+
+@st.composite
+def mixed_products(draw: st.DrawFn, max_vertices: int = 3, most_cells: int = 500) -> PolyhedralProduct:
+    """Draw a product of any pairs, with names and without, mostly different ones at different vertices."""
+    k = draw(complexes(max_vertices))
+    pair = st.sampled_from(NAMED_PAIRS).map(parse_pair) | own_pairs()
+    pairs = draw(st.lists(pair, min_size=k.vertex_count, max_size=k.vertex_count))
+    assume(prod(len(pair.cells) for pair in pairs) <= most_cells)
+    return PolyhedralProduct(k, tuple(pairs))
+
+
+@st.composite
+def real_toric_spaces(draw: st.DrawFn, max_vertices: int = 5) -> RealToricSpace:
+    """Draw a complex with a λ that is injective on its faces: rows are drawn, and unit rows added until it is."""
+    k = draw(complexes(max_vertices))
+    m = k.vertex_count
+    rows = draw(st.lists(st.integers(0, 2**m - 1), max_size=m + 1))
+    for vertex in range(m):
+        try:
+            return RealToricSpace(k, tuple(f"{row:0{m}b}" if m else "" for row in rows))
+        except BadInput:
+            rows = [*rows, 1 << vertex]
+    return RealToricSpace(k, tuple(f"{row:0{m}b}" if m else "" for row in rows))

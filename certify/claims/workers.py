@@ -13,7 +13,7 @@ from certify.errors import BadInput
 
 __all__ = ["cluster", "processes"]
 
-_SECONDS = 15
+_SECONDS = 10
 """How long a cluster has to answer the first time, and to get workers."""
 
 

@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Iterator, Sequence
 from itertools import combinations, product
 
-__all__ = ["Matrix", "boundary_matrices", "homology_from_factors"]
+__all__ = ["Matrix", "PairCells", "boundary_matrices", "homology_from_factors", "matrices_of_pairs"]
 
 Matrix = list[list[int]]
 Cell = tuple[str, ...]
@@ -72,3 +72,31 @@ def _boundary(cell: Cell, discs: Sequence[int]) -> Iterator[tuple[Cell, int]]:
     sign = -1 if _degree(first, discs[:1]) % 2 else 1
     for face, coefficient in _boundary(rest, discs[1:]):
         yield first + face, sign * coefficient
+
+
+PairCells = Sequence[tuple[int, bool, dict[int, int]]]
+"""The cells of a pair (X, A): degree, whether it is outside A, and boundary on the numbers of other cells."""
+
+
+def matrices_of_pairs(facets: Sequence[Sequence[int]], pairs: Sequence[PairCells]) -> tuple[list[int], list[Matrix]]:
+    """Return the same as `boundary_matrices` for any pairs; vertices are 0, 1, 2, …."""
+    faces = {
+        frozenset(face) for facet in facets for size in range(len(facet) + 1) for face in combinations(facet, size)
+    }
+    cells: dict[int, list[tuple[int, ...]]] = {}
+    for cell in product(*(range(len(pair)) for pair in pairs)):
+        if frozenset(i for i, letter in enumerate(cell) if pairs[i][letter][1]) in faces:
+            cells.setdefault(sum(pairs[i][letter][0] for i, letter in enumerate(cell)), []).append(cell)
+    sizes = [len(cells.get(degree, [])) for degree in range(max(cells, default=-1) + 1)]
+    matrices = []
+    for degree in range(len(sizes)):
+        rows = {cell: number for number, cell in enumerate(cells.get(degree - 1, []))}
+        matrix = [[0] * sizes[degree] for _ in rows]
+        for column, cell in enumerate(cells.get(degree, [])):
+            before = 0
+            for i, letter in enumerate(cell):
+                for end, coefficient in pairs[i][letter][2].items():
+                    matrix[rows[(*cell[:i], end, *cell[i + 1 :])]][column] += (-1) ** before * coefficient
+                before += pairs[i][letter][0]
+        matrices.append(matrix)
+    return sizes, matrices

@@ -13,8 +13,8 @@ from certify.claims.homology import Route
 from certify.products import PolyhedralProduct
 from certify.simplicial import build
 from tests.helpers import certified_homology, disc_dimensions, disc_product
-from tests.outside.dense import Matrix, boundary_matrices, homology_from_factors
-from tests.strategies import disc_products
+from tests.outside.dense import Matrix, PairCells, boundary_matrices, homology_from_factors, matrices_of_pairs
+from tests.strategies import disc_products, mixed_products
 
 both_routes = pytest.mark.parametrize("route", ["blocks", "cells"])
 
@@ -60,4 +60,22 @@ def test_against_the_smith_form_of_flint_where_there_is_torsion(pairs: list[int]
 @given(disc_products(max_vertices=3, max_n=4))
 def test_against_the_smith_form_of_sympy(space: PolyhedralProduct) -> None:
     sizes, matrices = boundary_matrices(space.complex.facets, disc_dimensions(space))
+    assert _ours(space, "blocks") == homology_from_factors(sizes, [_factors_by_sympy(matrix) for matrix in matrices])
+
+
+def _pairs(space: PolyhedralProduct) -> list[PairCells]:
+    return [[(cell.degree, cell.outside, dict(cell.boundary)) for cell in pair.cells] for pair in space.pairs]
+
+
+@pytest.mark.parametrize("route", ["blocks", "orbits", "cells"])
+@given(mixed_products())
+def test_any_pairs_against_the_smith_form_of_flint(route: Route, space: PolyhedralProduct) -> None:
+    sizes, matrices = matrices_of_pairs(space.complex.facets, _pairs(space))
+    assert _ours(space, route) == homology_from_factors(sizes, [_factors_by_flint(matrix) for matrix in matrices])
+
+
+@settings(max_examples=25)
+@given(mixed_products(most_cells=60))
+def test_any_pairs_against_the_smith_form_of_sympy(space: PolyhedralProduct) -> None:
+    sizes, matrices = matrices_of_pairs(space.complex.facets, _pairs(space))
     assert _ours(space, "blocks") == homology_from_factors(sizes, [_factors_by_sympy(matrix) for matrix in matrices])
