@@ -69,9 +69,11 @@ class Table:
 
     @contextmanager
     def at(self, *keys: str | int) -> Iterator[None]:
-        """Give faults that are found below, where sheets are unknown, this place in the table."""
+        """Give faults that are found below, where sheets are unknown, this place in the table; others know theirs."""
         try:
             yield
+        except KeyFault:
+            raise
         except BadInput as fault:
             raise self.fault(*keys, expected=fault.expected, found=fault.found) from fault
 

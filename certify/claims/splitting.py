@@ -7,6 +7,7 @@ from dataclasses import dataclass
 from typing import Any, ClassVar
 
 from certify.claims.base import Contribution, GroupsClaim, Sum, Task
+from certify.errors import BadInput
 from certify.exact import AbelianGroup, BasedComplex
 from certify.products import Block, PolyhedralProduct, block_classes, parse_pairs
 from certify.products.blocks import Choices
@@ -163,6 +164,17 @@ class SummandClaim(GroupsClaim[int]):
     groups: Mapping[int, AbelianGroup] | None = None
     route: str = "cells"
     kind: ClassVar[str] = "summand"
+
+    def __post_init__(self) -> None:
+        """Refuse vertices that are kept and out at once, and ones that form no face."""
+        if set(self.kept) & set(self.out):
+            twice = next(label for label in self.kept if label in self.out)
+            found = f"vertex {twice!r} in both"
+            raise BadInput(where="out", expected="vertices that are not kept as well", found=found)
+        self.complex.numbers(self.kept)
+        if not self.complex.is_face(self.out):
+            shown = plain_set(self.out)
+            raise BadInput(where="out", expected="vertices that form a face", found=f"{shown}, which do not")
 
     @property
     def base(self) -> SimplicialComplex:

@@ -159,6 +159,8 @@ def real_bott_manifold(matrix: Sequence[str]) -> RealToricSpace:
     >>> homology(real_bott_manifold(["01", "00"]))
     H_0 = ℤ, H_1 = ℤ ⊕ ℤ/2
     """
+    if isinstance(matrix, str) or not isinstance(matrix, Sequence):
+        raise BadInput(where="matrix", expected='a list of rows like ["01", "00"]', found=repr(matrix))
     n = len(matrix)
     for i, row in enumerate(matrix):
         good = isinstance(row, str) and len(row) == n and not set(row) - {"0", "1"} and "1" not in row[: i + 1]

@@ -159,24 +159,34 @@ def check_symmetries(elements: Iterable[Element], product: PolyhedralProduct) ->
     BadInput
         It names a face with its image, or a vertex.
     """
-    k, pairs = product.complex, product.pairs
     for element in elements:
-        shown = spell_cycles(element, k)
-        if sorted(map(abs, element)) != list(identity(k.vertex_count)):
-            raise BadInput(where="element", expected=f"images of all {k.vertex_count} vertices", found=f"{element}")
-        for mask in k.facet_masks():
-            image = moved_mask(mask, element)
-            if not any(image & facet == image for facet in k.facet_masks()):
-                expected = "a permutation that preserves K"
-                face, other = (_labels(k, part) for part in (mask, image))
-                raise BadInput(where=shown, expected=expected, found=f"the face {face} going to {other}, which is none")
-        for place, to in enumerate(element):
-            if pairs[place] != pairs[abs(to) - 1]:
-                ends = (f"{pairs[i].symbol} at {k.labels[i]}" for i in (place, abs(to) - 1))
-                raise BadInput(where=shown, expected="a permutation that preserves the pairs", found=" and ".join(ends))
-            if to < 0 and pairs[place].name != "(D1, S0)":
-                found = f"one on {pairs[place].symbol} at {k.labels[place]}"
-                raise BadInput(where=shown, expected="changes of sign on (D1, S0) only", found=found)
+        if sorted(map(abs, element)) != list(identity(product.complex.vertex_count)):
+            expected = f"images of all {product.complex.vertex_count} vertices"
+            raise BadInput(where="element", expected=expected, found=f"{element}")
+        _check_faces(element, product.complex)
+        _check_pairs(element, product)
+
+
+def _check_faces(element: Element, k: SimplicialComplex) -> None:
+    facets = k.facet_masks()
+    for mask in facets:
+        image = moved_mask(mask, element)
+        if not any(image & facet == image for facet in facets):
+            face, other = (_labels(k, part) for part in (mask, image))
+            found = f"{spell_cycles(element, k)}, by which the face {face} goes to {other}, which is none"
+            raise BadInput(where="element", expected="a permutation that preserves K", found=found)
+
+
+def _check_pairs(element: Element, product: PolyhedralProduct) -> None:
+    k, pairs = product.complex, product.pairs
+    for place, to in enumerate(element):
+        if pairs[place] != pairs[abs(to) - 1]:
+            ends = (f"{pairs[i].symbol} at {k.labels[i]}" for i in (place, abs(to) - 1))
+            found = f"{spell_cycles(element, k)}, which exchanges {' and '.join(ends)}"
+            raise BadInput(where="element", expected="a permutation that preserves the pairs", found=found)
+        if to < 0 and pairs[place].name != "(D1, S0)":
+            found = f"{spell_cycles(element, k)}, with one on {pairs[place].symbol} at {k.labels[place]}"
+            raise BadInput(where="element", expected="changes of sign on (D1, S0) only", found=found)
 
 
 def _labels(k: SimplicialComplex, mask: int) -> str:

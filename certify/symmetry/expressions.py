@@ -85,7 +85,7 @@ def values_of(text: str, first: int, last: int) -> list[int]:
         try:
             # The tree has been checked: it calls nothing but these.
             values.append(int(eval(code, known | {"n": n})))
-        except (TypeError, ValueError, ArithmeticError) as error:
+        except (NameError, TypeError, ValueError, ArithmeticError) as error:
             raise _fault(f"{error} for n = {n}") from error
     return values
 

@@ -20,7 +20,7 @@ TEXT = PAGE.read_text(encoding="utf-8")
 def examples() -> str:
     """Return all examples as one sheet; the first one has a title and stands alone."""
     first, *rest = re.findall(r"^```toml\n(.*?)^```$", TEXT, re.M | re.S)
-    return first + "\n".join(rest)
+    return "\n".join([str(first), *map(str, rest)])
 
 
 def test_every_example_is_proved(certify: Certify, tmp_path: Path) -> None:
