@@ -35,7 +35,7 @@ _EPILOG = """For example:
   certify compute --facets "1 2; 2 3; 3 4; 4 1" --pair "(D1, S0)"
   certify compute rig.txt --pair "(D2, S1)" --degrees 3,4 --json
   certify compute --complex '{family = "polygon", n = 20}' --pair "(D1, S0)" --route orbits
-  certify compute --complex 'a = {graph6 = "Dhc", as = "clique"}' \
+  certify compute --complex 'a = {graph6 = "Dhc", as = "clique"}' \\
       --complex '{operation = "join", of = ["a", "a"]}' --pair "(D1, S0)"
 """
 

@@ -173,6 +173,74 @@ def test_labels_that_are_no_text_are_refused(certify: Certify, tmp_path: Path) -
     assert (ended.code, ended.out, ended.err) == (3, "", message)
 
 
+def test_a_complex_may_be_defined_as_in_a_sheet(certify: Certify) -> None:
+    """The join of two square rings is the boundary of a cross-polytope; the product is a torus times a torus."""
+    join = ["--complex", 'a = {family = "polygon", n = 4}', "--complex", '{operation = "join", of = ["a", "a"]}']
+    ended = certify("compute", *join, "--pair", "(D1, S0)", "--json")
+    ranks = {degree: group["rank"] for degree, group in ended.json["homology"].items()}
+    assert (ended.code, ranks) == (0, {"0": 1, "1": 4, "2": 6, "3": 4, "4": 1})
+
+
+def test_the_route_of_orbits_is_one_of_three(certify: Certify, tmp_path: Path) -> None:
+    ring = ["--complex", '{family = "polygon", n = 9}', "--pair", "(D1, S0)"]
+    found = [certify("compute", *ring, "--route", route).out for route in ("blocks", "orbits", "cells")]
+    assert found[0] == found[1] == found[2]
+    assert "ℤ⁶⁴²" in found[0]
+    path = tmp_path / "ring.cert.jsonl"
+    assert certify("compute", *ring, "--route", "orbits", "--certificate", path).code == 0
+    assert examined(path)["verdict"] == "accepted"
+
+
+@pytest.mark.parametrize(
+    ("name", "text", "options"),
+    [
+        ("k.g6", "Cl\n", ["--as", "clique"]),
+        ("k.edges", "1 2\n2 3\n3 4\n4 1\n", ["--as", "clique"]),
+        ("k.txt", "1 2\n2 3\n3 4\n4 1\n", ["--as", "clique"]),
+    ],
+)
+def test_a_graph_may_stand_in_a_file(
+    certify: Certify, tmp_path: Path, name: str, text: str, options: list[str]
+) -> None:
+    """The square as a graph: its clique complex is the ring of four, whose product with intervals is a torus."""
+    path = tmp_path / name
+    path.write_text(text, encoding="utf-8")
+    ended = certify("compute", path, "--pair", "(D1, S0)", "--json", *options)
+    assert {degree: group["rank"] for degree, group in ended.json["homology"].items()} == {"0": 1, "1": 2, "2": 1}
+
+
+@pytest.mark.parametrize(
+    ("arguments", "message"),
+    [
+        (
+            ["--complex", "{family = ", "--pair", "(D1, S0)"],
+            "Invalid value for '--complex': definition 1: expected a table of TOML, found a fault "
+            "(Invalid value (at end of document))",
+        ),
+        (
+            ["--complex", 'a = {family = "torus"}\nb = 1', "--pair", "(D1, S0)"],
+            "Invalid value for '--complex': definition 1: expected one table of TOML, found 2",
+        ),
+        (
+            ["--complex", '{operation = "join", of = ["a", "b"]}', "--pair", "(D1, S0)"],
+            "Invalid value for '--complex': complex K, key of, item 1: "
+            "expected a complex that stands above this one (none does), found 'a'",
+        ),
+        (
+            ["--facets", "1 2", "--as", "clique", "--pair", "(D1, S0)"],
+            "--as belongs to a FILE with a graph.",
+        ),
+        (
+            ["k.g6", "--as", "cliques", "--pair", "(D1, S0)"],
+            'Invalid value for \'--as\': as: expected "clique" or "independence" or "nested-sets", found \'cliques\'',
+        ),
+    ],
+)
+def test_a_wrong_definition_is_refused_in_one_sentence(certify: Certify, arguments: list[str], message: str) -> None:
+    ended = certify("compute", *arguments)
+    assert (ended.code, ended.out, ended.err) == (2, "", f"certify: {message} {HELP}\n")
+
+
 def test_a_disk_that_fills_leaves_no_certificate(
     certify: Certify, tmp_path: Path, monkeypatch: pytest.MonkeyPatch
 ) -> None:
