@@ -18,7 +18,6 @@ and every total is counted anew. Claims are accepted in one place only, at the e
 from __future__ import annotations
 
 import argparse
-import ast
 import hashlib
 import io
 import json
@@ -30,7 +29,7 @@ import zlib
 from collections import Counter
 from collections.abc import Callable, Iterable, Iterator, Sequence
 from copy import copy
-from functools import partial, reduce
+from functools import lru_cache, partial, reduce
 from heapq import heapify, heappop, heappush
 from itertools import combinations, pairwise, product, zip_longest
 from math import comb, gcd, lcm, prod
@@ -39,6 +38,7 @@ from operator import and_, floordiv, ge, mul, sub, xor
 
 TYPE_CHECKING = False
 if TYPE_CHECKING:  # for readers with a type checker only
+    import ast
     from typing import Any
 
 FORMAT = 1
@@ -148,15 +148,19 @@ def refuse_float(text: str) -> object:
     raise Failure("number", f"{text[:40]} is not an integer")
 
 
+ENCODER = json.JSONEncoder(sort_keys=True, separators=(",", ":"), ensure_ascii=False)
+DECODER = json.JSONDecoder(parse_float=refuse_float, parse_constant=refuse_float)
+
+
 def canonical(value: object) -> bytes:
     """Return the one spelling of a value: keys sorted, no spaces, UTF-8."""
-    return json.dumps(value, sort_keys=True, separators=(",", ":"), ensure_ascii=False).encode("utf-8")
+    return ENCODER.encode(value).encode("utf-8")
 
 
 def value_of(line: bytes) -> object:
     """Return the JSON value of a line that is spelled canonically."""
     try:
-        value = json.loads(line.decode("utf-8"), parse_float=refuse_float, parse_constant=refuse_float)
+        value = DECODER.decode(line.decode("utf-8"))
         spelled = canonical(value) + b"\n"
     except (RecursionError, ValueError) as error:
         raise Failure("json", "the line is not JSON in UTF-8, or nested too deeply") from error
@@ -603,13 +607,13 @@ class Words(Space):
         cells: list[list[bytes]] = [[] for _ in range(longest + 1)]
         for _, word, degree in sorted(words):
             cells[degree].append(word)
-        super().__init__(cells, self.leibniz)
+        super().__init__(cells, lru_cache(1 << 14)(self.leibniz))  # a cell occurs in several vectors, mostly soon
 
     def leibniz(self, word: bytes) -> list[tuple[bytes, int]]:
         """Return d of a word, with the sign of the degrees of the letters before."""
         terms, sign = [], 1
-        for place, (letter, alphabet) in enumerate(zip(word, self.alphabets, strict=True)):
-            degree, _, boundary = alphabet[letter]
+        for place, letter in enumerate(word):
+            degree, _, boundary = self.alphabets[place][letter]
             for i, entry in boundary:
                 terms.append((word[:place] + LETTERS[i] + word[place + 1 :], sign * entry))
             if degree & 1:
@@ -1672,6 +1676,8 @@ FORMULAS: dict[str, Callable[..., int]] = {
 
 def evaluate(node: ast.AST, names: dict[str, int], budget: Budget) -> int:
     """Return the value of an expression in whole numbers: + - * // **, formulas, sum(... for d in divisors(...))."""
+    import ast  # few claims need it
+
     budget.spend("cells", 1)
     match node:
         case ast.Expression(body):
@@ -1680,12 +1686,12 @@ def evaluate(node: ast.AST, names: dict[str, int], budget: Budget) -> int:
             return value
         case ast.Name(name) if name in names:
             return names[name]
-        case ast.BinOp(left, operation, right) if type(operation) in OPERATIONS:
+        case ast.BinOp(left, operation, right) if type(operation).__name__ in OPERATIONS:
             a, b = evaluate(left, names, budget), evaluate(right, names, budget)
             power = isinstance(operation, ast.Pow)
             small = not power or 0 <= b * max(a.bit_length(), 1) <= budget.limits["bits"]
             require(small and (b != 0 or not isinstance(operation, ast.FloorDiv)), "expression", "a power or division")
-            return OPERATIONS[type(operation)](a, b)
+            return OPERATIONS[type(operation).__name__](a, b)
         case ast.Call(ast.Name("sum"), [ast.GeneratorExp(term, [ast.comprehension(ast.Name(name), over, [])])], []):
             match over:
                 case ast.Call(ast.Name("divisors"), [number], []):
@@ -1706,17 +1712,19 @@ def small_number(node: ast.AST, names: dict[str, int], budget: Budget) -> int:
     return value
 
 
-OPERATIONS: dict[type[ast.operator], Callable[[int, int], int]] = {
-    ast.Add: add_numbers,
-    ast.Sub: sub,
-    ast.Mult: mul,
-    ast.FloorDiv: floordiv,
-    ast.Pow: pow,
+OPERATIONS: dict[str, Callable[[int, int], int]] = {
+    "Add": add_numbers,
+    "Sub": sub,
+    "Mult": mul,
+    "FloorDiv": floordiv,
+    "Pow": pow,
 }
 
 
 def prove_identity(statement: Statement, _: Lines, budget: Budget) -> Proved:
     """Require two expressions to have the same value for each n of a range."""
+    import ast
+
     value = statement.value
     first, last = (integer(value[key], budget) for key in ("first", "last"))
     require(1 <= first <= last <= 1000, "statement", "the range lies within 1 to 1000, and is not empty")

@@ -19,6 +19,9 @@ LARGEST = 2**53 - 1
 """Integers beyond ± this are written as decimal strings."""
 
 
+_ENCODER = json.JSONEncoder(sort_keys=True, separators=(",", ":"), ensure_ascii=False)
+
+
 def integer_value(number: int) -> int | str:
     """Return the JSON value of an integer.
 
@@ -47,7 +50,7 @@ def canonical_bytes(value: Any) -> bytes:
     >>> canonical_bytes({"b": [1, 2], "a": "é"}).decode()
     '{"a":"é","b":[1,2]}'
     """
-    return json.dumps(value, sort_keys=True, separators=(",", ":"), ensure_ascii=False).encode("utf-8")
+    return _ENCODER.encode(value).encode("utf-8")
 
 
 def canonical_line(value: Any) -> bytes:

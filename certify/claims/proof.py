@@ -21,7 +21,7 @@ Progress = Callable[[int, int], None]
 """Called now and then with the work that is done and the whole work, in one unit."""
 
 _CHUNK = 64
-_AHEAD = 4
+_AHEAD = 16
 _PATIENCE = 1.0
 _GONE = "those who computed are gone; with --state, what is finished is kept for later"
 

@@ -75,7 +75,8 @@ def leibniz(word: Word, alphabets: Sequence[Alphabet]) -> list[tuple[Word, int]]
     sign = 1
     for place, (i, alphabet) in enumerate(zip(word, alphabets, strict=True)):
         letter = alphabet[i]
-        terms += [((*word[:place], j, *word[place + 1 :]), sign * x) for j, x in letter.boundary]
+        if letter.boundary:
+            terms += [((*word[:place], j, *word[place + 1 :]), sign * x) for j, x in letter.boundary]
         if letter.degree % 2:
             sign = -sign
     return terms

@@ -10,12 +10,14 @@ from pathlib import Path
 from tests.benchmarks.foundation import foundation
 from tests.benchmarks.measuring import Measure
 from tests.benchmarks.spaces import spaces
+from tests.benchmarks.symmetry import symmetry
 
 
 def _rows() -> Iterator[Measure]:
     with tempfile.TemporaryDirectory() as folder:
         yield from foundation(Path(folder))
         yield from spaces(Path(folder))
+        yield from symmetry(Path(folder))
 
 
 def main() -> None:

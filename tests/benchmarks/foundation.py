@@ -28,7 +28,8 @@ _MIB = 1 << 20
 def foundation(folder: Path) -> Iterator[Measure]:
     """Yield the rows, working in a folder."""
     smith, name = fastest_smith_seconds(8)
-    yield _against_smith(folder, 14, "blocks", smith, name)
+    for route in ("orbits", "blocks"):
+        yield _against_smith(folder, 14, route, smith, name)
     yield _against_smith(folder, 10, "cells", smith, name)
     ranks = rational_ranks_seconds(polygon_matrices(8))
     whole = _whole(folder, 8, "blocks")

@@ -3,16 +3,25 @@
 from __future__ import annotations
 
 import statistics
+import sys
 import tempfile
 import time
 from collections.abc import Iterator
-from itertools import permutations
 from pathlib import Path
 
 from certify.claims import RealToricClaim
-from certify.simplicial import SimplicialComplex
-from certify.simplicial.families import polygon
-from tests.benchmarks.measuring import Measure, claim_about, least, prove_to_file, run_prove, verify_file
+from certify.products.small_covers import real_permutohedral_variety
+from certify.simplicial.families import cyclic_polytope, polygon
+from tests.benchmarks.measuring import (
+    VERIFIER,
+    Measure,
+    claim_about,
+    least,
+    peak_memory,
+    prove_to_file,
+    run_prove,
+    verify_file,
+)
 from tests.benchmarks.smith_forms import fastest_smith_seconds
 from tests.gallery import sheets
 
@@ -27,13 +36,14 @@ def spaces(folder: Path) -> Iterator[Measure]:
     seconds = time.perf_counter() - start
     what = "(D1,S0) over the 20-gon by orbits, prove + write + verify, against Smith forms of the 9-gon"
     yield Measure(what, seconds / smith, 1, f"{seconds:.2f} s against {smith:.2f} s of {name}")
-    complex_ = dual_permutohedron(3)[0]
+    complex_ = real_permutohedral_variety(3).complex
     on = least(3, lambda: prove_to_file(claim_about(complex_, "(D2, S1)", "orbits"), path))
     off = least(3, lambda: prove_to_file(claim_about(complex_, "(D2, S1)"), path))
     what = "dual of the 3-dimensional permutohedron, (D2,S1), prove, symmetry on against off"
     yield Measure(what, on / off, 0.15, f"{on:.2f} s against {off:.2f} s")
     for n in (4, 5):
-        claim = RealToricClaim(*dual_permutohedron(n))
+        space = real_permutohedral_variety(n)
+        claim = RealToricClaim(space.complex, space.rows)
         start = time.perf_counter()
         prove_to_file(claim, path)
         middle = time.perf_counter()
@@ -42,15 +52,22 @@ def spaces(folder: Path) -> Iterator[Measure]:
         what = f"real permutohedral variety of dimension {n}, prove + verify in seconds"
         yield Measure(what, prove + verify, None, f"prove {prove:.2f} s, verify {verify:.2f} s", " s")
     yield _gallery()
+    yield from _long_runs(folder)
 
 
-def dual_permutohedron(n: int) -> tuple[SimplicialComplex, tuple[str, ...]]:
-    """Return the order complex of the proper subsets S ≠ ∅ of n + 1 things, and λ_S = Σ_{i ∈ S} e_i mod (1, …, 1)."""
-    subsets = range(1, 2 ** (n + 1) - 1)
-    orders = permutations(range(n + 1))
-    chains = [[sum(1 << i for i in order[: k + 1]) for k in range(n)] for order in orders]
-    rows = tuple("".join(str(s >> i & 1 ^ s >> n & 1) for s in subsets) for i in range(n))
-    return SimplicialComplex.from_facets(chains, subsets), rows
+def _long_runs(folder: Path) -> Iterator[Measure]:
+    """Yield what a run of a minute gains from a second process, and the memory of one with millions of subcomplexes."""
+    claim = claim_about(cyclic_polytope(22, 4), "(D2, S1)")
+    one, two = (least(1, lambda jobs=jobs: prove_to_file(claim, folder / "jobs.cert.jsonl", jobs)) for jobs in (1, 2))  # type: ignore[misc]
+    what = "cyclic 4-polytope on 22 vertices, (D2,S1), prove with two processes against one"
+    yield Measure(what, two / one, 0.6, f"{two:.1f} s against {one:.1f} s")
+    sheet = folder / "ring22.toml"
+    claim_lines = '[[claims]]\nid = "ring22"\nkind = "homology"\ncomplex = "ring"\npair = "(D1, S0)"\n'
+    sheet.write_text(f'[complexes.ring]\nfamily = "polygon"\nn = 22\n{claim_lines}', encoding="utf-8")
+    prove = peak_memory([sys.executable, "-m", "certify", "prove", str(sheet), "--out", str(folder / "ring22")])
+    verify = peak_memory([sys.executable, "-I", "-S", str(VERIFIER), str(folder / "ring22")])
+    for name, peak in (("prove", prove), ("verify", verify)):
+        yield Measure(f"peak memory of {name} on the 22-gon, (D1,S0)", peak / 2**20, 1024, "MiB, whole process", " MiB")
 
 
 def _gallery() -> Measure:

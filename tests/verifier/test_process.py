@@ -128,7 +128,7 @@ def test_keys_of_a_file_cannot_disturb_the_terminal(files: Path) -> None:
 
 def test_a_crash_is_no_verdict(files: Path) -> None:
     program = (
-        "import runpy, sys, zlib; zlib.decompressobj = None; import json; json.loads = None;"
+        "import runpy, sys, zlib; zlib.decompressobj = None; import json; json.JSONEncoder.encode = None;"
         f"sys.argv = ['verifier.py', {str(files / 'good.cert.jsonl')!r}];"
         f"runpy.run_path({str(VERIFIER)!r}, run_name='__main__')"
     )
