@@ -15,12 +15,12 @@ from typing import Any
 from certify.certificate import Spool
 from certify.certificate.about import about_claim, name_in
 from certify.claims import Proof, prove
-from certify.claims.base import GroupsClaim, Key
+from certify.claims.base import Claim, Found, GroupsClaim, Key
 from certify.claims.workers import processes
 from certify.errors import BadInput, InternalError, LimitReached
 from certify.exact import AbelianGroup
 
-__all__ = ["Certificate", "proved"]
+__all__ = ["Certificate", "proved", "proved_value"]
 
 
 class Certificate:
@@ -109,8 +109,14 @@ class Certificate:
         return str(report["statement"])
 
 
-def proved(claim: GroupsClaim[Key], title: str, jobs: int) -> tuple[tuple[tuple[Key, AbelianGroup], ...], Certificate]:
-    """Return the groups of a claim that are not zero, keys ascending, and the certificate that proves them."""
+def proved_value(claim: Claim[Found], title: str, jobs: int = 1) -> tuple[Found, Certificate]:
+    """Return what a claim asks for, and the certificate that proves it."""
     with Spool() as spool, processes(jobs) as workers:
         proof = prove(claim, spool, workers=workers)
-        return tuple(proof.found.items()), Certificate(proof, title)
+        return proof.found, Certificate(proof, title)
+
+
+def proved(claim: GroupsClaim[Key], title: str, jobs: int) -> tuple[tuple[tuple[Key, AbelianGroup], ...], Certificate]:
+    """Return the groups of a claim that are not zero, keys ascending, and the certificate that proves them."""
+    found, certificate = proved_value(claim, title, jobs)
+    return tuple(found.items()), certificate

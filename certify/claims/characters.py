@@ -124,6 +124,11 @@ class CharacterClaim(ValuesClaim):
 
         return {word for given in self.summands for word in orbit(given, images)}
 
+    def class_sizes(self) -> dict[str, int]:
+        """Return how many elements each rational class has, under the element that stands for it."""
+        elements = (spell_cycles(element, self.base) for element in self._elements)
+        return dict(zip(elements, getattr(self, "_sizes"), strict=True))  # noqa: B009 - no field, and so not compared
+
     @property
     def _elements(self) -> tuple[Element, ...]:
         return self.elements or ()
