@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterable, Mapping, Sequence
+from collections.abc import Callable, Iterable, Mapping, Sequence
 from dataclasses import dataclass, field
 from fractions import Fraction
 from typing import TYPE_CHECKING, TypeAlias
@@ -45,6 +45,10 @@ __all__ = [
 
 Given: TypeAlias = "str | Element | Permutation"
 """A permutation of the vertices as people give it: in cycles of labels, as images with signs, or as SymPy has it."""
+
+
+ClassFunctions: TypeAlias = "Callable[[tuple[Element, ...], Sequence[Element]], Mapping[str, tuple[int, ...]]]"
+"""What makes class functions from generators and the elements that stand for the classes."""
 
 
 @dataclass(frozen=True, slots=True, repr=False)
@@ -230,6 +234,7 @@ def character(
     *,
     irreducibles: str | None = None,
     functions: Mapping[str, Sequence[int]] | None = None,
+    functions_of: ClassFunctions | None = None,
     summands: Iterable[str] | None = None,
     jobs: int = 1,
 ) -> Character:
@@ -244,6 +249,8 @@ def character(
         Give the multiplicities of the characters irreducible over ℚ of such a group.
     functions : mapping, optional
         Class functions by name, with their values in the order of the classes that the answer has.
+    functions_of : callable, optional
+        Returns class functions by name; takes the generators, and the elements that stand for the classes.
     summands : iterable of str, optional
         Words of summands of the stable splitting (for discs a 0 or 1 for each vertex): only the sum of their orbits.
     jobs : int
@@ -267,6 +274,8 @@ def character(
         if irreducibles not in IRREDUCIBLES:
             raise BadInput(where="irreducibles", expected=f"one of {', '.join(IRREDUCIBLES)}", found=irreducibles)
         chosen = {**IRREDUCIBLES[irreducibles](elements, plain.elements or ()), **chosen}
+    if functions_of is not None:
+        chosen = {**functions_of(elements, plain.elements or ()), **chosen}
     claim = CharacterClaim(product, degree, elements, plain.elements, {}, chosen, words)
     found, certificate = proved_value(claim, f"the character on H_{degree}({product}; ℚ)", jobs)
     value = claim.value(found)

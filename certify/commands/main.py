@@ -17,6 +17,8 @@ from certify.commands import codes
 from certify.commands.compute import compute
 from certify.commands.demo import demo
 from certify.commands.faults import OUTSIDE, sentence_of
+from certify.commands.multiplicities import multiplicities
+from certify.commands.picture import picture
 from certify.commands.prove import prove
 from certify.commands.terminal import tell_fault
 from certify.commands.verify import verify
@@ -63,7 +65,7 @@ def cli(context: click.Context) -> int:
     return codes.DONE
 
 
-for _verb in (prove, verify, compute, demo):
+for _verb in (prove, verify, compute, multiplicities, picture, demo):
     cli.add_command(_verb)
 
 

@@ -13,7 +13,7 @@ from types import MappingProxyType
 from certify.errors import BadInput
 from certify.symmetry.elements import Element, after, cycles_of, generated_group, identity, inverse
 
-__all__ = ["IRREDUCIBLES", "induced_character", "ramanujan_sum", "specht_character"]
+__all__ = ["IRREDUCIBLES", "induced_character", "ramanujan_sum", "specht_character", "specht_functions"]
 
 Partition = tuple[int, ...]
 """Parts, the largest first."""
@@ -100,8 +100,6 @@ def induced_character(
 
 def _symmetric(generators: Sequence[Element], elements: Sequence[Element]) -> Functions:
     """Return the Specht characters, by partitions of the number of vertices."""
-    from sympy.utilities.iterables import partitions
-
     m = len(generators[0]) if generators else 0
     group = generated_group(generators, m)
     if len(group) != factorial(m):
@@ -109,10 +107,21 @@ def _symmetric(generators: Sequence[Element], elements: Sequence[Element]) -> Fu
             where="irreducibles", expected=f"all {factorial(m)} permutations", found=f"{len(group)} elements"
         )
     types = [tuple(sorted(map(len, cycles_of(element)), reverse=True)) for element in elements]
-    shapes = sorted(
-        (tuple(sorted((part for part, n in p.items() for _ in range(n)), reverse=True)) for p in partitions(m)),
-        reverse=True,
-    )
+    return specht_functions(m, types)
+
+
+def specht_functions(n: int, types: Sequence[Partition]) -> Functions:
+    """Return the Specht characters of the partitions of n, the largest first part first, at these cycle types.
+
+    Examples
+    --------
+    >>> specht_functions(2, [(1, 1), (2,)])
+    {'2': (1, 1), '1 1': (1, -1)}
+    """
+    from sympy.utilities.iterables import partitions
+
+    found = [[part for part, times in p.items() for _ in range(times)] for p in partitions(n)]
+    shapes = sorted((tuple(sorted(parts, reverse=True)) for parts in found), reverse=True)
     return {" ".join(map(str, shape)): tuple(specht_character(shape, kind) for kind in types) for shape in shapes}
 
 

@@ -36,7 +36,7 @@ PAW: list[list[Label]] = [[1, 2], [2, 3], [1, 3], [3, 4]]
     [
         (nx.Graph(), "0 vertices, facets ∅", "0 vertices, facets ∅"),
         (nx.empty_graph(["a", "b"]), "2 vertices, facets a b", "2 vertices, facets ab"),
-        (nx.Graph(PAW), "4 vertices, facets 123 34", "4 vertices, facets 14 24 3"),
+        (graph_from_edges(PAW), "4 vertices, facets 123 34", "4 vertices, facets 14 24 3"),
         (nx.cycle_graph(range(1, 6)), "5 vertices, facets 12 15 23 34 45", "5 vertices, facets 13 14 24 25 35"),
         (nx.MultiGraph([(1, 2), (1, 2)]), "2 vertices, facets 12", "2 vertices, facets 1 2"),
     ],

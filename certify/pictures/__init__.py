@@ -1,0 +1,1 @@
+"""Pictures: complexes with their orbits, quotient surfaces as polygons, tables of multiplicities."""
