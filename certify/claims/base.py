@@ -18,6 +18,7 @@ from certify.symmetry.actions import ActedCells
 __all__ = [
     "Claim",
     "Contribution",
+    "DegreesClaim",
     "Found",
     "GroupsClaim",
     "Key",
@@ -248,6 +249,50 @@ class Sum(Generic[Key]):
         keys = sorted(self._ranks, key=_tuple)
         groups = ((key, AbelianGroup.of(self._ranks[key], self._orders[key])) for key in keys)
         return {key: group for key, group in groups if group}
+
+
+class DegreesClaim(GroupsClaim[int]):
+    """A claim about the homology of a space in all degrees, or in some of them.
+
+    Attributes
+    ----------
+    degrees : tuple of int, or None
+        The degrees that the claim speaks of, ascending; None for all.
+    """
+
+    degrees: tuple[int, ...] | None
+
+    @abstractmethod
+    def in_degree(self, degree: str) -> str:
+        """Write a homology group as in print, with this degree."""
+
+    def total(self, contributions: Iterable[Contribution]) -> dict[int, AbelianGroup]:
+        """Return the groups that these contributions add up to, in the degrees of the claim."""
+        found = Sum[int]()
+        for contribution in contributions:
+            source = contribution.source
+            for shift, times in (source.shifts if isinstance(source, Block) else {0: 1}).items():
+                for degree, group in enumerate(contribution.groups, shift):
+                    if group and (self.degrees is None or degree in self.degrees):
+                        found.add(degree, group.rank, group.torsion, times)
+        return found.groups()
+
+    def name(self, key: int) -> str:
+        """Write a homology group as in print."""
+        return self.in_degree(str(key))
+
+    @property
+    def rest(self) -> str:
+        """Say as in print that all other groups are zero, if the claim is about all."""
+        return "" if self.degrees is not None else f"{self.in_degree('k')} = 0 for all other k"
+
+    def keys(self, found: Mapping[int, AbelianGroup]) -> Sequence[int]:
+        """Return the degrees of the claim, or those with homology."""
+        return sorted(found) if self.degrees is None else self.degrees
+
+    def fields(self) -> dict[str, Any]:
+        """Return the degrees."""
+        return {"degrees": None if self.degrees is None else list(self.degrees)}
 
 
 def solve(task: Task) -> Solved:

@@ -65,7 +65,8 @@ class FixedSetClaim(HomologyClaim):
         """Return degrees, pairs and generators."""
         return super().fields() | {"generators": [list(element) for element in self.generators]}
 
-    def _name(self, degree: str) -> str:
+    def in_degree(self, degree: str) -> str:
+        """Write a homology group as in print."""
         return f"H_{degree}(({self.product})^G; ℤ)"
 
     def lines(self, found: Mapping[int, AbelianGroup]) -> list[str]:

@@ -7,17 +7,17 @@ basis (Lemmas A and B of docs/mathematics.md).
 
 from __future__ import annotations
 
-from collections.abc import Iterable, Iterator, Mapping, Sequence
+from collections.abc import Iterator, Mapping
 from dataclasses import dataclass, replace
 from math import prod
 from typing import Any, ClassVar, Literal, get_args
 
 from certify.certificate.canonical import integer_value
 from certify.certificate.records import vector_value
-from certify.claims.base import Contribution, GroupsClaim, Sum, Task, checked_degrees
+from certify.claims.base import DegreesClaim, Task, checked_degrees
 from certify.errors import BadInput
 from certify.exact import AbelianGroup, BasedComplex
-from certify.products import Block, PolyhedralProduct, block_classes, cell_complex
+from certify.products import PolyhedralProduct, block_classes, cell_complex
 from certify.simplicial.complexes import SimplicialComplex
 from certify.symmetry import automorphism_generators, orbit_classes
 
@@ -39,7 +39,7 @@ class _WholeProduct:
 
 
 @dataclass(frozen=True)
-class HomologyClaim(GroupsClaim[int]):
+class HomologyClaim(DegreesClaim):
     """A claim about the integral homology of a polyhedral product.
 
     Parameters
@@ -108,32 +108,9 @@ class HomologyClaim(GroupsClaim[int]):
         pairs = self._reduced().pairs
         return prod(sum(times for shape in pair.shapes for _, times in shape.shifts) for pair in pairs)
 
-    def total(self, contributions: Iterable[Contribution]) -> dict[int, AbelianGroup]:
-        """Return the groups that these contributions add up to, in the degrees of the claim."""
-        found = Sum[int]()
-        for contribution in contributions:
-            source = contribution.source
-            for shift, times in (source.shifts if isinstance(source, Block) else {0: 1}).items():
-                for degree, group in enumerate(contribution.groups, shift):
-                    if group and (self.degrees is None or degree in self.degrees):
-                        found.add(degree, group.rank, group.torsion, times)
-        return found.groups()
-
-    def name(self, key: int) -> str:
+    def in_degree(self, degree: str) -> str:
         """Write a homology group as in print."""
-        return self._name(str(key))
-
-    def _name(self, degree: str) -> str:
         return f"H_{degree}({self.product}; ℤ)"
-
-    @property
-    def rest(self) -> str:
-        """Say as in print that all other groups are zero, if the claim is about all."""
-        return "" if self.degrees is not None else f"{self._name('k')} = 0 for all other k"
-
-    def keys(self, found: Mapping[int, AbelianGroup]) -> Sequence[int]:
-        """Return the degrees of the claim, or those with homology."""
-        return sorted(found) if self.degrees is None else self.degrees
 
     def remarks(self) -> list[str]:
         """Say which vertices have which pair, where not all have the same."""
@@ -146,8 +123,7 @@ class HomologyClaim(GroupsClaim[int]):
 
     def fields(self) -> dict[str, Any]:
         """Return degrees and pairs."""
-        degrees = None if self.degrees is None else list(self.degrees)
-        return {"degrees": degrees, "pairs": [pair.value for pair in self.product.pairs]}
+        return super().fields() | {"pairs": [pair.value for pair in self.product.pairs]}
 
     def _reduced(self) -> PolyhedralProduct:
         """Return the product with the summands that count."""
@@ -174,7 +150,8 @@ class SmashClaim(HomologyClaim):
         if self.route == "cells":
             raise BadInput(where="route", expected="blocks or orbits for a smash product", found="cells")
 
-    def _name(self, degree: str) -> str:
+    def in_degree(self, degree: str) -> str:
+        """Write a reduced homology group as in print."""
         return f"H̃_{degree}(polyhedral smash product {self.product}; ℤ)"
 
     def _reduced(self) -> PolyhedralProduct:

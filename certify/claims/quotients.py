@@ -2,11 +2,12 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterable, Iterator, Mapping, Sequence
+from abc import abstractmethod
+from collections.abc import Iterable, Iterator, Mapping
 from dataclasses import dataclass, field
 from typing import Any, ClassVar
 
-from certify.claims.base import Contribution, GroupsClaim, Sum, Task, checked_degrees
+from certify.claims.base import Contribution, DegreesClaim, Task, checked_degrees
 from certify.claims.values import Values, ValuesClaim
 from certify.exact import AbelianGroup
 from certify.products import PolyhedralProduct, parse_pairs
@@ -22,12 +23,8 @@ def _intervals(complex_: SimplicialComplex) -> PolyhedralProduct:
     return PolyhedralProduct(complex_, parse_pairs("(D1, S0)", complex_.vertex_count))
 
 
-def _generators_value(generators: Sequence[Element]) -> dict[str, Any]:
-    return {"generators": [list(element) for element in generators]}
-
-
 @dataclass(frozen=True)
-class OrbitSpaceClaim(GroupsClaim[int]):
+class OrbitSpaceClaim(DegreesClaim):
     """A claim about the integral homology of (D¹, S⁰)^K / G.
 
     Parameters
@@ -65,36 +62,48 @@ class OrbitSpaceClaim(GroupsClaim[int]):
         """Yield the one piece of work."""
         yield Task(OrbitSpace(_intervals(self.complex), self.generators))
 
-    def total(self, contributions: Iterable[Contribution]) -> dict[int, AbelianGroup]:
-        """Return the groups in the degrees of the claim."""
-        found = Sum[int]()
-        for contribution in contributions:
-            for degree, group in enumerate(contribution.groups):
-                if self.degrees is None or degree in self.degrees:
-                    found.add(degree, group.rank, group.torsion)
-        return found.groups()
-
-    def name(self, key: int) -> str:
+    def in_degree(self, degree: str) -> str:
         """Write a homology group as in print."""
-        return f"H_{key}((D¹,S⁰)^K/G; ℤ)"
-
-    @property
-    def rest(self) -> str:
-        """Say as in print that all other groups are zero, if the claim is about all."""
-        return "" if self.degrees is not None else "H_k((D¹,S⁰)^K/G; ℤ) = 0 for all other k"
-
-    def keys(self, found: Mapping[int, AbelianGroup]) -> Sequence[int]:
-        """Return the degrees of the claim, or those with homology."""
-        return sorted(found) if self.degrees is None else self.degrees
+        return f"H_{degree}((D¹,S⁰)^K/G; ℤ)"
 
     def fields(self) -> dict[str, Any]:
         """Return degrees and generators."""
-        degrees = None if self.degrees is None else list(self.degrees)
-        return {"degrees": degrees} | _generators_value(self.generators)
+        return super().fields() | {"generators": [list(element) for element in self.generators]}
 
 
 @dataclass(frozen=True)
-class SurfaceClaim(ValuesClaim):
+class _QuotientClaim(ValuesClaim):
+    """A claim about values that are read off the chains of cells of (D¹, S⁰)^K / G."""
+
+    complex: SimplicialComplex
+    generators: tuple[Element, ...] = ()
+    claimed: Values = field(default_factory=dict)
+    route: str = "cells"
+
+    def __post_init__(self) -> None:
+        """Refuse generators that are no symmetries."""
+        check_symmetries(self.generators, _intervals(self.complex))
+
+    @property
+    def base(self) -> SimplicialComplex:
+        """The complex K."""
+        return self.complex
+
+    def fields(self) -> dict[str, Any]:
+        """Return the generators."""
+        return {"generators": [list(element) for element in self.generators]}
+
+    def found(self, contributions: Iterable[Contribution]) -> dict[str, Any]:
+        """Return the values of the quotient."""
+        list(contributions)
+        return self.read_off(OrbitSpace(_intervals(self.complex), self.generators, always_chains=True))
+
+    @abstractmethod
+    def read_off(self, space: OrbitSpace) -> dict[str, Any]:
+        """Return the values of a quotient."""
+
+
+class SurfaceClaim(_QuotientClaim):
     """A claim that (D¹, S⁰)^K / G is a connected compact surface, and which.
 
     Parameters
@@ -111,35 +120,21 @@ class SurfaceClaim(ValuesClaim):
         If a generator does not preserve K.
     """
 
-    complex: SimplicialComplex
-    generators: tuple[Element, ...] = ()
-    claimed: Values = field(default_factory=dict)
-    route: str = "cells"
     kind: ClassVar[str] = "surface"
 
-    def __post_init__(self) -> None:
-        """Refuse generators that are no symmetries."""
-        check_symmetries(self.generators, _intervals(self.complex))
-
-    @property
-    def base(self) -> SimplicialComplex:
-        """The complex K."""
-        return self.complex
-
-    def fields(self) -> dict[str, Any]:
-        """Return the generators."""
-        return _generators_value(self.generators)
-
-    def found(self, contributions: Iterable[Contribution]) -> dict[str, Any]:
+    def read_off(self, space: OrbitSpace) -> dict[str, Any]:
         """Return Euler characteristic, orientability and boundary."""
-        list(contributions)
-        surface = recognise_surface(OrbitSpace(_intervals(self.complex), self.generators, always_chains=True))
+        surface = recognise_surface(space)
         return {"boundary": surface.boundary, "euler": surface.euler, "orientable": int(surface.orientable)}
 
     def name(self, key: str) -> str:
         """Write in words what a value is."""
         names = {"euler": "the Euler characteristic", "orientable": "orientability", "boundary": "boundary circles"}
-        return f"{names[key]} of (D¹,S⁰)^K{'/G' if self.generators else ''}"
+        return f"{names[key]} of {self._space}"
+
+    @property
+    def _space(self) -> str:
+        return f"(D¹,S⁰)^K{'/G' if self.generators else ''}"
 
     def shown(self, key: str, value: Any) -> str:
         """Write a value."""
@@ -147,12 +142,10 @@ class SurfaceClaim(ValuesClaim):
 
     def lines(self, found: Values) -> list[str]:
         """Say which surface it is."""
-        surface = Surface(found["euler"], bool(found["orientable"]), found["boundary"])
-        return [f"(D¹,S⁰)^K{'/G' if self.generators else ''} is {surface}"]
+        return [f"{self._space} is {Surface(found['euler'], bool(found['orientable']), found['boundary'])}"]
 
 
-@dataclass(frozen=True)
-class BranchingClaim(ValuesClaim):
+class BranchingClaim(_QuotientClaim):
     """A claim about the orbits of points of (D¹, S⁰)^K with isotropy, where these points are isolated.
 
     Parameters
@@ -168,38 +161,19 @@ class BranchingClaim(ValuesClaim):
         If a generator does not preserve K.
     """
 
-    complex: SimplicialComplex
-    generators: tuple[Element, ...]
-    claimed: Values = field(default_factory=dict)
-    route: str = "cells"
     kind: ClassVar[str] = "branching"
 
-    def __post_init__(self) -> None:
-        """Refuse generators that are no symmetries."""
-        check_symmetries(self.generators, _intervals(self.complex))
-
-    @property
-    def base(self) -> SimplicialComplex:
-        """The complex K."""
-        return self.complex
-
-    def fields(self) -> dict[str, Any]:
-        """Return the generators."""
-        return _generators_value(self.generators)
-
-    def found(self, contributions: Iterable[Contribution]) -> dict[str, Any]:
+    def read_off(self, space: OrbitSpace) -> dict[str, Any]:
         """Return the orbits by the order of the isotropy group."""
-        list(contributions)
-        space = OrbitSpace(_intervals(self.complex), self.generators, always_chains=True)
         return {"orbits": [list(pair) for pair in branch_orbits(space)]}
 
     def name(self, key: str) -> str:  # noqa: ARG002 - there is one value only
         """Write in words what a value is."""
-        return "orbits of points with isotropy, by its order,"
+        return "orbits of points with isotropy"
 
     def shown(self, key: str, value: Any) -> str:  # noqa: ARG002 - there is one value only
         """Write how many orbits there are of which order."""
-        return ", ".join(f"{number} of order {order}" for order, number in value) or "none"
+        return ", ".join(f"{number} with a group of order {order}" for order, number in value) or "none"
 
     def value(self, found: Values) -> dict[str, Any]:
         """Return the number of orbits under the order, as sheets have it."""

@@ -2,11 +2,11 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterable, Iterator, Mapping, Sequence
+from collections.abc import Iterator, Mapping
 from dataclasses import dataclass
 from typing import Any, ClassVar
 
-from certify.claims.base import Contribution, GroupsClaim, Sum, Task, checked_degrees
+from certify.claims.base import DegreesClaim, Task, checked_degrees
 from certify.exact import AbelianGroup
 from certify.products.real_toric import RealToricSpace
 from certify.simplicial.complexes import SimplicialComplex
@@ -15,7 +15,7 @@ __all__ = ["RealToricClaim"]
 
 
 @dataclass(frozen=True)
-class RealToricClaim(GroupsClaim[int]):
+class RealToricClaim(DegreesClaim):
     """A claim about the integral homology of (D¹, S⁰)^K / ker λ.
 
     Parameters
@@ -53,27 +53,9 @@ class RealToricClaim(GroupsClaim[int]):
         """Yield the one piece of work."""
         yield Task(RealToricSpace(self.complex, self.rows, None if self.degrees is None else self.degrees[-1] + 1))
 
-    def total(self, contributions: Iterable[Contribution]) -> dict[int, AbelianGroup]:
-        """Return the groups in the degrees of the claim."""
-        found = Sum[int]()
-        for contribution in contributions:
-            for degree, group in enumerate(contribution.groups):
-                if self.degrees is None or degree in self.degrees:
-                    found.add(degree, group.rank, group.torsion)
-        return found.groups()
-
-    def name(self, key: int) -> str:
+    def in_degree(self, degree: str) -> str:
         """Write a homology group as in print."""
-        return f"H_{key}((D¹,S⁰)^K/ker λ; ℤ)"
-
-    @property
-    def rest(self) -> str:
-        """Say as in print that all other groups are zero, if the claim is about all."""
-        return "" if self.degrees is not None else "H_k((D¹,S⁰)^K/ker λ; ℤ) = 0 for all other k"
-
-    def keys(self, found: Mapping[int, AbelianGroup]) -> Sequence[int]:
-        """Return the degrees of the claim, or those with homology."""
-        return sorted(found) if self.degrees is None else self.degrees
+        return f"H_{degree}((D¹,S⁰)^K/ker λ; ℤ)"
 
     def remarks(self) -> list[str]:
         """Show λ."""
@@ -81,4 +63,4 @@ class RealToricClaim(GroupsClaim[int]):
 
     def fields(self) -> dict[str, Any]:
         """Return degrees and rows."""
-        return {"degrees": None if self.degrees is None else list(self.degrees), "rows": list(self.rows)}
+        return super().fields() | {"rows": list(self.rows)}
