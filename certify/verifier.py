@@ -1322,6 +1322,7 @@ def traces_by_blocks(statement: Statement, elements: list[Element], lines: Lines
             for cycle in cycles
         ]
         for choice in product(*options):
+            budget.spend("cells", 1)
             alphabets: list[Alphabet] = [()] * statement.vertices
             word, factor, low = [""] * statement.vertices, 1, 0
             for cycle, (digit, shape, shift) in zip(cycles, choice, strict=True):

@@ -52,6 +52,28 @@ GREEDY = {
         vertices=26, pairs=[f"(D{2 ** (i % 9) + i}, S{2 ** (i % 9) + i - 1})" for i in range(26)]
     ),
     "many ghosts on the route orbits": _statement(**_vertices(40)).replace(b'"blocks"', b'"orbits"'),
+    "many words that a trivial group fixes": signed(
+        [
+            {
+                "about": {"claim": "a"},
+                "format": 1,
+                "route": "blocks",
+                "statement": {
+                    "degree": 60,
+                    "elements": [list(range(1, 51))],
+                    "facets": [[]],
+                    "functions": [],
+                    "generators": [],
+                    "kind": "character",
+                    "products": [],
+                    "summands": [],
+                    "values": [0],
+                    **_vertices(50),
+                },
+            },
+            {"end": None},
+        ]
+    ),
     "a table over many vertices": line_of(
         values_of(_statement())[0]
         | {"statement": {"facets": [[i] for i in range(1, 51)], "groups": [], "kind": "table", "vertices": 50}}
