@@ -322,7 +322,7 @@ def surface(k: SimplicialComplex, generators: Iterable[Given] = ()) -> ProvedSur
 
     Raises
     ------
-    BadInput
+    ClaimIsFalse
         If it is no connected surface; the point and its link are named.
 
     Examples

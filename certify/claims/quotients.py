@@ -9,6 +9,7 @@ from typing import Any, ClassVar
 
 from certify.claims.base import Contribution, DegreesClaim, Task, checked_degrees
 from certify.claims.values import Values, ValuesClaim
+from certify.errors import BadInput, ClaimIsFalse
 from certify.exact import AbelianGroup
 from certify.products import PolyhedralProduct, parse_pairs
 from certify.simplicial.complexes import SimplicialComplex
@@ -96,7 +97,12 @@ class _QuotientClaim(ValuesClaim):
     def found(self, contributions: Iterable[Contribution]) -> dict[str, Any]:
         """Return the values of the quotient."""
         list(contributions)
-        return self.read_off(OrbitSpace(_intervals(self.complex), self.generators, always_chains=True))
+        space = OrbitSpace(_intervals(self.complex), self.generators, always_chains=True)
+        try:
+            return self.read_off(space)
+        except BadInput as fault:
+            # What is claimed makes sense, and is not so.
+            raise ClaimIsFalse(what=fault.where, claimed=fault.expected, found=f"not: it has {fault.found}") from fault
 
     @abstractmethod
     def read_off(self, space: OrbitSpace) -> dict[str, Any]:

@@ -63,7 +63,7 @@ def recognise_surface(space: OrbitSpace) -> Surface:
     since the vertices of a triangle are ordered by dimension.
     """
     if len(space.cells) != 3:
-        raise _no_surface(f"one of dimension {len(space.cells) - 1}")
+        raise _no_surface(f"dimension {len(space.cells) - 1}")
     dual: nx.Graph[Cell] = nx.Graph()
     dual.add_nodes_from(space.cells[2])
     sides: dict[Cell, list[Cell]] = {edge: [] for edge in space.cells[1]}
@@ -107,8 +107,9 @@ def branch_orbits(space: OrbitSpace) -> list[tuple[int, int]]:
     """
     for level, orders in zip(space.cells[1:], space.isotropy[1:], strict=True):
         if set(orders) - {1}:
-            found = f"whole cells of dimension {len(level[0]) - 1} with isotropy"
-            raise BadInput(where="the action", expected="isolated points with isotropy", found=found)
+            found = f"whole cells of dimension {len(level[0]) - 1}"
+            where = "the set of points with isotropy"
+            raise BadInput(where=where, expected="a set of isolated points", found=found)
     return sorted((order, number) for order, number in space.isotropy[0].items() if order > 1)
 
 

@@ -18,7 +18,7 @@ from certify.claims.characters import ActionClaim, CharacterClaim
 from certify.claims.counts import OrbitCountClaim
 from certify.claims.fixed_sets import FixedSetClaim
 from certify.claims.quotients import BranchingClaim, OrbitSpaceClaim, SurfaceClaim
-from certify.errors import BadInput
+from certify.errors import ClaimIsFalse
 from certify.exact import adapted_basis
 from certify.products import PolyhedralProduct, cell_complex
 from certify.simplicial import SimplicialComplex, build
@@ -231,7 +231,7 @@ def test_a_surface_has_the_homology_of_one(n: int, data: st.DataObject) -> None:
     generators = tuple(data.draw(st.lists(st.sampled_from(given_ones), max_size=2, unique=True)))
     try:
         surface = certified_statement(SurfaceClaim(k, generators))
-    except BadInput:
+    except ClaimIsFalse:
         assume(False)
     found = certified_statement(OrbitSpaceClaim(k, generators))["groups"]
     groups = {degree: (rank, torsion) for degree, rank, torsion in found}
