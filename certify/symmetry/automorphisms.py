@@ -2,9 +2,12 @@
 
 from __future__ import annotations
 
-import igraph
+from typing import TYPE_CHECKING
 
 from certify.products import PolyhedralProduct
+
+if TYPE_CHECKING:
+    import igraph
 
 __all__ = ["Permutation", "automorphism_count", "automorphism_generators"]
 
@@ -49,6 +52,9 @@ def automorphism_count(product: PolyhedralProduct) -> int:
 
 def _graph(product: PolyhedralProduct) -> tuple[igraph.Graph, list[int]]:
     """Return the graph of vertices and facets, with a colour for each pair and one for facets."""
+    # It loads everything that it could draw with, which takes longer than most claims.
+    import igraph
+
     complex_ = product.complex
     m = complex_.vertex_count
     names = sorted({pair.name for pair in product.pairs})
