@@ -172,7 +172,8 @@ def record(value: object, required: Sequence[str], optional: Sequence[str] = ())
     """Return a JSON object after checking its keys."""
     if type(value) is not dict:
         raise Failure("shape", "an object is expected")
-    if not value.keys() >= set(required) or not value.keys() <= {*required, *optional}:
+    more = len(value) - len(required)
+    if any(key not in value for key in required) or (more and not value.keys() <= {*required, *optional}):
         raise Failure("keys", f"the keys {', '.join([*required, *optional])} are expected, not {', '.join(value)[:60]}")
     return value
 
@@ -708,7 +709,7 @@ def homology(space: Space, basis: object, budget: Budget) -> list[tuple[int, lis
         size = space.sizes[degree]
         entry = record(entries[degree], (), ("cycles", "groups", "matched", "order", "pairs"))
         require(all(map(sequence, entry.values())), "shape", "an empty list is written by leaving out its key")
-        matched = numbers(entry.get("matched", []), 0, size)
+        matched = numbers(entry["matched"], 0, size) if "matched" in entry else []
         pairs = [read_pair(sequence(pair), degree, space, budget) for pair in sequence(entry.get("pairs", []))]
         require(degree > 0 or not (matched or pairs), "boundary", "degree 0 has a pair, but nothing is below it")
         cycles = [vector(cycle, size, budget) for cycle in sequence(entry.get("cycles", []))]
@@ -1264,10 +1265,10 @@ def matrix_of(space: Words, element: Element, alphabets: Sequence[Alphabet]) -> 
 
 
 def watched_words(
-    statement: Statement, alphabets: Sequence[Alphabet], lines: Lines, budget: Budget, block: str | None
+    statement: Statement, faces: Faces, alphabets: Sequence[Alphabet], lines: Lines, budget: Budget, block: str | None
 ) -> Words | None:
     """Check the record of a product of cells, and return it with its basis in the degree of the claim, if any."""
-    space = Words(face_masks(statement, budget), alphabets, statement.top, budget)
+    space = Words(faces, alphabets, statement.top, budget)
     if len(space.cells) <= statement.degree or not space.cells[statement.degree]:
         return None
     space.watched = statement.degree
@@ -1281,7 +1282,7 @@ def traces_by_cells(statement: Statement, elements: list[Element], lines: Lines,
     """Return the traces of elements on the homology of the whole product."""
     require(statement.value["summands"] is None, "statement", "single summands have the route blocks only")
     alphabets = [tuple(pair.cells) for pair in statement.pairs]
-    space = watched_words(statement, alphabets, lines, budget, None)
+    space = watched_words(statement, face_masks(statement, budget), alphabets, lines, budget, None)
     matrices = [matrix_of(space, element, alphabets) if space else [] for element in elements]
     return [sum(column[i] for i, column in enumerate(matrix)) for matrix in matrices]
 
@@ -1293,6 +1294,7 @@ def traces_by_blocks(statement: Statement, elements: list[Element], lines: Lines
     permutes letters; a change of sign acts on it, up to smaller blocks, as -1 for each interval that is kept.
     """
     find_summands(statement, lines, budget)
+    faces = face_masks(statement, budget)
     traces = []
     chosen = None
     if statement.value["summands"] is not None:  # the orbits of some words
@@ -1333,7 +1335,7 @@ def traces_by_blocks(statement: Statement, elements: list[Element], lines: Lines
                     alphabets[vertex - 1] = letters_of(shape, shift)
                     factor *= -1 if element[vertex - 1] < 0 and shape[0] == KEEP else 1
             if low <= statement.degree and (chosen is None or "".join(word) in chosen):
-                space = watched_words(statement, alphabets, lines, budget, "".join(word))
+                space = watched_words(statement, faces, alphabets, lines, budget, "".join(word))
                 columns = matrix_of(space, plain, alphabets) if space else []
                 trace += factor * sum(column[i] for i, column in enumerate(columns))
         traces.append(trace)
@@ -1397,7 +1399,7 @@ def prove_action(statement: Statement, lines: Lines, budget: Budget) -> Proved:
     """Return cycles that are a basis of homology modulo torsion, and the matrix of an element in it."""
     element = read_element(statement.value["element"], statement)
     alphabets = [tuple(pair.cells) for pair in statement.pairs]
-    space = watched_words(statement, alphabets, lines, budget, None)
+    space = watched_words(statement, face_masks(statement, budget), alphabets, lines, budget, None)
     cycles = [space.frame.family[number] for number in space.frame.cycles] if space and space.frame else []
     basis = [[spelled(entry) for term in terms for entry in term] for terms in cycles]
     columns = matrix_of(space, element, alphabets) if space else []

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from collections.abc import Iterator, Sequence
 from dataclasses import dataclass
+from functools import cached_property
 from itertools import product as choices
 
 from certify.exact import AdaptedBasis, BasedComplex
@@ -38,7 +39,7 @@ def moved_word(word: Word, element: Element, alphabets: Sequence[Alphabet]) -> t
     return tuple(image), sign
 
 
-@dataclass(frozen=True, slots=True)
+@dataclass(frozen=True)
 class ActedCells:
     """The words over alphabets, with elements that act on them, watched in one degree.
 
@@ -69,22 +70,27 @@ class ActedCells:
         """Return the complex, up to the degree above the one that is watched."""
         return word_complex(self.faces, self.alphabets, self.degree + 1)
 
+    @cached_property
+    def _words(self) -> list[Word]:
+        """The cells of the degree that is watched."""
+        words = words_by_degree(self.faces, self.alphabets, self.degree)
+        return words[self.degree] if len(words) > self.degree else []
+
     @property
     def is_watched(self) -> bool:
         """Whether there are cells of the degree that is watched."""
-        words = words_by_degree(self.faces, self.alphabets, self.degree)
-        return len(words) > self.degree and bool(words[self.degree])
+        return bool(self._words)
 
     def matrices(self, complex_: BasedComplex, basis: AdaptedBasis) -> list[list[tuple[int, ...]]]:
         """Return the columns of the matrix of each element on homology modulo torsion, in the cycles of the basis."""
-        words = words_by_degree(self.faces, self.alphabets, self.degree)
-        number = {word: place for place, word in enumerate(words[self.degree])}
+        words = self._words
+        number = {word: place for place, word in enumerate(words)}
         coordinates = Coordinates(complex_, basis, self.degree)
         matrices = []
         for element in self.elements:
             columns = []
             for cycle in basis.degrees[self.degree].cycles:
-                images = [(moved_word(words[self.degree][cell], element, self.alphabets), x) for cell, x in cycle]
+                images = [(moved_word(words[cell], element, self.alphabets), x) for cell, x in cycle]
                 columns.append(coordinates.of((number[word], sign * x) for (word, sign), x in images))
             matrices.append(columns)
         return matrices
