@@ -39,6 +39,7 @@ __all__ = [
     "products_with_degrees",
     "real_toric_spaces",
     "relabelled_products",
+    "signed_permutations",
     "sphere_products",
     "spheres",
     "symmetric_complexes",
@@ -304,6 +305,15 @@ def relabelled_products(draw: st.DrawFn) -> tuple[PolyhedralProduct, PolyhedralP
 
 
 # -- symmetries ---------------------------------------------------------------------------------
+
+
+@st.composite
+def signed_permutations(draw: st.DrawFn, m: int | None = None) -> Element:
+    """Draw a signed permutation of m points, or of one to six."""
+    size = draw(st.integers(1, 6)) if m is None else m
+    image = draw(st.permutations(range(1, size + 1)))
+    signs = draw(st.lists(st.sampled_from((1, -1)), min_size=size, max_size=size))
+    return tuple(sign * to for sign, to in zip(signs, image, strict=True))
 
 
 @st.composite

@@ -202,11 +202,12 @@ def element_from_cycles(text: str, k: SimplicialComplex) -> Element:
     Parameters
     ----------
     text : str
-        Cycles like ``(1 2 3)(4 5)``, labels separated by blanks or commas; ``()`` is the identity. A minus sign before
+        Cycles like ``(1 2 3)(4 5)``, labels separated by blanks, or by commas if they have blanks in them (then
+        one alone is followed by a comma); ``()`` is the identity. A minus sign before
         a label says that the coordinate changes its sign on the way to this vertex: ``(1 -2)`` takes (x, y) to
         (y, -x), and ``(-1)`` takes x to -x. Cycles with a vertex in common are multiplied, the last one first.
     k : SimplicialComplex
-        Has the labels.
+        Has the labels; where some of them have brackets or commas, vertices are called by their numbers from 1 on.
 
     Raises
     ------
@@ -219,7 +220,7 @@ def element_from_cycles(text: str, k: SimplicialComplex) -> Element:
     >>> element_from_cycles("(1 2 3 4)", polygon(4)), element_from_cycles("(1 -2)", polygon(4))
     ((2, 3, 4, 1), (-2, 1, 3, 4))
     """
-    known = {name: number for number, name in enumerate(labels_by_text(k), start=1)}
+    known = {name: number for number, name in enumerate(_names(k), start=1)}
     if not re.fullmatch(r"(\s*\([^()]*\)\s*)+", text):
         raise BadInput(where="element", expected="cycles like (1 2 3)(4 5), or () for the identity", found=repr(text))
     element = identity(k.vertex_count)
@@ -228,8 +229,14 @@ def element_from_cycles(text: str, k: SimplicialComplex) -> Element:
     return element
 
 
+def _names(k: SimplicialComplex) -> list[str]:
+    """Return what vertices are called in cycles: their labels, or their numbers where labels have brackets or commas."""
+    names = list(labels_by_text(k))
+    return [str(number) for number in range(1, len(names) + 1)] if set("".join(names)) & set("(),") else names
+
+
 def _cycle(text: str, known: dict[str, int], m: int) -> Element:
-    names = [name.strip() for name in text.split(",")] if "," in text else text.split()
+    names = [name.strip() for name in text.removesuffix(",").split(",")] if "," in text else text.split()
     steps: list[tuple[int, int]] = []
     for name in names:
         # A label may begin with a minus sign itself.
@@ -254,13 +261,14 @@ def spell_cycles(element: Element, k: SimplicialComplex) -> str:
     >>> spell_cycles((2, 1, 4, -3), polygon(4)), spell_cycles((1, 2, 3, 4), polygon(4))
     ('(1 2)(-3 4)', '()')
     """
-    names = [str(label) for label in k.labels]
+    names = _names(k)
     between = ", " if any(set(name) & set(" \t") for name in names) else " "
     text = ""
     for cycle in cycles_of(element):
         signs = {abs(element[vertex - 1]): "-" if element[vertex - 1] < 0 else "" for vertex in cycle}
         if len(cycle) > 1 or signs[cycle[0]]:
-            text += f"({between.join(signs[vertex] + names[vertex - 1] for vertex in cycle)})"
+            alone = "," if len(cycle) == 1 and between == ", " else ""
+            text += f"({between.join(signs[vertex] + names[vertex - 1] for vertex in cycle)}{alone})"
     return text or "()"
 
 
