@@ -230,7 +230,7 @@ def element_from_cycles(text: str, k: SimplicialComplex) -> Element:
 
 
 def _names(k: SimplicialComplex) -> list[str]:
-    """Return what vertices are called in cycles: their labels, or their numbers where labels have brackets or commas."""
+    """Return what vertices are called in cycles: by labels, or by numbers where labels have brackets or commas."""
     names = list(labels_by_text(k))
     return [str(number) for number in range(1, len(names) + 1)] if set("".join(names)) & set("(),") else names
 

@@ -31,6 +31,7 @@ from certify.products import Pair, PolyhedralProduct, parse_pair
 from certify.simplicial import SimplicialComplex
 from certify.simplicial.families import points, polygon, simplex
 from tests.helpers import disc_product, verifier
+from tests.verifier import forging
 
 ROOT = Path(__file__).parents[2]
 DOCS = ROOT / "docs"
@@ -40,7 +41,7 @@ DOCUMENTS = sorted([*DOCS.glob("*.md"), *DOCS.glob("decisions/*.md")])
 
 PROJECTIVE_PLANE = ("124", "126", "134", "135", "156", "235", "236", "245", "346", "456")
 RECORDS = {"basis": "record-cells", "block": "record-blocks"} | {
-    key: f"record-{key}" for key in ("splitting", "generators")
+    key: f"record-{key}" for key in ("splitting", "generators", "order")
 }
 
 
@@ -62,6 +63,7 @@ def over(*pairs: str | Pair, route: Route = "blocks") -> HomologyClaim:
     return HomologyClaim(PolyhedralProduct(simplex(len(pairs)), chosen), route=route)
 
 
+SPACES = {"homology", "smash", "real-toric", "tor", "table", "summand"}
 CLAIMS: dict[str, Claim[Any]] = {
     "two-points": claim("1", "2"),
     "two-points-by-cells": claim("1", "2", route="cells"),
@@ -81,6 +83,7 @@ CLAIMS: dict[str, Claim[Any]] = {
     "tor": TorClaim(polygon(5)),
     "table": TableClaim(polygon(4)),
     "summand": SummandClaim(polygon(5), (2, 3, 5), (1,)),
+    **{name: claim for name, claim in forging.CLAIMS.items() if claim.kind not in SPACES},
 }
 """Claims that together make the prover write everything that the format has; some of them are in the documents."""
 
@@ -115,7 +118,7 @@ def is_valid(kind: str, value: object) -> bool:
 
 
 def test_there_is_a_schema_for_each_kind_of_line() -> None:
-    openings = {"record-splitting", "record-generators"}
+    openings = {"record-splitting", "record-generators", "record-order"}
     assert set(schemas()) == {"header", "record-blocks", "record-cells", "end", "values"} | openings
     for name, schema in schemas().items():
         Draft202012Validator.check_schema(schema)
@@ -150,6 +153,21 @@ HEADER: dict[str, Any] = {
         "pairs": ["(D1, S0)", "(D1, S0)"],
         "vertices": 2,
     },
+}
+CHARACTER: dict[str, Any] = HEADER | {
+    "statement": {
+        "degree": 1,
+        "elements": [[1, 2], [2, 1]],
+        "facets": [[1], [2]],
+        "functions": [[1, 1]],
+        "generators": [[2, 1]],
+        "kind": "character",
+        "pairs": ["(D1, S0)", "(D1, S0)"],
+        "products": [[0, 1]],
+        "summands": None,
+        "values": [1, -1],
+        "vertices": 2,
+    }
 }
 RECORD: dict[str, Any] = {
     "basis": [{"matched": [0], "pairs": [[[0, 1]], [[0, 2], 2, [0, 1]]], "cycles": [[0, str(2**53)]]}],
@@ -188,6 +206,12 @@ INVALID: dict[str, tuple[str, Any, tuple[str | int, ...], Any]] = {
     "groups without an order": ("record-blocks", RECORD, ("basis", 0, "groups"), GROUPED["groups"]),
     "a group of one cell": ("record-cells", {"basis": [GROUPED]}, ("basis", 0, "groups", 0, "cells"), [1]),
     "no degrees in a basis": ("record-blocks", RECORD, ("basis",), []),
+    "an element with 0": ("header", CHARACTER, ("statement", "generators", 0, 0), 0),
+    "an image twice": ("header", CHARACTER, ("statement", "generators", 0, 0), 1),
+    "a value that is a fraction": ("header", CHARACTER, ("statement", "values", 0), 0.5),
+    "a product of three": ("header", CHARACTER, ("statement", "products", 0), [1, 1, 1]),
+    "groups of another kind": ("header", CHARACTER, ("statement", "groups"), []),
+    "a facet twice in a shelling": ("record-order", {"order": [[1], [2]]}, ("order", 0), [2]),
     "a short digest": ("end", END, ("end", "sha256"), "0" * 63),
     "a digest in capitals": ("end", END, ("end", "sha256"), "A" * 64),
     "no number of records": ("end", END, ("end",), {"sha256": "0" * 64}),
