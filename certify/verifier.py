@@ -32,7 +32,7 @@ from copy import copy
 from functools import lru_cache, partial, reduce
 from heapq import heapify, heappop, heappush
 from itertools import combinations, pairwise, product, zip_longest
-from math import comb, gcd, lcm, prod
+from math import comb, factorial, gcd, lcm, prod
 from operator import add as add_numbers
 from operator import and_, floordiv, ge, mul, sub, xor
 
@@ -1658,6 +1658,10 @@ def mobius(n: int) -> int:
     return 1 if n == 1 else -sum(mobius(d) for d in divisors(n)[:-1])
 
 
+def multinomial(parts: list[int]) -> int:
+    return factorial(sum(parts)) // prod(map(factorial, parts))
+
+
 def over_divisors(n: int, term: Callable[[int], int]) -> int:
     return sum(term(d) for d in divisors(n)) // n
 
@@ -1673,6 +1677,7 @@ FORMULAS: dict[str, Callable[..., int]] = {
     "lyndon": lambda n, q: over_divisors(n, lambda d: mobius(d) * q ** (n // d)),
     "mobius": mobius,
     "necklaces": necklaces,
+    "witt": lambda *a: sum(mobius(d) * multinomial([x // d for x in a]) for d in divisors(gcd(*a))) // sum(a),
     "totient": lambda n: sum(1 for k in range(1, n + 1) if gcd(n, k) == 1),
 }
 

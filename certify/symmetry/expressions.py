@@ -8,7 +8,7 @@ from math import comb, gcd
 from types import CodeType, MappingProxyType
 
 from certify.errors import BadInput
-from certify.symmetry.counting import bracelets, lyndon_words, necklaces
+from certify.symmetry.counting import bracelets, lyndon_words, necklaces, witt_rank
 
 __all__ = ["FORMULAS", "values_of"]
 
@@ -46,6 +46,7 @@ FORMULAS: Mapping[str, Callable[..., int]] = MappingProxyType(
         "mobius": _mobius,
         "necklaces": necklaces,
         "totient": _totient,
+        "witt": lambda *content: witt_rank(content),
     }
 )
 """What an expression may call, with whole numbers from 0 to 1000."""

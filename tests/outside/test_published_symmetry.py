@@ -239,6 +239,14 @@ def test_moreaus_formula_for_more_colours(q: str) -> None:
         certified_statement(IdentityClaim(f"lyndon(n, {q})", f"{value}", n, n))
 
 
+def test_witts_formula_adds_up_to_moreaus() -> None:
+    """Lyndon words in two letters, counted by the number of the first one (E. Witt, 1937, from memory)."""
+    certified_statement(IdentityClaim("sum(witt(k, n - k) for k in range(1, n)) ", "lyndon(n, 2)", 2, 30))
+    certified_statement(IdentityClaim("witt(n, n, n)", "sum(witt(n, n, n) for k in range(0, 1))", 1, 20))
+    for content, value in (((2, 2), 1), ((3, 2), 2), ((3, 3), 3), ((1, 1, 1), 2), ((2, 2, 2), 14)):
+        certified_statement(IdentityClaim(f"witt({', '.join(map(str, content))})", str(value), 1, 1))
+
+
 def test_the_splitting_of_a_wedge_of_spheres() -> None:
     """Entry N06, by the Hilton–Milnor theorem (Hilton 1955): basic products of 6 S³, 8 S⁴, 3 S⁵, by dimension.
 

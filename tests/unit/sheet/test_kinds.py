@@ -718,7 +718,7 @@ from = 1
 to = 3
 """,
         "line 10, claim 1, key right: expected whole numbers, n, + - * // **, sums over divisors(n) or "
-        "range(a, b), and binomial, bracelets, gcd, lyndon, mobius, necklaces, totient, found name 'x' "
+        "range(a, b), and binomial, bracelets, gcd, lyndon, mobius, necklaces, totient, witt, found name 'x' "
         "is not defined for n = 1",
     ),
     "a range that is empty": (
