@@ -220,16 +220,14 @@ def _decide(faces: _Masks, place: int, move: Move) -> _Masks:
     if move == Move.KEEP:
         return faces
     bit = 1 << place
-    if move in (Move.OUT, Move.OUTER):
-        chosen = [mask ^ bit for mask in faces if mask & bit]
-    else:
-        chosen = [mask for mask in faces if not mask & bit]
-    if move in (Move.INNER, Move.OUTER):
-        free = chosen + [mask | bit for mask in chosen]
-        return tuple(sorted(free, key=lambda mask: (mask.bit_count(), mask)))
     below = bit - 1
     above = ~below
-    return tuple([mask & below | mask >> 1 & above for mask in chosen])
+    if move == Move.STAY:
+        return tuple([mask & below | mask >> 1 & above for mask in faces if not mask & bit])
+    if move == Move.OUT:
+        return tuple([mask & below | mask >> 1 & above for mask in faces if mask & bit])
+    chosen = [mask & ~bit for mask in faces if bool(mask & bit) == (move == Move.OUTER)]
+    return tuple(sorted(chosen + [mask | bit for mask in chosen], key=lambda mask: (mask.bit_count(), mask)))
 
 
 def _runs(level: _States) -> list[_States]:
