@@ -117,6 +117,9 @@ FAMILIES: Mapping[str, Family] = MappingProxyType(
 """The families, by name."""
 
 
+_LARGEST_ARGUMENT = 10_000
+
+
 def build(name: str, /, **arguments: object) -> SimplicialComplex:
     """Return a member of a family.
 
@@ -150,6 +153,11 @@ def build(name: str, /, **arguments: object) -> SimplicialComplex:
         if argument not in family.parameters:
             known = f"only {', '.join(family.parameters)}" if family.parameters else "no argument"
             raise BadInput(where=f"family {name}", expected=known, found=f"the argument {argument}")
+    for argument, value in arguments.items():
+        # A slip of the finger should not take all the memory of the machine.
+        if isinstance(value, int) and value > _LARGEST_ARGUMENT:
+            where = f"family {name}, argument {argument}"
+            raise BadInput(where=where, expected=f"a whole number of at most {_LARGEST_ARGUMENT}", found=f"{value}")
     try:
         return family.function(**arguments)
     except BadInput as fault:

@@ -130,3 +130,11 @@ def test_an_unknown_family_is_answered_with_the_known_ones() -> None:
 def test_a_parameter_may_even_be_called_name() -> None:
     with pytest.raises(BadInput, match="found the argument name"):
         build("torus", name=1)
+
+
+def test_a_slip_of_the_finger_does_not_take_all_memory() -> None:
+    with pytest.raises(BadInput) as caught:
+        build("polygon", n=10**9)
+    assert str(caught.value) == (
+        "family polygon, argument n: expected a whole number of at most 10000, found 1000000000"
+    )
