@@ -3,14 +3,14 @@
 from __future__ import annotations
 
 from collections import Counter
+from collections.abc import Iterable
 from itertools import combinations
-from math import prod
+from math import gcd, prod
 
 import networkx as nx
 from hypothesis import assume
 from hypothesis import strategies as st
 
-from certify.errors import BadInput
 from certify.exact import AbelianGroup, BasedComplex
 from certify.products import Pair, PolyhedralProduct, parse_pair
 from certify.products.real_toric import RealToricSpace
@@ -38,11 +38,14 @@ __all__ = [
     "own_pairs",
     "products_with_degrees",
     "real_toric_spaces",
+    "relabelled_mixed_products",
     "relabelled_products",
     "signed_permutations",
     "sphere_products",
     "spheres",
+    "summand_bases",
     "symmetric_complexes",
+    "twisted_pairs",
     "unimodular_matrices",
 ]
 
@@ -162,6 +165,32 @@ def unimodular_matrices(draw: st.DrawFn, max_size: int = 4) -> list[list[int]]:
     signs = draw(st.lists(st.sampled_from([1, -1]), min_size=size, max_size=size))
     rows = draw(st.permutations(matrix))
     return [[sign * entry for entry in row] for sign, row in zip(signs, rows, strict=True)]
+
+
+@st.composite
+def summand_bases(draw: st.DrawFn) -> tuple[list[dict[int, int]], int]:
+    """Draw a basis of a direct summand of ℤ^n, mostly without entries ±1, and n.
+
+    Vectors (p, q) with p and q coprime, on cells of their own, are disguised by changes of the basis of ℤ^n and by
+    adding vectors to others; both keep the summand one.
+    """
+    coprime = st.sampled_from([(2, 3), (5, 3), (4, -9), (6, 35), (10, 7), (0, 1), (1, 4)])
+    parts = draw(st.lists(coprime, max_size=3))
+    size = 2 * len(parts) + draw(st.integers(0, 2))
+    rows = [[0] * len(parts) for _ in range(size)]
+    for number, (p, q) in enumerate(parts):
+        rows[2 * number][number], rows[2 * number + 1][number] = p, q
+    factors = st.integers(-7, 7)
+    for _ in range(draw(st.integers(0, 4)) if size > 1 else 0):
+        i, j = draw(st.permutations(range(size)))[:2]
+        factor = draw(factors)
+        rows[i] = [a + factor * b for a, b in zip(rows[i], rows[j], strict=True)]
+    columns = [list(column) for column in zip(*rows, strict=True)]
+    for _ in range(draw(st.integers(0, 2)) if len(columns) > 1 else 0):
+        i, j = draw(st.permutations(range(len(columns))))[:2]
+        factor = draw(factors)
+        columns[i] = [a + factor * b for a, b in zip(columns[i], columns[j], strict=True)]
+    return [{cell: x for cell, x in enumerate(column) if x} for column in columns], size
 
 
 @st.composite
@@ -295,7 +324,11 @@ def products_with_degrees(draw: st.DrawFn) -> tuple[PolyhedralProduct, list[int]
 @st.composite
 def relabelled_products(draw: st.DrawFn) -> tuple[PolyhedralProduct, PolyhedralProduct]:
     """Draw a product, and the same one with its vertices in another order."""
-    space = draw(disc_products(max_vertices=6) | disc_products_with_torsion())
+    return draw(_relabelled(draw(disc_products(max_vertices=6) | disc_products_with_torsion())))
+
+
+@st.composite
+def _relabelled(draw: st.DrawFn, space: PolyhedralProduct) -> tuple[PolyhedralProduct, PolyhedralProduct]:
     order = draw(st.permutations(range(space.complex.vertex_count)))
     place = {vertex: number for number, vertex in enumerate(order)}
     faces = [[place[vertex] for vertex in facet] for facet in space.complex.facets]
@@ -340,26 +373,65 @@ NAMED_PAIRS = (
 """A pair of every form that has a name."""
 
 
-@st.composite
-def own_pairs(draw: st.DrawFn) -> Pair:
-    """Draw a pair by its cells: elementary pieces on both sides of A, in another basis that respects A.
+Cells = list[tuple[int, bool, dict[int, int]]]
+"""The cells of a pair: degree, whether it is outside A, and boundary on the numbers of other cells."""
 
-    Pieces are single cells, and e and t with d e = n t inside A, outside, or across. Adding multiples of earlier cells
-    of the same degree to later ones, those of A to any, leaves d d = 0 and A closed, but hides the pieces.
+_FREE = ("cell", "inner", "outer", "across")
+_PIECES = st.sampled_from((*_FREE, "onto torsion", "from torsion", "torsion to torsion"))
+
+
+@st.composite
+def own_pairs(draw: st.DrawFn, torsion: bool = True) -> Pair:
+    """Draw a pair by its cells: pieces on both sides of A, in another basis that respects A; A may be empty, or X.
+
+    Without `torsion`, the homology of A and that of X relative to A are free.
+
+    Adding multiples of earlier cells of the same degree to later ones, those of A to any, leaves d d = 0 and A closed,
+    but hides the pieces.
     """
-    pieces = draw(st.lists(st.tuples(st.integers(0, 2), st.integers(0, 3), st.integers(1, 3)), min_size=1, max_size=3))
-    cells: list[tuple[int, bool, dict[int, int]]] = [(0, False, {})]
-    for degree, sides, n in pieces:
-        if sides == 3:
-            cells.append((degree, draw(st.booleans()), {}))
-        else:
-            inner, outer = ((False, False), (True, True), (False, True))[sides]
-            cells.append((degree, inner, {}))
-            cells.append((degree + 1, outer, {len(cells) - 1: n}))
+    cells: Cells = [(0, draw(st.booleans()), {})]
+    for kind in draw(st.lists(_PIECES if torsion else st.sampled_from(_FREE), max_size=3)):
+        if len(cells) < 6:
+            cells += _piece(draw, kind, len(cells), torsion)
     return Pair.from_cells(_mixed(draw, cells))
 
 
-def _mixed(draw: st.DrawFn, cells: list[tuple[int, bool, dict[int, int]]]) -> list[tuple[int, bool, dict[int, int]]]:
+@st.composite
+def twisted_pairs(draw: st.DrawFn) -> Pair:
+    """Draw a pair whose connecting homomorphism H_k(X, A) → H_{k-1}(A) reaches torsion, and more cells around it."""
+    cells = _piece(draw, "onto torsion", 0)
+    if draw(st.booleans()):
+        cells += _piece(draw, draw(_PIECES), len(cells))
+    return Pair.from_cells(_mixed(draw, cells))
+
+
+def _piece(draw: st.DrawFn, kind: str, start: int, torsion: bool = True) -> Cells:
+    """Draw the cells of a piece, numbered from `start`: one that splits no further, or cells e and t with d e = n t."""
+    degree, n = draw(st.integers(0, 2)), draw(st.sampled_from((2, 1, 3, 4, 6)))
+    t, e, f = start, start + 1, start + 2
+    if kind == "cell":
+        return [(degree, draw(st.booleans()), {})]
+    if kind in ("inner", "outer", "across"):
+        return [
+            (degree, kind == "outer", {}),
+            (degree + 1, kind != "inner", {t: n if torsion or kind == "across" else 1}),
+        ]
+    n = max(n, 2)
+    c = draw(st.integers(1, n - 1))
+    if kind == "onto torsion":
+        # A cell outside A whose boundary is c times the generator of ℤ/n in H_k(A).
+        return [(degree, False, {}), (degree + 1, False, {t: n}), (degree + 1, True, {t: c})]
+    if kind == "from torsion":
+        # H_k(X, A) is ℤ/n, but n times its generator t is bounded only together with c times the cycle e of A.
+        return [(degree, True, {}), (degree, False, {}), (degree + 1, True, {t: n, e: c})]
+    # H_{k+1}(X, A) is ℤ/m, with a generator f whose boundary is m' t in A, where H_k(A) is ℤ/n and n divides m m'.
+    m = draw(st.sampled_from((2, 3, 4)))
+    times = n // gcd(n, m)
+    above = {f: m, e: -(m * times) // n}
+    return [(degree, False, {}), (degree + 1, False, {t: n}), (degree + 1, True, {t: times}), (degree + 2, True, above)]
+
+
+def _mixed(draw: st.DrawFn, cells: Cells) -> Cells:
     """Return the same complex in another basis: x' = x + c y for cells x, y of one degree, y in A if x is."""
     order = sorted(range(len(cells)), key=lambda number: (cells[number][0], cells[number][1]))
     place = {number: new for new, number in enumerate(order)}
@@ -389,21 +461,43 @@ def _mixed(draw: st.DrawFn, cells: list[tuple[int, bool, dict[int, int]]]) -> li
 def mixed_products(draw: st.DrawFn, max_vertices: int = 3, most_cells: int = 500) -> PolyhedralProduct:
     """Draw a product of any pairs, with names and without, mostly different ones at different vertices."""
     k = draw(complexes(max_vertices))
-    pair = st.sampled_from(NAMED_PAIRS).map(parse_pair) | own_pairs()
+    pair = st.sampled_from(NAMED_PAIRS).map(parse_pair) | own_pairs() | twisted_pairs()
     pairs = draw(st.lists(pair, min_size=k.vertex_count, max_size=k.vertex_count))
     assume(prod(len(pair.cells) for pair in pairs) <= most_cells)
     return PolyhedralProduct(k, tuple(pairs))
 
 
 @st.composite
+def relabelled_mixed_products(draw: st.DrawFn, max_vertices: int = 3) -> tuple[PolyhedralProduct, PolyhedralProduct]:
+    """Draw a product of any pairs, and the same one with its vertices in another order."""
+    return draw(_relabelled(draw(mixed_products(max_vertices))))
+
+
+@st.composite
 def real_toric_spaces(draw: st.DrawFn, max_vertices: int = 5) -> RealToricSpace:
-    """Draw a complex with a λ that is injective on its faces: rows are drawn, and unit rows added until it is."""
+    """Draw a complex with a λ that is injective on its faces, mostly with a kernel.
+
+    The values λ_i are drawn one by one, outside the span of the values on any face that the vertex completes, with a
+    new row where there are no others. The value of a ghost may be zero.
+    """
     k = draw(complexes(max_vertices))
-    m = k.vertex_count
-    rows = draw(st.lists(st.integers(0, 2**m - 1), max_size=m + 1))
-    for vertex in range(m):
-        try:
-            return RealToricSpace(k, tuple(f"{row:0{m}b}" if m else "" for row in rows))
-        except BadInput:
-            rows = [*rows, 1 << vertex]
-    return RealToricSpace(k, tuple(f"{row:0{m}b}" if m else "" for row in rows))
+    rows = draw(st.integers(0, k.dimension + 2))
+    columns: list[int] = []
+    for vertex in range(k.vertex_count):
+        taken: set[int] = set()
+        for mask in k.face_masks():
+            if mask >> vertex == 1:
+                taken |= _span(columns[i] for i in face_of(mask ^ 1 << vertex))
+        free = [value for value in range(1 << rows) if value not in taken]
+        if not free:
+            free, rows = [1 << rows], rows + 1
+        columns.append(draw(st.sampled_from(free)))
+    return RealToricSpace(k, tuple("".join(str(column >> row & 1) for column in columns) for row in range(rows)))
+
+
+def _span(vectors: Iterable[int]) -> set[int]:
+    """Return all sums of vectors over the field of two elements, given as masks."""
+    values = {0}
+    for vector in vectors:
+        values |= {value ^ vector for value in values}
+    return values

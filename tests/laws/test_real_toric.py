@@ -45,6 +45,27 @@ def test_rational_betti_numbers_by_the_row_space(space: RealToricSpace) -> None:
     assert found == {degree: rank for degree, rank in expected.items() if rank}
 
 
+@given(real_toric_spaces(), st.lists(st.integers(0, 5), min_size=1, max_size=2))
+def test_a_claim_about_some_degrees_is_part_of_the_claim_about_all(space: RealToricSpace, degrees: list[int]) -> None:
+    claim = RealToricClaim(space.complex, space.rows, tuple(degrees))
+    found = certified_groups(claim, degrees=sorted(set(degrees)), rows=list(space.rows))
+    whole = homology(space)
+    assert found == {(degree,): whole[degree] for degree in set(degrees) if degree in whole}
+
+
+@given(real_toric_spaces(), st.data())
+def test_the_order_of_the_vertices_does_not_matter(space: RealToricSpace, data: st.DataObject) -> None:
+    """Vertices move with their columns of λ."""
+    k = space.complex
+    order = data.draw(st.permutations(range(k.vertex_count)))
+    place = {vertex: number for number, vertex in enumerate(order)}
+    moved = SimplicialComplex.from_faces(
+        [k.labels[vertex] for vertex in order], [[place[vertex] for vertex in facet] for facet in k.facets]
+    )
+    rows = tuple("".join(row[vertex] for vertex in order) for row in space.rows)
+    assert homology(RealToricSpace(moved, rows)) == homology(space)
+
+
 @given(real_toric_spaces())
 def test_the_euler_characteristic_is_divided_by_the_order_of_the_kernel(space: RealToricSpace) -> None:
     """ker λ acts freely; it has 2^m over the number of elements of the row space."""

@@ -2,15 +2,19 @@
 
 from __future__ import annotations
 
-from hypothesis import given
+import pytest
+from flint import fmpz_mat
+from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from certify.claims import HomologyClaim, SmashClaim, SummandClaim, TableClaim, TorClaim
+from certify.claims.homology import Route
+from certify.errors import InternalError
 from certify.exact import AbelianGroup
 from certify.exact.completion import completion
 from certify.products import PolyhedralProduct, parse_pair
-from certify.simplicial import Label, SimplicialComplex
-from certify.simplicial.operations import full_subcomplex, join, link
+from certify.simplicial import Label, SimplicialComplex, build
+from certify.simplicial.operations import full_subcomplex, join
 from tests.helpers import (
     Homology,
     blocks_apart,
@@ -18,9 +22,17 @@ from tests.helpers import (
     certified_homology,
     cohomology,
     disc_product,
+    kunneth,
     product_of,
 )
-from tests.strategies import NAMED_PAIRS, complexes, complexes_with_face, complexes_with_torsion, unimodular_matrices
+from tests.strategies import (
+    NAMED_PAIRS,
+    complexes,
+    complexes_with_face,
+    complexes_with_torsion,
+    summand_bases,
+    unimodular_matrices,
+)
 
 
 def added(*parts: Homology) -> Homology:
@@ -38,16 +50,22 @@ def by_degree(groups: dict[tuple[int, ...], AbelianGroup]) -> Homology:
     return {degree: group for (degree,), group in groups.items()}
 
 
-@given(complexes(max_vertices=3), st.sampled_from(NAMED_PAIRS))
-def test_a_product_splits_into_smash_products_over_full_subcomplexes(k: SimplicialComplex, pair: str) -> None:
-    """Bahri, Bendersky, Cohen, Gitler, 2010 (from memory)."""
+@given(complexes(max_vertices=3), st.sampled_from(["blocks", "orbits"]), st.data())
+def test_a_product_splits_into_smash_products_over_full_subcomplexes(
+    k: SimplicialComplex, route: Route, data: st.DataObject
+) -> None:
+    """Bahri, Bendersky, Cohen, Gitler, 2010 (from memory); with other pairs at other vertices."""
+    name = st.sampled_from(NAMED_PAIRS)
+    pairs = data.draw(st.lists(name, min_size=k.vertex_count, max_size=k.vertex_count))
     parts = []
     for number in range(2**k.vertex_count):
-        chosen = [label for place, label in enumerate(k.labels) if number >> place & 1]
-        product = product_of(full_subcomplex(k, chosen), pair)
-        names = [pair] * len(chosen)
-        parts.append(by_degree(certified_groups(SmashClaim(product), degrees=None, pairs=names)))
-    assert added(*parts) == certified_homology(product_of(k, pair))
+        places = [place for place in range(k.vertex_count) if number >> place & 1]
+        names = [pairs[place] for place in places]
+        product = product_of(full_subcomplex(k, [k.labels[place] for place in places]), names)
+        claim = SmashClaim(product, route=route)
+        parts.append(by_degree(certified_groups(claim, degrees=None, pairs=names)))
+    # The whole is by cells, which know nothing of any splitting.
+    assert added(*parts) == certified_homology(product_of(k, pairs), route="cells")
 
 
 @given(complexes(max_vertices=5) | complexes_with_torsion())
@@ -69,29 +87,57 @@ def test_tor_is_the_cohomology_of_the_moment_angle_complex(k: SimplicialComplex)
     assert added(*parts) == cohomology(certified_homology(disc_product(k, 2)))
 
 
-@given(complexes(max_vertices=3), complexes(max_vertices=2))
-def test_tor_of_a_join_is_a_tensor_product(left: SimplicialComplex, right: SimplicialComplex) -> None:
-    """Ranks multiply: the face ring of a join is the tensor product of the two."""
-    ranks: dict[tuple[int, int], int] = {}
-    for (i, j), group in certified_groups(TorClaim(left)).items():
-        for (a, b), other in certified_groups(TorClaim(right)).items():
-            ranks[i + a, j + b] = ranks.get((i + a, j + b), 0) + group.rank * other.rank
-    found = certified_groups(TorClaim(join(left, right)))
-    assert {key: group.rank for key, group in found.items()} == ranks
+Bigraded = dict[tuple[int, ...], AbelianGroup]
+"""Groups under i and j."""
+
+
+def tor_of_a_product(left: Bigraded, right: Bigraded) -> Bigraded:
+    """Return what Künneth gives for the two Tor: in each pair of degrees j, homology graded by i."""
+    total: dict[int, list[Homology]] = {}
+    for j in {j for _, j in left}:
+        for k in {k for _, k in right}:
+            one = {i: group for (i, other), group in left.items() if other == j}
+            two = {i: group for (i, other), group in right.items() if other == k}
+            total.setdefault(j + k, []).append(kunneth(one, two))
+    return {(i, j): group for j, parts in total.items() for i, group in added(*parts).items()}
+
+
+@settings(max_examples=25)
+@given(complexes(max_vertices=3) | complexes_with_torsion(), complexes(max_vertices=2))
+def test_tor_of_a_join_is_given_by_kunneth(left: SimplicialComplex, right: SimplicialComplex) -> None:
+    """The face ring of a join is the tensor product of the two, and so is the Koszul complex that gives Tor."""
+    expected = tor_of_a_product(certified_groups(TorClaim(left)), certified_groups(TorClaim(right)))
+    assert certified_groups(TorClaim(join(left, right))) == expected
+
+
+def test_tor_of_a_join_is_given_by_kunneth_where_both_have_torsion() -> None:
+    plane = build("projective-plane")
+    tor = certified_groups(TorClaim(plane))
+    expected = tor_of_a_product(tor, tor)
+    # ℤ/2 in one place for each gives ℤ/2 ⊗ ℤ/2 and Tor(ℤ/2, ℤ/2), in neighbouring degrees.
+    assert [key for key, group in expected.items() if key[1] == 12 and group.torsion] == [(6, 12), (7, 12)]
+    assert certified_groups(TorClaim(join(plane, plane))) == expected
 
 
 @given(complexes_with_face(max_vertices=5), st.data())
 def test_a_summand_is_the_homology_of_a_link_cut_down(
     acted: tuple[SimplicialComplex, list[Label]], data: st.DataObject
 ) -> None:
+    """Its faces are the sets of kept vertices that form a face together with those that are out."""
     k, out = acted
-    others = [label for label in k.labels if label not in out]
-    kept = [label for label in others if data.draw(st.booleans())]
-    numbers = {label: number for number, label in enumerate(k.labels, start=1)}
+    kept = [label for label in k.labels if label not in out and data.draw(st.booleans())]
+    numbers = {label: number for number, label in enumerate(k.labels)}
     claim = SummandClaim(k, tuple(kept), tuple(out))
-    fields = {"kept": sorted(numbers[label] for label in kept), "out": sorted(numbers[label] for label in out)}
-    part = full_subcomplex(link(k, out), kept)
-    everything = 2**part.vertex_count - 1
+    fields = {"kept": sorted(numbers[label] + 1 for label in kept), "out": sorted(numbers[label] + 1 for label in out)}
+    faces = set(k.face_masks())
+    base = sum(1 << numbers[label] for label in out)
+    chosen = [
+        [place for place in range(len(kept)) if number >> place & 1]
+        for number in range(2 ** len(kept))
+        if base + sum(1 << numbers[kept[place]] for place in range(len(kept)) if number >> place & 1) in faces
+    ]
+    part = SimplicialComplex.from_faces(kept, chosen)
+    everything = 2 ** len(kept) - 1
     assert by_degree(certified_groups(claim, **fields)) == blocks_apart(part)[everything]
 
 
@@ -109,19 +155,43 @@ def test_spheres_with_a_point_have_a_cell_for_each_face(k: SimplicialComplex) ->
     assert found == {2 * size: AbelianGroup(number) for size, number in enumerate(k.f_vector()) if number}
 
 
+def completed(vectors: list[dict[int, int]], size: int) -> int:
+    """Return the determinant of vectors, what completes them, and the single cells elsewhere."""
+    leads, more = completion(vectors)
+    assert len(set(leads)) == len(leads) == len(vectors) + len(more)
+    assert all(set(vector) <= set(leads) for vector in more)
+    single = [{cell: 1} for cell in range(size) if cell not in leads]
+    whole = [*vectors, *more, *single]
+    assert len(whole) == size
+    return abs(int(fmpz_mat([[vector.get(cell, 0) for vector in whole] for cell in range(size)]).det())) if size else 1
+
+
 @given(unimodular_matrices(), st.data())
 def test_a_part_of_a_basis_is_completed_to_a_basis(matrix: list[list[int]], data: st.DataObject) -> None:
-    """Vectors that are part of a basis come back with others that make one of all cells that they use."""
     size = len(matrix)
     number = data.draw(st.integers(0, size))
     vectors = [{i: row[j] for i, row in enumerate(matrix) if row[j]} for j in range(number)]
-    leads, others = completion(vectors)
-    used = sorted({cell for vector in [*vectors, *others] for cell in vector})
-    assert set(leads) <= set(used) or not used
-    from flint import fmpz_mat
+    assert completed(vectors, size) == 1
 
-    whole = [*vectors, *others]
-    if whole:
-        assert len(whole) == len(leads)
-        dense = fmpz_mat([[vector.get(cell, 0) for vector in whole] for cell in sorted(leads)])
-        assert abs(int(dense.det())) == 1
+
+@given(summand_bases())
+def test_a_basis_of_a_summand_without_units_is_completed_to_a_basis(drawn: tuple[list[dict[int, int]], int]) -> None:
+    vectors, size = drawn
+    assert completed(vectors, size) == 1
+
+
+@given(
+    summand_bases().filter(lambda drawn: bool(drawn[0])), st.integers(-3, 3).filter(lambda x: abs(x) != 1), st.data()
+)
+def test_what_is_no_basis_of_a_summand_is_refused(
+    drawn: tuple[list[dict[int, int]], int], factor: int, data: st.DataObject
+) -> None:
+    """A multiple of one vector, plus others, spans a smaller lattice of the same rank; or a dependent one, for 0."""
+    vectors, size = drawn
+    place = data.draw(st.integers(0, len(vectors) - 1))
+    mixed = [factor * vectors[place].get(cell, 0) for cell in range(size)]
+    for vector in vectors[:place]:
+        mixed = [a + vector.get(cell, 0) for cell, a in enumerate(mixed)]
+    wrong = [*vectors[:place], {cell: x for cell, x in enumerate(mixed) if x}, *vectors[place + 1 :]]
+    with pytest.raises(InternalError, match="no basis of a direct summand"):
+        completion(wrong)
