@@ -438,12 +438,15 @@ def _mixed(draw: st.DrawFn, cells: Cells) -> Cells:
     moved = [
         (cells[number][0], cells[number][1], {place[low]: n for low, n in cells[number][2].items()}) for number in order
     ]
-    for _ in range(draw(st.integers(0, 4))):
-        x, y = draw(st.integers(0, len(moved) - 1)), draw(st.integers(0, len(moved) - 1))
-        c = draw(st.integers(-2, 2))
-        fits = x != y and moved[x][0] == moved[y][0] and moved[y][1] <= moved[x][1] and c
-        if not fits:
-            continue
+    moves = [
+        (x, y)
+        for x, (degree, outside, _) in enumerate(moved)
+        for y, (other, side, _) in enumerate(moved)
+        if x != y and degree == other and side <= outside
+    ]
+    for _ in range(draw(st.integers(0, 5)) if moves else 0):
+        x, y = draw(st.sampled_from(moves))
+        c = draw(st.sampled_from((1, -1, 2, -3)))
         # x' = x + c y: d x' = d x + c d y, and in boundaries x = x' - c y.
         boundary = Counter(moved[x][2])
         for cell, n in moved[y][2].items():

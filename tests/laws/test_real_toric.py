@@ -5,10 +5,12 @@ from __future__ import annotations
 from functools import reduce
 from operator import xor
 
+import pytest
 from hypothesis import given
 from hypothesis import strategies as st
 
 from certify.claims import RealToricClaim
+from certify.errors import BadInput
 from certify.products.real_toric import RealToricSpace
 from certify.products.small_covers import real_bott_manifold
 from certify.simplicial import SimplicialComplex
@@ -73,6 +75,22 @@ def test_the_euler_characteristic_is_divided_by_the_order_of_the_kernel(space: R
     upstairs = sum((-1) ** d * 2 ** (k.vertex_count - d) * number for d, number in enumerate(k.f_vector()))
     found = sum((-1) ** degree * group.rank for degree, group in homology(space).items())
     assert found * 2**k.vertex_count == upstairs * len(row_space(space))
+
+
+@given(complexes(max_vertices=4), st.data())
+def test_a_map_is_refused_exactly_when_its_kernel_does_not_act_freely(
+    k: SimplicialComplex, data: st.DataObject
+) -> None:
+    """An element of (ℤ/2)^m has fixed points just when its support is a face: it reflects these intervals."""
+    m = k.vertex_count
+    masks = data.draw(st.lists(st.integers(0, 2**m - 1), max_size=m))
+    rows = tuple("".join(str(mask >> vertex & 1) for vertex in range(m)) for mask in masks)
+    kernel = [element for element in range(1, 2**m) if all((element & mask).bit_count() % 2 == 0 for mask in masks)]
+    if set(kernel) & set(k.face_masks()):
+        with pytest.raises(BadInput, match="injective on each face"):
+            RealToricSpace(k, rows)
+    else:
+        assert homology(RealToricSpace(k, rows))
 
 
 @given(complexes(max_vertices=4))
