@@ -475,6 +475,36 @@ def decide(faces: Faces, place: int, move: int) -> Faces:
     return tuple(left)
 
 
+def choose(tags: tuple[Tag, ...], faces: Faces, shape: Shape) -> tuple[tuple[Tag, ...], Faces]:
+    """Return tags and faces after a choice for the next vertex.
+
+    As long as there is a superfluous vertex among those that are kept, the first one is left out (Lemma C).
+    """
+    faces = decide(faces, len(tags), shape[0])
+    tags = tags if shape[0] in (STAY, OUT) else (*tags, shape[1])
+    place = 0
+    while place < len(tags):
+        if superfluous(faces, place, tags):
+            tags, faces, place = tags[:place] + tags[place + 1 :], decide(faces, place, STAY), 0
+        else:
+            place += 1
+    return tags, faces
+
+
+def superfluous(faces: Faces, place: int, tags: tuple[Tag, ...]) -> bool:
+    """Tell whether a vertex whose tag is a number is in no face, or another one with tag 1 completes all its faces."""
+    if type(tags[place]) is not int:
+        return False
+    bit = 1 << place
+    largest = next(filter(None, ([mask for mask in masks if mask & bit] for masks in reversed(faces))), None)
+    if largest is None:
+        return True
+    common = reduce(and_, largest) ^ bit  # the largest faces cannot be completed, so they have the other vertex
+    apexes = [1 << other for other, tag in enumerate(tags) if tag == 1 and common >> other & 1]
+    around = [mask for masks in faces for mask in masks if mask & bit] if apexes else []
+    return any(2 * sum(1 for mask in around if mask & apex) == len(around) for apex in apexes)
+
+
 def block_classes(statement: Statement, budget: Budget) -> Iterator[Block]:
     """Yield the blocks, which are the choices of a summand for each vertex; equal ones together (Lemma D).
 
@@ -493,16 +523,15 @@ def block_classes(statement: Statement, budget: Budget) -> Iterator[Block]:
         level: States = {}
         for (tags, faces), (name, shifts) in states.items():
             budget.spend("cells", sum(map(len, faces)) + len(shifts))
-            for digit, (move, tag, degrees) in zip(DIGITS, statement.pairs[vertex].shapes, strict=False):
-                counts = shifts
+            for digit, shape in zip(DIGITS, statement.pairs[vertex].shapes, strict=False):
+                counts, degrees = shifts, shape[2]
                 if degrees != {0: 1}:
                     counts = {}
                     for shift, more in product(shifts, degrees):
                         if shift + more < statement.top:
                             counts[shift + more] = counts.get(shift + more, 0) + shifts[shift] * degrees[more]
-                left = decide(faces, len(tags), move) if counts else ()
-                if left:
-                    state = (tags if move in (STAY, OUT) else (*tags, tag), left)
+                state = choose(tags, faces, shape) if counts else (tags, ())
+                if state[1]:
                     known = level.setdefault(state, (name + digit, {}))[1]
                     known.update((s, n + known.get(s, 0)) for s, n in counts.items())
         runs: list[States] = []
@@ -972,14 +1001,13 @@ class Choices:
         while not word.startswith(self.path[-1][0]):
             self.path.pop()
         for vertex in range(len(self.path) - 1, len(word)):
-            move, tag, degrees = self.pairs[vertex].shapes[DIGITS.index(word[vertex])]
+            shape = self.pairs[vertex].shapes[DIGITS.index(word[vertex])]
             _, tags, faces, shifts = self.path[-1]
             counts: Counter[int] = Counter()
-            for shift, more in product(shifts, degrees):
-                counts[shift + more] += shifts[shift] * degrees[more]
-            left = decide(faces, len(tags), move) if faces else ()
-            kept = tags if move in (STAY, OUT) else (*tags, tag)
-            self.path.append((word[: vertex + 1], kept, left, counts))
+            for shift, more in product(shifts, shape[2]):
+                counts[shift + more] += shifts[shift] * shape[2][more]
+            state = choose(tags, faces, shape) if faces else (tags, ())
+            self.path.append((word[: vertex + 1], *state, counts))
         return self.path[-1]
 
 
@@ -1047,9 +1075,10 @@ def spread(weights: Sequence[int], base: int) -> list[int]:
 def prove_tor(statement: Statement, lines: Lines, budget: Budget) -> Proved:
     """Return Tor of the face ring by bidegree (i, j), j = |I|: cohomology of K_I in degree j - i - 1 (Hochster)."""
     total: Total = {}
+    statement.pairs = [Pair("(D2, S1)", budget)] * statement.vertices  # the shift of a block is |I|
     for block in block_classes(statement, budget):
-        j, times = len(block[1]), sum(block[3].values())
-        for k, (rank, orders) in enumerate(block_homology(block, statement.top, lines, budget)):
+        groups = block_homology(block, statement.top, lines, budget)
+        for (j, times), (k, (rank, orders)) in product(block[3].items(), enumerate(groups)):
             put(total, (j - k, j), rank, [], times)
             put(total, (j - k - 1, j), 0, orders, times)
     return stated_groups(statement, total)

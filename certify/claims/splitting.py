@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from collections.abc import Hashable, Iterable, Iterator, Mapping
 from dataclasses import dataclass
+from itertools import product
 from typing import Any, ClassVar
 
 from certify.claims.base import Contribution, GroupsClaim, Sum, Task
@@ -20,8 +21,8 @@ __all__ = ["SummandClaim", "TableClaim", "TorClaim"]
 
 
 def _subcomplexes(complex_: SimplicialComplex) -> PolyhedralProduct:
-    """Return a product whose blocks are the full subcomplexes."""
-    return PolyhedralProduct(complex_, parse_pairs("(D1, S0)", complex_.vertex_count))
+    """Return a product whose blocks are the full subcomplexes, each with its number of vertices as shift."""
+    return PolyhedralProduct(complex_, parse_pairs("(D2, S1)", complex_.vertex_count))
 
 
 @dataclass(frozen=True)
@@ -69,8 +70,7 @@ class TorClaim(GroupsClaim[tuple[int, int]]):
         for contribution in contributions:
             block = contribution.source
             if isinstance(block, Block):
-                j, times = len(block.tags), sum(block.shifts.values())
-                for size, group in enumerate(contribution.groups):
+                for (j, times), (size, group) in product(block.shifts.items(), enumerate(contribution.groups)):
                     found.add((j - size, j), group.rank, (), times)
                     found.add((j - size - 1, j), 0, group.torsion, times)
         return found.groups()

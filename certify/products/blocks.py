@@ -2,8 +2,9 @@
 
 The cellular chain complex of (X, A)^K is the direct sum, over all choices of one summand of C(X_i) for each vertex i,
 of tensor products cut down to supports in K; docs/mathematics.md proves it. For discs the choices are the sets I of
-vertices, and a block is the augmented oriented chain complex of the full subcomplex K_I, shifted. After the vertices
-that are kept have been moved down to 1, 2, …, many blocks are the same complex, and one record serves them all.
+vertices, and a block is the augmented oriented chain complex of the full subcomplex K_I, shifted. A vertex that is
+X, which leaves the homology as it is. After the vertices that are left have been
+moved down to 1, 2, …, many blocks are the same complex, and one record serves them all.
 """
 
 from __future__ import annotations
@@ -15,7 +16,7 @@ from itertools import pairwise
 from certify.exact import BasedComplex, Entries
 from certify.products.cells import word_complex
 from certify.products.space import PolyhedralProduct
-from certify.products.splitting import Alphabet, Letter, Move, Tag
+from certify.products.splitting import Alphabet, Letter, Move, Shape, Tag
 
 __all__ = ["BATCH", "DIGITS", "Block", "Choices", "block_classes"]
 
@@ -32,14 +33,14 @@ _States = dict[_State, tuple[str, dict[int, int]]]
 
 @dataclass(frozen=True, slots=True)
 class Block:
-    """All choices of summands that lead to the same complex when the vertices that are kept are moved down to 1, 2, ….
+    """All choices of summands that lead to the same complex, without dominated vertices, moved down to 1, 2, ….
 
     Parameters
     ----------
     name : str
         The first such choice as a word, a digit for each vertex. For discs: 1 for the vertices in I, 0 for the others.
     tags : tuple of Tag
-        What the vertices that are kept bring; for discs all are 1.
+        What the vertices of the complex bring; for discs all are 1.
     faces : tuple of int
         The complex on these vertices as bit masks, sorted by size and mask, ∅ first.
     shifts : mapping
@@ -132,8 +133,15 @@ def block_classes(product: PolyhedralProduct, top: int | None = None) -> Iterato
     Notes
     -----
     The vertices are decided one after the other; choices that leave the same complex on the vertices kept and undecided
-    are merged on the way, so the cost follows the number of different complexes and not that of the choices. A level
-    with more than `BATCH` faces is cut into runs, finished one after the other, which bounds the memory.
+    are merged on the way, so the cost follows the number of different complexes and not that of the choices. Dominated
+    vertices are left out on the way too: of a polygon, sets of points are left, and the number of complexes grows with
+    the square of m where it doubled with each vertex. A level with more than `BATCH` faces is cut into runs, finished
+    one after the other, which bounds the memory.
+
+    References
+    ----------
+    J. A. Barmak and E. G. Minian, Strong homotopy types, nerves and collapses, 2012, on dominated vertices
+    (from memory).
     """
     pending: list[tuple[int, _States]] = [(0, {((), _relevant_faces(product, top)): ("", {0: 1})})]
     while pending:
@@ -161,9 +169,8 @@ class Choices:
         for vertex in range(len(self._path) - 1, len(word)):
             shape = self._product.pairs[vertex].shapes[DIGITS.index(word[vertex])]
             _, (tags, faces), shifts = self._path[-1]
-            left = _decide(faces, len(tags), shape.move) if faces else ()
-            kept = tags if shape.move in (Move.STAY, Move.OUT) else (*tags, shape.tag)
-            self._path.append((word[: vertex + 1], (kept, left), _convolved(shifts, shape.shifts, self._top)))
+            state = _decide(tags, faces, shape) if faces else (tags, ())
+            self._path.append((word[: vertex + 1], state, _convolved(shifts, shape.shifts, self._top)))
         name, (tags, faces), shifts = self._path[-1]
         return Block(name, tags, faces, shifts) if faces and shifts else None
 
@@ -186,10 +193,9 @@ def _decide_all(states: _States, product: PolyhedralProduct, vertex: int, top: i
     for (tags, faces), (name, shifts) in states.items():
         for digit, shape in zip(DIGITS, product.pairs[vertex].shapes, strict=False):
             moved = _convolved(shifts, shape.shifts, top)
-            left = _decide(faces, len(tags), shape.move) if moved else ()
-            if left:
-                kept = tags if shape.move in (Move.STAY, Move.OUT) else (*tags, shape.tag)
-                _merge(level, (kept, left), name + digit, moved)
+            state = _decide(tags, faces, shape) if moved else (tags, ())
+            if state[1]:
+                _merge(level, state, name + digit, moved)
     return level
 
 
@@ -215,19 +221,68 @@ def _merge(level: _States, state: _State, name: str, shifts: dict[int, int]) -> 
         known[shift] = known.get(shift, 0) + number
 
 
-def _decide(faces: _Masks, place: int, move: Move) -> _Masks:
+def _decide(tags: tuple[Tag, ...], faces: _Masks, shape: Shape) -> _State:
+    """Return what a choice for the next vertex leaves, without superfluous vertices; no faces if no face is left."""
+    left = _moved(faces, len(tags), shape.move)
+    return _reduced(tags if shape.move in (Move.STAY, Move.OUT) else (*tags, shape.tag), left)
+
+
+def _moved(faces: _Masks, place: int, move: Move) -> _Masks:
     """Return what becomes of the faces when the vertex at `place` is decided; nothing if no face is left."""
     if move == Move.KEEP:
         return faces
     bit = 1 << place
-    below = bit - 1
-    above = ~below
     if move == Move.STAY:
-        return tuple([mask & below | mask >> 1 & above for mask in faces if not mask & bit])
+        return _without(faces, bit)
     if move == Move.OUT:
+        below, above = bit - 1, -bit
         return tuple([mask & below | mask >> 1 & above for mask in faces if mask & bit])
     chosen = [mask & ~bit for mask in faces if bool(mask & bit) == (move == Move.OUTER)]
     return tuple(sorted(chosen + [mask | bit for mask in chosen], key=lambda mask: (mask.bit_count(), mask)))
+
+
+def _without(faces: _Masks, bit: int) -> _Masks:
+    """Return the faces without a vertex; the vertices above it move down by one."""
+    below, above = bit - 1, -bit
+    return tuple([mask & below | mask >> 1 & above for mask in faces if not mask & bit])
+
+
+def _reduced(tags: tuple[Tag, ...], faces: _Masks) -> _State:
+    """Leave out the first kept vertex that is superfluous, as long as there is one (Lemma C)."""
+    apexes = sum([1 << place for place, tag in enumerate(tags) if tag == 1])
+    place = 0
+    while place < len(tags):
+        bit = 1 << place
+        if isinstance(tags[place], int) and _is_superfluous(faces, bit, apexes & ~bit):
+            faces = _without(faces, bit)
+            tags = tags[:place] + tags[place + 1 :]
+            apexes = apexes & bit - 1 | apexes >> 1 & -bit
+            place = 0
+        else:
+            place += 1
+    return tags, faces
+
+
+def _is_superfluous(faces: _Masks, bit: int, apexes: int) -> bool:
+    """Tell whether a vertex is in no face, or one of the apexes completes all its faces to faces."""
+    size = 0
+    for mask in reversed(faces):  # an apex lies in all of the largest faces, and few vertices do
+        if mask & bit:
+            if mask.bit_count() < size:
+                break
+            apexes &= mask
+            if not apexes:
+                return False
+            size = mask.bit_count()
+    if not size:
+        return True
+    around = [mask for mask in faces if mask & bit]
+    while apexes:
+        apex = apexes & -apexes
+        if 2 * sum([1 for mask in around if mask & apex]) == len(around):
+            return True
+        apexes ^= apex
+    return False
 
 
 def _runs(level: _States) -> list[_States]:

@@ -19,11 +19,13 @@ from tests.surface.running import Certify, command_line, environment, in_process
 SHEET = """
 [complexes.c]
 family = "cyclic-polytope"
-m = 13
+m = 12
 d = 4
 [complexes.small]
 family = "polygon"
 n = 5
+[pairs.planes]  # nothing is dominated where d e = 2 t
+cells = [{ degree = 0, in = "A" }, { degree = 1, in = "A" }, { degree = 2, in = "X", boundary = { 2 = 2 } }]
 [[claims]]
 id = "small"
 kind = "homology"
@@ -33,7 +35,7 @@ pair = "(D1, S0)"
 id = "long"
 kind = "homology"
 complex = "c"
-pair = "(D2, S1)"
+pair = "planes"
 """
 
 

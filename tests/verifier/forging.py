@@ -42,6 +42,9 @@ Edit = Callable[[Values], object]
 DEGREE_TWO = Pair.from_cells([(0, False, {}), (1, False, {}), (1, True, {}), (2, True, {1: 1, 2: -2})])
 """A circle A in a space X, on which it goes around twice: a pair with a summand of three cells."""
 
+TWICE = Pair.from_cells([(0, False, {}), (1, False, {}), (2, True, {1: 2})])
+"""A circle A in the projective plane X: a pair with a summand d e = 2 t."""
+
 
 def _over(k: SimplicialComplex, pair: str, route: Route = "blocks", **fields: Any) -> HomologyClaim:
     return HomologyClaim(PolyhedralProduct(k, parse_pairs(pair, k.vertex_count)), route=route, **fields)
@@ -57,6 +60,9 @@ ROTATION, REFLECTION = (2, 3, 4, 5, 1), (1, 5, 4, 3, 2)
 CLAIMS: dict[str, Claim[Any]] = {
     "ring": _over(polygon(5), "(D1, S0)"),
     "ring-by-orbits": _over(polygon(5), "(D1, S0)", "orbits"),
+    "bipartite-by-orbits": _over(
+        SimplicialComplex.from_facets([[1, 2], [1, 4], [1, 5], [3, 2], [3, 4], [3, 5]]), "(D1, S0)", "orbits"
+    ),
     "ring-by-cells": _over(polygon(4), "(D1, S0)", "cells"),
     "low-degrees": _over(polygon(5), "(D2, S1)", degrees=(3,)),
     "plane": _over(build("projective-plane"), "(D1, S0)"),
@@ -66,6 +72,7 @@ CLAIMS: dict[str, Claim[Any]] = {
     "real-projective": _mixed("(RP3, *)", "(RP2, *)", route="cells"),
     "moore-alone": _mixed("(P2(3), *)", route="cells"),
     "circle": _over(SimplicialComplex.from_facets([[]], vertices=[1]), "(D2, S1)", "cells"),
+    "twos": _mixed(TWICE, TWICE),
     "own-pair": _mixed(DEGREE_TWO, "(D1, S0)"),
     "smash": SmashClaim(PolyhedralProduct(build("projective-plane"), parse_pairs("(D1, S0)", 6))),
     "real-toric": RealToricClaim(polygon(5), ("10101", "01011")),

@@ -127,6 +127,17 @@ CASES: dict[str, tuple[str, Edit, str]] = {
     "two records by cells": ("ring-by-cells", lambda v: v.insert(1, v[1]), "keys"),
     "a record of an orbit missing": ("ring-by-orbits", lambda v: v.pop(-2), "keys"),
     "a record of an orbit twice": ("ring-by-orbits", lambda v: v.insert(3, v[3]), "block"),
+    # Vertices that are left out, though they may not be (Lemma C).
+    "a vertex left out that one with the tag 2 dominates": (
+        "twos",
+        lambda v: v[-2].update(basis=v[-3]["basis"]),
+        "degrees",
+    ),
+    "a dominated vertex that is not left out": (
+        "ring",
+        lambda v: v.insert(2, {"basis": [{}, {"cycles": [[0, -1, 1, 1]], "matched": [0]}], "block": "00011"}),
+        "block",
+    ),
     # Lemma A.
     "a cycle that is none": ("ring", _basis(-2, 1, cycles=[[1, 1]]), "cycle"),
     "a pair in degree 0": ("ring", _basis(1, 0, cycles=None, pairs=[[[0, 1]]]), "boundary"),
@@ -193,7 +204,7 @@ CASES: dict[str, tuple[str, Edit, str]] = {
     "a generator with true": ("ring-by-orbits", _generators([True, 2, 3, 4, 5]), "symmetry"),
     "a generator that moves faces to non-faces": ("ring-by-orbits", _generators([2, 1, 3, 4, 5]), "symmetry"),
     "the generators missing": ("ring-by-orbits", lambda v: v.pop(1), "keys"),
-    "no symmetry, with the records of orbits": ("ring-by-orbits", _generators(), "block"),
+    "no symmetry, with the records of orbits": ("bipartite-by-orbits", _generators(), "block"),
     "a generator that moves pairs": (
         "ring-by-orbits",
         lambda v: v[0][S]["pairs"].__setitem__(0, "(D2, S1)"),
