@@ -8,7 +8,7 @@ from certify.exact import BasedComplex, Entries, entries
 from certify.products.space import PolyhedralProduct
 from certify.products.splitting import Alphabet
 
-__all__ = ["Word", "cell_complex", "leibniz", "word_complex", "words_by_degree"]
+__all__ = ["Word", "cell_complex", "complex_of_words", "leibniz", "word_complex", "words_by_degree"]
 
 Word = tuple[int, ...]
 """A cell: the number of a cell of its pair for each vertex."""
@@ -61,9 +61,14 @@ def words_by_degree(faces: Iterable[int], alphabets: Sequence[Alphabet], top: in
 
 def word_complex(faces: Iterable[int], alphabets: Sequence[Alphabet], top: int | None = None) -> BasedComplex:
     """Return the complex of the words of `words_by_degree`, with the Leibniz rule as boundary."""
+    return complex_of_words(words_by_degree(faces, alphabets, top), alphabets)
+
+
+def complex_of_words(words: Iterable[Sequence[Word]], alphabets: Sequence[Alphabet]) -> BasedComplex:
+    """Return the complex of these words by degree, with the Leibniz rule as boundary."""
     boundaries: list[tuple[Entries, ...]] = []
     below: dict[Word, int] = {}
-    for cells in words_by_degree(faces, alphabets, top):
+    for cells in words:
         boundaries.append(tuple(entries({below[end]: x for end, x in leibniz(word, alphabets)}) for word in cells))
         below = {word: number for number, word in enumerate(cells)}
     return BasedComplex(tuple(boundaries))

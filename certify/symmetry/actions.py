@@ -11,7 +11,7 @@ from certify.exact import AdaptedBasis, BasedComplex
 from certify.exact.coordinates import Coordinates
 from certify.products import PolyhedralProduct
 from certify.products.blocks import DIGITS
-from certify.products.cells import Word, word_complex, words_by_degree
+from certify.products.cells import Word, complex_of_words, words_by_degree
 from certify.products.splitting import Alphabet, Letter, Move, Shape
 from certify.symmetry.elements import Element, cycles_of
 
@@ -68,22 +68,21 @@ class ActedCells:
 
     def chains(self) -> BasedComplex:
         """Return the complex, up to the degree above the one that is watched."""
-        return word_complex(self.faces, self.alphabets, self.degree + 1)
+        return complex_of_words(self._words, self.alphabets)
 
     @cached_property
-    def _words(self) -> list[Word]:
-        """The cells of the degree that is watched."""
-        words = words_by_degree(self.faces, self.alphabets, self.degree)
-        return words[self.degree] if len(words) > self.degree else []
+    def _words(self) -> list[list[Word]]:
+        """The cells, up to the degree above the one that is watched."""
+        return words_by_degree(self.faces, self.alphabets, self.degree + 1)
 
     @property
     def is_watched(self) -> bool:
         """Whether there are cells of the degree that is watched."""
-        return bool(self._words)
+        return len(self._words) > self.degree and bool(self._words[self.degree])
 
     def matrices(self, complex_: BasedComplex, basis: AdaptedBasis) -> list[list[tuple[int, ...]]]:
         """Return the columns of the matrix of each element on homology modulo torsion, in the cycles of the basis."""
-        words = self._words
+        words = self._words[self.degree]
         number = {word: place for place, word in enumerate(words)}
         coordinates = Coordinates(complex_, basis, self.degree)
         matrices = []
