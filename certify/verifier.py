@@ -1294,13 +1294,13 @@ def matrix_of(space: Words, element: Element, alphabets: Sequence[Alphabet]) -> 
 
 
 def watched_words(
-    statement: Statement, faces: Faces, alphabets: Sequence[Alphabet], lines: Lines, budget: Budget, block: str | None
+    faces: Faces, alphabets: Sequence[Alphabet], degree: int, lines: Lines, budget: Budget, block: str | None = None
 ) -> Words | None:
-    """Check the record of a product of cells, and return it with its basis in the degree of the claim, if any."""
-    space = Words(faces, alphabets, statement.top, budget)
-    if len(space.cells) <= statement.degree or not space.cells[statement.degree]:
+    """Check the record of a product of cells, and return it with its basis in this degree, if it has cells there."""
+    space = Words(faces, alphabets, degree + 1, budget)
+    if len(space.cells) <= degree or not space.cells[degree]:
         return None
-    space.watched = statement.degree
+    space.watched = degree
     value = record(lines.next(), ("basis",) if block is None else ("basis", "block"))
     require(value.get("block") == block, "block", f"the record of block {block} is expected here")
     homology(space, value["basis"], budget)
@@ -1311,7 +1311,7 @@ def traces_by_cells(statement: Statement, elements: list[Element], lines: Lines,
     """Return the traces of elements on the homology of the whole product."""
     require(statement.value["summands"] is None, "statement", "single summands have the route blocks only")
     alphabets = [tuple(pair.cells) for pair in statement.pairs]
-    space = watched_words(statement, face_masks(statement, budget), alphabets, lines, budget, None)
+    space = watched_words(face_masks(statement, budget), alphabets, statement.degree, lines, budget)
     matrices = [matrix_of(space, element, alphabets) if space else [] for element in elements]
     return [sum(column[i] for i, column in enumerate(matrix)) for matrix in matrices]
 
@@ -1324,6 +1324,7 @@ def traces_by_blocks(statement: Statement, elements: list[Element], lines: Lines
     """
     find_summands(statement, lines, budget)
     faces = face_masks(statement, budget)
+    size = sum(map(len, faces))
     traces = []
     chosen = None
     if statement.value["summands"] is not None:  # the orbits of some words
@@ -1342,33 +1343,71 @@ def traces_by_blocks(statement: Statement, elements: list[Element], lines: Lines
         for vertex in range(1, statement.vertices + 1):
             cycle = orbit(vertex, partial(step, element))
             if vertex == min(cycle):
-                cycles.append(cycle)
-        plain = tuple(map(abs, element))
+                cycles.append([v - 1 for v in cycle])
         options = [
             [
                 (digit, shape, shift)
-                for digit, shape in enumerate(statement.pairs[cycle[0] - 1].shapes)
+                for digit, shape in enumerate(statement.pairs[cycle[0]].shapes)
                 for shift in sorted(shape[2])
             ]
             for cycle in cycles
         ]
+        known: dict[object, int] = {}
+        room = BATCH
         for choice in product(*options):
-            budget.spend("cells", 1)
+            budget.spend("cells", size)
             alphabets: list[Alphabet] = [()] * statement.vertices
+            shapes: list[Shape] = [(STAY, 0, {})] * statement.vertices
             word, factor, low = [""] * statement.vertices, 1, 0
             for cycle, (digit, shape, shift) in zip(cycles, choice, strict=True):
                 factor *= shape[2][shift]
                 low += shift * len(cycle)
-                for vertex in cycle:
-                    word[vertex - 1] = DIGITS[digit]
-                    alphabets[vertex - 1] = letters_of(shape, shift)
-                    factor *= -1 if element[vertex - 1] < 0 and shape[0] == KEEP else 1
+                for v in cycle:
+                    word[v], alphabets[v], shapes[v] = DIGITS[digit], letters_of(shape, shift), shape
+                    factor *= -1 if element[v] < 0 and shape[0] == KEEP else 1
             if low <= statement.degree and (chosen is None or "".join(word) in chosen):
-                space = watched_words(statement, faces, alphabets, lines, budget, "".join(word))
-                columns = matrix_of(space, plain, alphabets) if space else []
-                trace += factor * sum(column[i] for i, column in enumerate(columns))
+                shorten(alphabets, shapes, cycles, faces)
+                live = [v for v, letters in enumerate(alphabets) if letters[1:] or letters[0][1] or letters[0][0] & 1]
+                degree = statement.degree - sum(a[0][0] for v, a in enumerate(alphabets) if v not in live)
+                letters = tuple(alphabets[v] for v in live)
+                places = sum(1 << v for v in live if any(outside for _, outside, _ in alphabets[v]))
+                part = tuple(tuple(restricted(mask, live) for mask in masks if not mask & ~places) for masks in faces)
+                plain = tuple(live.index(abs(element[v]) - 1) + 1 for v in live)
+                key = (part, letters, plain, degree)
+                if key not in known:
+                    room -= sum(map(len, part))
+                    if room < 0:
+                        known, room = {}, BATCH - sum(map(len, part))
+                    space = watched_words(part, letters, degree, lines, budget, "".join(word))
+                    columns = matrix_of(space, plain, letters) if space else []
+                    known[key] = sum(column[i] for i, column in enumerate(columns))
+                trace += factor * known[key]
         traces.append(trace)
     return traces
+
+
+def shorten(alphabets: list[Alphabet], shapes: list[Shape], cycles: list[list[int]], faces: Faces) -> None:
+    """Leave only the cell t at the vertices of a cycle that are superfluous, and not just by one another (Lemma C)."""
+    out = sum(1 << v for v, (move, _, _) in enumerate(shapes) if move in (OUT, OUTER))
+    kept = sum(1 << v for v, (move, _, _) in enumerate(shapes) if move == KEEP)
+    left = tuple(tuple(mask for mask in masks if not mask & ~kept & ~out and mask & out == out) for masks in faces)
+    tags = tuple(tag if move == KEEP else 0 for move, tag, _ in shapes)
+    rest = [cycle for cycle in cycles if type(tags[cycle[0]]) is int and shapes[cycle[0]][0] == KEEP]
+    place = 0
+    while place < len(rest):
+        others = tuple(0 if v in rest[place] else tag for v, tag in enumerate(tags))
+        if superfluous(left, rest[place][0], others):
+            tags, gone = others, sum(1 << v for v in rest[place])
+            left = tuple(tuple(mask for mask in masks if not mask & gone) for masks in left)
+            for v in rest.pop(place):
+                alphabets[v] = alphabets[v][:1]
+            place = 0
+        else:
+            place += 1
+
+
+def restricted(mask: int, vertices: Sequence[int]) -> int:
+    return sum(1 << place for place, v in enumerate(vertices) if mask >> v & 1)
 
 
 def permuted(moves: list[list[int]], word: tuple[str, ...]) -> list[tuple[str, ...]]:
@@ -1428,7 +1467,7 @@ def prove_action(statement: Statement, lines: Lines, budget: Budget) -> Proved:
     """Return cycles that are a basis of homology modulo torsion, and the matrix of an element in it."""
     element = read_element(statement.value["element"], statement)
     alphabets = [tuple(pair.cells) for pair in statement.pairs]
-    space = watched_words(statement, face_masks(statement, budget), alphabets, lines, budget, None)
+    space = watched_words(face_masks(statement, budget), alphabets, statement.degree, lines, budget)
     cycles = [space.frame.family[number] for number in space.frame.cycles] if space and space.frame else []
     basis = [[spelled(entry) for term in terms for entry in term] for terms in cycles]
     columns = matrix_of(space, element, alphabets) if space else []

@@ -166,9 +166,7 @@ class CharacterClaim(ValuesClaim):
                 for block in block_classes(self.product, self.degree + 1):
                     yield Task(block)
             else:
-                for acted in acted_blocks(self.product, self.degree, element, number):
-                    if chosen is None or acted.name in chosen:
-                        yield Task(acted)
+                yield from map(Task, acted_blocks(self.product, self.degree, element, number, chosen))
 
     def found(self, contributions: Iterable[Contribution]) -> dict[str, Any]:
         """Return the values of the character, and the inner products."""

@@ -18,7 +18,7 @@ from certify.products.cells import word_complex
 from certify.products.space import PolyhedralProduct
 from certify.products.splitting import Alphabet, Letter, Move, Shape, Tag
 
-__all__ = ["BATCH", "DIGITS", "Block", "Choices", "block_classes"]
+__all__ = ["BATCH", "DIGITS", "Block", "Choices", "block_classes", "is_superfluous", "relevant_faces"]
 
 BATCH = 1 << 18
 """Faces that are merged together at most; a constant of the certificate format."""
@@ -143,7 +143,7 @@ def block_classes(product: PolyhedralProduct, top: int | None = None) -> Iterato
     J. A. Barmak and E. G. Minian, Strong homotopy types, nerves and collapses, 2012, on dominated vertices
     (from memory).
     """
-    pending: list[tuple[int, _States]] = [(0, {((), _relevant_faces(product, top)): ("", {0: 1})})]
+    pending: list[tuple[int, _States]] = [(0, {((), relevant_faces(product, top)): ("", {0: 1})})]
     while pending:
         vertex, states = pending.pop()
         if vertex < len(product.pairs):
@@ -160,7 +160,7 @@ class Choices:
     def __init__(self, product: PolyhedralProduct, top: int | None = None) -> None:
         self._product = product
         self._top = top
-        self._path: list[tuple[str, _State, dict[int, int]]] = [("", ((), _relevant_faces(product, top)), {0: 1})]
+        self._path: list[tuple[str, _State, dict[int, int]]] = [("", ((), relevant_faces(product, top)), {0: 1})]
 
     def block(self, word: str) -> Block | None:
         """Return the whole block of a word; None where it chooses a non-face, or has no cells up to ``top - 1``."""
@@ -175,7 +175,7 @@ class Choices:
         return Block(name, tags, faces, shifts) if faces and shifts else None
 
 
-def _relevant_faces(product: PolyhedralProduct, top: int | None) -> _Masks:
+def relevant_faces(product: PolyhedralProduct, top: int | None) -> _Masks:
     """Return the faces that carry cells up to the degree `top`."""
     masks = product.complex.face_masks()
     least = min((cell.degree for pair in product.pairs for cell in pair.cells if cell.outside), default=1)
@@ -253,7 +253,7 @@ def _reduced(tags: tuple[Tag, ...], faces: _Masks) -> _State:
     place = 0
     while place < len(tags):
         bit = 1 << place
-        if isinstance(tags[place], int) and _is_superfluous(faces, bit, apexes & ~bit):
+        if isinstance(tags[place], int) and is_superfluous(faces, bit, apexes & ~bit):
             faces = _without(faces, bit)
             tags = tags[:place] + tags[place + 1 :]
             apexes = apexes & bit - 1 | apexes >> 1 & -bit
@@ -263,8 +263,18 @@ def _reduced(tags: tuple[Tag, ...], faces: _Masks) -> _State:
     return tags, faces
 
 
-def _is_superfluous(faces: _Masks, bit: int, apexes: int) -> bool:
-    """Tell whether a vertex is in no face, or one of the apexes completes all its faces to faces."""
+def is_superfluous(faces: _Masks, bit: int, apexes: int) -> bool:
+    """Tell whether a vertex is in no face, or another vertex completes all its faces to faces (Lemma C).
+
+    Parameters
+    ----------
+    faces : tuple of int
+        Faces as masks, ascending by number of vertices.
+    bit : int
+        The vertex, as a mask.
+    apexes : int
+        The other vertices that count, as a mask.
+    """
     size = 0
     for mask in reversed(faces):  # an apex lies in all of the largest faces, and few vertices do
         if mask & bit:

@@ -2,17 +2,19 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterator, Sequence
-from dataclasses import dataclass
+from collections.abc import Container, Iterator, Sequence
+from dataclasses import dataclass, replace
 from functools import cached_property
 from itertools import product as choices
+from math import prod
 
 from certify.exact import AdaptedBasis, BasedComplex
 from certify.exact.coordinates import Coordinates
 from certify.products import PolyhedralProduct
-from certify.products.blocks import DIGITS
+from certify.products.blocks import BATCH, DIGITS, is_superfluous, relevant_faces
 from certify.products.cells import Word, complex_of_words, words_by_degree
 from certify.products.splitting import Alphabet, Letter, Move, Shape
+from certify.simplicial.masks import restrict
 from certify.symmetry.elements import Element, cycles_of
 
 __all__ = ["ActedCells", "acted_blocks", "moved_word"]
@@ -46,7 +48,7 @@ class ActedCells:
     Parameters
     ----------
     faces : tuple of int
-        The faces of K as masks.
+        The faces as masks.
     alphabets : tuple of Alphabet
     degree : int
     elements : tuple of Element
@@ -99,41 +101,110 @@ class ActedCells:
         return tuple(sum(column[i] for i, column in enumerate(m)) for m in self.matrices(complex_, basis))
 
 
-def acted_blocks(product: PolyhedralProduct, degree: int, element: Element, number: int) -> Iterator[ActedCells]:
-    """Yield the blocks that an element maps to themselves and that have cells of this degree.
+def acted_blocks(
+    product: PolyhedralProduct, degree: int, element: Element, number: int, chosen: Container[str] | None = None
+) -> Iterator[ActedCells]:
+    """Yield the blocks that an element maps to themselves and that have cells of this degree, equal ones once.
+
+    Parameters
+    ----------
+    product : PolyhedralProduct
+    degree : int
+    element : Element
+    number : int
+        Which of the elements of a claim this is.
+    chosen : container of str, optional
+        The words of the blocks that count; all count if it is left out.
 
     Notes
     -----
     The vertices of a cycle must have the same summand, and the same copy of it; so a cycle counts its copies once. A
     change of sign acts on a block, up to smaller blocks, as -1 for each interval that is kept (docs/mathematics.md).
     """
-    faces = product.complex.face_masks()
-    cycles = cycles_of(element)
+    faces = relevant_faces(product, degree + 1)
+    cycles = [[vertex - 1 for vertex in cycle] for cycle in cycles_of(element)]
+    known: dict[object, ActedCells] = {}
+    room = BATCH
+    for word, shapes, alphabets, factor in _invariant_choices(product, degree, element, cycles):
+        if chosen is not None and word not in chosen:
+            continue
+        _shorten(alphabets, shapes, cycles, faces)
+        cells = _live(faces, alphabets, degree, element)
+        key = (cells.faces, cells.alphabets, cells.elements, cells.degree)
+        if key in known:
+            known[key] = replace(known[key], factor=known[key].factor + factor)
+            continue
+        room -= len(cells.faces)
+        if room < 0:
+            yield from (old for old in known.values() if old.is_watched)
+            known, room = {}, BATCH - len(cells.faces)
+        known[key] = replace(cells, name=word, factor=factor, number=number)
+    yield from (old for old in known.values() if old.is_watched)
+
+
+_Choice = tuple[str, list[Shape], list[Alphabet], int]
+"""The word, the shapes and the cells of a choice, and what it counts."""
+
+
+def _invariant_choices(
+    product: PolyhedralProduct, degree: int, element: Element, cycles: Sequence[Sequence[int]]
+) -> Iterator[_Choice]:
+    """Yield the choices that are the same on each cycle and may have cells of this degree."""
     options = [
         [
             (digit, shape, shift, times)
-            for digit, shape in enumerate(product.pairs[cycle[0] - 1].shapes)
+            for digit, shape in enumerate(product.pairs[cycle[0]].shapes)
             for shift, times in shape.shifts
         ]
         for cycle in cycles
     ]
-    plain = tuple(map(abs, element))
     for choice in choices(*options):
-        alphabets: list[Alphabet] = [()] * len(element)
-        word = [""] * len(element)
-        factor, low = 1, 0
-        for cycle, (digit, shape, shift, times) in zip(cycles, choice, strict=True):
-            factor *= times
-            low += shift * len(cycle)
-            for vertex in cycle:
-                word[vertex - 1] = DIGITS[digit]
-                alphabets[vertex - 1] = _letters(shape, shift)
-                factor *= -1 if element[vertex - 1] < 0 and shape.move == Move.KEEP else 1
-        if low > degree:
+        placed = {vertex: part for cycle, part in zip(cycles, choice, strict=True) for vertex in cycle}
+        parts = [placed[place] for place in range(len(element))]
+        if sum(shift for _, _, shift, _ in parts) > degree:
             continue
-        block = ActedCells(faces, tuple(alphabets), degree, (plain,), "".join(word), factor, number)
-        if block.is_watched:
-            yield block
+        shapes = [shape for _, shape, _, _ in parts]
+        turned = sum(to < 0 and shape.move == Move.KEEP for to, shape in zip(element, shapes, strict=True))
+        factor = prod(times for _, _, _, times in choice) * (-1) ** turned
+        word = "".join(DIGITS[digit] for digit, _, _, _ in parts)
+        yield word, shapes, [_letters(shape, shift) for _, shape, shift, _ in parts], factor
+
+
+def _shorten(
+    alphabets: list[Alphabet], shapes: Sequence[Shape], cycles: Sequence[Sequence[int]], faces: tuple[int, ...]
+) -> None:
+    """Leave only the cell t at the vertices of a cycle that are superfluous, and not just by one another (Lemma C)."""
+    kept = sum(1 << place for place, shape in enumerate(shapes) if shape.move == Move.KEEP)
+    out = sum(1 << place for place, shape in enumerate(shapes) if shape.move in (Move.OUT, Move.OUTER))
+    apexes = sum(1 << place for place, shape in enumerate(shapes) if kept >> place & 1 and shape.tag == 1)
+    left = tuple([mask for mask in faces if mask & out == out and not mask & ~(kept | out)])
+    rest = [cycle for cycle in cycles if kept >> cycle[0] & 1 and isinstance(shapes[cycle[0]].tag, int)]
+    place = 0
+    while place < len(rest):
+        gone = sum(1 << vertex for vertex in rest[place])
+        if is_superfluous(left, 1 << rest[place][0], apexes & ~gone):
+            left = tuple([mask for mask in left if not mask & gone])
+            apexes &= ~gone
+            for vertex in rest.pop(place):
+                alphabets[vertex] = alphabets[vertex][:1]
+            place = 0
+        else:
+            place += 1
+
+
+def _live(faces: tuple[int, ...], alphabets: Sequence[Alphabet], degree: int, element: Element) -> ActedCells:
+    """Return the block without the vertices that have one cell only, inside and of even degree: they change no sign."""
+    live, places = [], 0
+    for vertex, letters in enumerate(alphabets):
+        outside = any(letter.outside for letter in letters)
+        if len(letters) > 1 or outside or letters[0].degree % 2:
+            live.append(vertex)
+            places |= outside << vertex
+        else:
+            degree -= letters[0].degree
+    part = tuple([restrict(mask, tuple(live)) for mask in faces if not mask & ~places])
+    moved = tuple(live.index(abs(element[vertex]) - 1) + 1 for vertex in live)
+    return ActedCells(part, tuple(alphabets[vertex] for vertex in live), degree, (moved,))
 
 
 def _letters(shape: Shape, shift: int) -> Alphabet:
