@@ -21,6 +21,7 @@ import argparse
 import hashlib
 import io
 import json
+import operator
 import os
 import re
 import sys
@@ -33,8 +34,7 @@ from functools import lru_cache, partial, reduce
 from heapq import heapify, heappop, heappush
 from itertools import combinations, pairwise, product, zip_longest
 from math import comb, factorial, gcd, lcm, prod
-from operator import add as add_numbers
-from operator import and_, floordiv, ge, mul, sub, xor
+from operator import and_, ge, xor
 
 TYPE_CHECKING = False
 if TYPE_CHECKING:  # for readers with a type checker only
@@ -347,9 +347,8 @@ class Pair:
             self.text = re.sub("(?<=[DSP])[0-9]+", lambda digits: raised(int(digits[0])), raw).replace(", ", ",")
             return
         entries = [sequence(cell) for cell in sequence(record(raw, ("cells",))["cells"])]
-        require(
-            0 < len(entries) < 256 and all(len(entry) == 3 for entry in entries), "pair", "1 to 255 cells are expected"
-        )
+        fit = 0 < len(entries) < 256 and all(len(entry) == 3 for entry in entries)
+        require(fit, "pair", "1 to 255 cells with degree, side and boundary are expected")
         self.cells = []
         for degree, side, boundary in entries:
             entry = vector(boundary, len(self.cells), budget) if sequence(boundary) else []
@@ -385,10 +384,8 @@ class Pair:
             coordinates = [sum(row[cell] * entry for cell, entry in image.items()) for row in rows]
             outside = max(self.cells[cell][1] for cell, _ in terms)
             new.append((degrees.pop(), outside, {i: entry for i, entry in enumerate(coordinates) if entry}))
-        within = sum(1 for _, outside, _ in new if not outside)
-        require(
-            within == sum(1 for _, outside, _ in self.cells if not outside), "splitting", "A has a basis in the basis"
-        )
+        within = [sum(1 for _, outside, _ in cells if not outside) for cells in (new, self.cells)]
+        require(within[0] == within[1], "splitting", "A has a basis in the basis")
         found: dict[tuple[int, bytes], Shape] = {}
         for part in components(new):
             shape = shape_of([new[i] for i in part], {i: number for number, i in enumerate(part)})
@@ -524,12 +521,7 @@ def block_classes(statement: Statement, budget: Budget) -> Iterator[Block]:
         for (tags, faces), (name, shifts) in states.items():
             budget.spend("cells", sum(map(len, faces)) + len(shifts))
             for digit, shape in zip(DIGITS, statement.pairs[vertex].shapes, strict=False):
-                counts, degrees = shifts, shape[2]
-                if degrees != {0: 1}:
-                    counts = {}
-                    for shift, more in product(shifts, degrees):
-                        if shift + more < statement.top:
-                            counts[shift + more] = counts.get(shift + more, 0) + shifts[shift] * degrees[more]
+                counts = convolved(shifts, shape[2], statement.top)
                 state = choose(tags, faces, shape) if counts else (tags, ())
                 if state[1]:
                     known = level.setdefault(state, (name + digit, {}))[1]
@@ -544,6 +536,17 @@ def block_classes(statement: Statement, budget: Budget) -> Iterator[Block]:
                 room = BATCH - size
             runs[-1][state] = entry
         pending += [(vertex + 1, run) for run in reversed(runs)]
+
+
+def convolved(shifts: dict[int, int], degrees: dict[int, int], top: int) -> dict[int, int]:
+    """Return how many pairs of choices have which degree shift below `top`."""
+    if degrees == {0: 1}:
+        return shifts
+    counts: Counter[int] = Counter()
+    for shift, more in product(shifts, degrees):
+        if shift + more < top:
+            counts[shift + more] += shifts[shift] * degrees[more]
+    return counts
 
 
 def is_cone(faces: Faces, tags: tuple[Tag, ...], most: int) -> bool:
@@ -571,7 +574,7 @@ class Space:
         self.index = [{cell: number for number, cell in enumerate(degree)} for degree in cells]
         self.sizes = [len(degree) for degree in cells]
         self.watched = -1  # the degree whose basis is kept for reading coordinates
-        self.frame: Frame | None = None
+        self.stairs: Staircase  # of the degree that is watched, after a proof
 
     def boundary(self, degree: int, vector: Vector) -> Vector:
         """Return d of a vector of this degree."""
@@ -746,59 +749,21 @@ def homology(space: Space, basis: object, budget: Budget) -> list[tuple[int, lis
         require(closed, "cycle", "a vector listed as a cycle has a boundary")
         vectors = [a for a, _, _ in pairs] + cycles
         matched_above, boundaries, orders = above
-        family: list[Vector] = []
+        require("order" in entry or "groups" not in entry, "order", "groups need an order")
         if "order" in entry or degree == space.watched:
             family = [[(cell, 1)] for cell in matched] + vectors
             family += [space.boundary(degree + 1, [(cell, 1)]) for cell in matched_above] + boundaries
-        if "order" in entry:
-            check_staircase(size, family, entry, budget)
+            first = len(matched) + len(pairs)
+            stairs = Staircase(family, range(first, first + len(cycles)), entry, size, budget)
+            if degree == space.watched:
+                space.stairs = stairs
         else:
-            require("groups" not in entry, "order", "groups need an order")
             leads = matched + (space.leads(degree + 1, matched_above) if matched_above else [])
             check_natural(size, leads, vectors + boundaries)
-        if degree == space.watched:
-            first = len(matched) + len(pairs)
-            space.frame = Frame(family, range(first, first + len(cycles)), entry, size)
         groups.append((len(cycles), orders))
         above = (matched, [b for _, _, b in pairs], [e for _, e, _ in pairs if e > 1])
         budget.spend("cells", size)
     return groups[::-1]
-
-
-class Frame:
-    """A basis in staircase form, in which vectors are expanded; its form is checked elsewhere (Lemma B)."""
-
-    def __init__(self, family: list[Vector], cycles: range, entry: dict[str, Any], size: int) -> None:
-        self.family, self.cycles = family, cycles
-        self.order = entry.get("order", range(size)[::-1])
-        self.place = {cell: n for n, cell in enumerate(self.order)}
-        groups = [(group["cells"], group["inverse"]) for group in entry.get("groups", [])]
-        self.groups = {cell: group for group in groups for cell in group[0]}
-        self.led: dict[int, list[int]] = {}  # the first cell of a group, or a cell alone: the vectors that it leads
-        for number, terms in enumerate(family):
-            cell = min((cell for cell, _ in terms), key=self.place.__getitem__)
-            self.led.setdefault(self.groups[cell][0][0] if cell in self.groups else cell, []).append(number)
-
-    def coordinates(self, terms: Iterable[tuple[int, int]]) -> list[int]:
-        """Return the coordinates of a vector at the cycles."""
-        rest = dict(terms)
-        found = dict.fromkeys(self.cycles, 0)
-        waiting = [self.place[cell] for cell in rest]
-        heapify(waiting)
-        while waiting:
-            cell = self.order[heappop(waiting)]
-            if rest.get(cell, 0):
-                cells, inverse = self.groups.get(cell, ([cell], None))
-                numbers = self.led[cells[0]]
-                for row, number in enumerate(numbers):
-                    lead = dict(self.family[number])
-                    entries = [int(entry) for entry in inverse[row]] if inverse else [lead[cell]]
-                    found[number] = sum(x * rest.get(c, 0) for x, c in zip(entries, cells, strict=True))
-                for number in numbers:
-                    for c, x in self.family[number]:
-                        rest[c] = rest.get(c, 0) - found[number] * x
-                        heappush(waiting, self.place[c])
-        return [found[number] for number in self.cycles]
 
 
 def read_pair(value: list[object], degree: int, space: Space, budget: Budget) -> tuple[Vector, int, Vector]:
@@ -828,35 +793,56 @@ def check_natural(size: int, leads: list[int], vectors: list[Vector]) -> None:
     require(each_once, "basis", "the vectors do not lead each cell once")
 
 
-def check_staircase(size: int, family: list[Vector], entry: dict[str, object], budget: Budget) -> None:
-    """Require the family to be a basis of Z^size, in staircase form for the order and groups given (Lemma B)."""
-    order = [cell for cell in sequence(entry["order"]) if type(cell) is int]
-    whole = len(order) == len(sequence(entry["order"])) and sorted(order) == list(range(size))
-    require(whole, "order", "the order must list every cell once")
-    require(len(family) == size and all(family), "basis", f"{size} vectors other than zero are expected")
-    place = {cell: n for n, cell in enumerate(order)}
-    group_of: dict[int, int] = {}
-    members: list[tuple[list[int], list[dict[int, int]], object]] = []
-    for value in sequence(entry.get("groups", [])):
-        group = record(value, ("cells", "inverse"))
-        cells = [cell for cell in sequence(group["cells"]) if type(cell) is int and cell in place]
-        start = place[cells[0]] if cells else 0
-        run = len(cells) > 1 and cells == group["cells"] == order[start : start + len(cells)]
-        require(run, "group", "a group has two cells or more, as they follow one another in the order")
-        require(not any(cell in group_of for cell in cells), "group", "a cell is in two groups")
-        group_of.update(dict.fromkeys(cells, len(members)))
-        members.append((cells, [], group["inverse"]))
-    seen: set[int] = set()
-    for terms in family:
-        cell, coefficient = min(terms, key=lambda term: place[term[0]])
-        if cell in group_of:
-            members[group_of[cell]][1].append(dict(terms))
-        else:
-            alone = cell not in seen and coefficient in (1, -1)
-            require(alone, "basis", f"cell {cell} leads two vectors, or one with a coefficient that is not ±1")
-            seen.add(cell)
-    for cells, vectors, inverse in members:
-        check_inverse(cells, vectors, inverse, budget)
+class Staircase:
+    """A basis of Z^size in staircase form for the order and groups given, or for the natural order (Lemma B)."""
+
+    def __init__(
+        self, family: list[Vector], cycles: range, entry: dict[str, object], size: int, budget: Budget
+    ) -> None:
+        self.family, self.cycles = family, cycles  # the vectors, and which of them are the cycles
+        given = sequence(entry.get("order", [*range(size)][::-1]))
+        self.order = [cell for cell in given if type(cell) is int]
+        whole = len(self.order) == len(given) and sorted(self.order) == [*range(size)]
+        require(whole, "order", "the order must list every cell once")
+        require(len(family) == size and all(family), "basis", f"{size} vectors other than zero are expected")
+        self.place = {cell: n for n, cell in enumerate(self.order)}
+        self.led: dict[int, tuple[list[int], list[int], list[list[int]]]] = {}  # cells, their vectors, the inverse
+        groups = []
+        for value in sequence(entry.get("groups", [])):
+            group = record(value, ("cells", "inverse"))
+            cells = [cell for cell in sequence(group["cells"]) if type(cell) is int and cell in self.place]
+            start = self.place[cells[0]] if cells else 0
+            run = len(cells) > 1 and cells == group["cells"] == self.order[start : start + len(cells)]
+            require(run, "group", "a group has two cells or more, as they follow one another in the order")
+            require(not any(cell in self.led for cell in cells), "group", "a cell is in two groups")
+            self.led.update(dict.fromkeys(cells, (cells, [], [])))
+            groups.append((cells[0], group["inverse"]))
+        for number, terms in enumerate(family):
+            cell, coefficient = min(terms, key=lambda term: self.place[term[0]])
+            cells, leading, _ = self.led.setdefault(cell, ([cell], [], [[coefficient]]))
+            leading.append(number)
+            fit = len(cells) > 1 or (len(leading) == 1 and coefficient in (1, -1))
+            require(fit, "basis", f"cell {cell} leads two vectors, or one with a coefficient that is not ±1")
+        for first, inverse in groups:
+            cells, leading, rows = self.led[first]
+            rows += check_inverse(cells, [dict(family[number]) for number in leading], inverse, budget)
+
+    def coordinates(self, terms: Iterable[tuple[int, int]]) -> list[int]:
+        """Return the coordinates of a vector at the cycles."""
+        rest = dict(terms)
+        found = dict.fromkeys(self.cycles, 0)
+        waiting = [self.place[cell] for cell in rest]
+        heapify(waiting)
+        while waiting:
+            cell = self.order[heappop(waiting)]
+            if rest.get(cell, 0):
+                cells, numbers, rows = self.led[cell]
+                for number, row in zip(numbers, rows, strict=True):
+                    found[number] = sum(x * rest.get(c, 0) for x, c in zip(row, cells, strict=True))
+                for c, x in ((c, found[number] * x) for number in numbers for c, x in self.family[number]):
+                    rest[c] = rest.get(c, 0) - x
+                    heappush(waiting, self.place[c])
+        return [found[number] for number in self.cycles]
 
 
 def check_inverse(cells: list[int], vectors: list[dict[int, int]], inverse: object, budget: Budget) -> list[list[int]]:
@@ -993,7 +979,7 @@ class Choices:
     """The blocks one by one, for words in ascending order: what two words in turn have in common is decided once."""
 
     def __init__(self, statement: Statement, budget: Budget) -> None:
-        self.pairs = statement.pairs
+        self.pairs, self.top = statement.pairs, statement.top
         self.path: list[Block] = [("", (), face_masks(statement, budget), {0: 1})]
 
     def block(self, word: str) -> Block:
@@ -1003,11 +989,8 @@ class Choices:
         for vertex in range(len(self.path) - 1, len(word)):
             shape = self.pairs[vertex].shapes[DIGITS.index(word[vertex])]
             _, tags, faces, shifts = self.path[-1]
-            counts: Counter[int] = Counter()
-            for shift, more in product(shifts, shape[2]):
-                counts[shift + more] += shifts[shift] * shape[2][more]
             state = choose(tags, faces, shape) if faces else (tags, ())
-            self.path.append((word[: vertex + 1], *state, counts))
+            self.path.append((word[: vertex + 1], *state, convolved(shifts, shape[2], self.top)))
         return self.path[-1]
 
 
@@ -1049,16 +1032,15 @@ def prove_by_orbits(statement: Statement, lines: Lines, budget: Budget) -> Prove
         if all(DIGITS.index(digit) < len(pair.shapes) for digit, pair in zip(word, statement.pairs, strict=True)):
             block = choices.block(word)
             size = sum(map(len, block[2]))
-            shifts = {shift: n for shift, n in block[3].items() if shift < statement.top}
-            if block[2] and shifts:
-                key = (block[1], block[2], min(shifts) if statement.degrees else 0)
+            if block[2] and block[3]:
+                key = (block[1], block[2], min(block[3]) if statement.degrees else 0)
                 if key not in known:
                     budget.spend("cells", size)
                     room -= size
                     if room < 0:
                         known, room = {}, BATCH - size
-                    known[key] = block_homology((*block[:3], shifts), statement.top, lines, budget)
-                for shift, times in shifts.items():
+                    known[key] = block_homology(block, statement.top, lines, budget)
+                for shift, times in block[3].items():
                     add(total, known[key], shift, times * len(orbit))
         position = seen.find(0, position)
     return stated_groups(statement, total)
@@ -1099,8 +1081,23 @@ def prove_table(statement: Statement, lines: Lines, budget: Budget) -> Proved:
     return stated_groups(statement, total)
 
 
-def prove_summand(statement: Statement, lines: Lines, budget: Budget) -> Proved:
-    """Return the reduced homology of the link of a face, restricted to the vertices that are kept."""
+def prove_whole(
+    space_of: Callable[[Statement, Budget], Space], statement: Statement, lines: Lines, budget: Budget
+) -> Proved:
+    """Check the one record of a complex that is rebuilt from the statement, and return its homology."""
+    total: Total = {}
+    groups = homology(space_of(statement, budget), record(lines.next(), ("basis",))["basis"], budget)
+    add(total, groups, -1 if statement.kind == "summand" else 0, 1)
+    return stated_groups(statement, total)
+
+
+def whole_product(statement: Statement, budget: Budget) -> Words:
+    alphabets = [tuple(pair.cells) for pair in statement.pairs]
+    return Words(face_masks(statement, budget), alphabets, statement.top, budget)
+
+
+def link_part(statement: Statement, budget: Budget) -> Simplices:
+    """Return the augmented chain complex of the link of a face, restricted to the vertices that are kept."""
     faces = face_masks(statement, budget)
     place = 0
     for vertex in range(1, statement.vertices + 1):
@@ -1108,24 +1105,7 @@ def prove_summand(statement: Statement, lines: Lines, budget: Budget) -> Proved:
         faces = decide(faces, place, move) if faces else ()
         place += move == KEEP
     require(bool(faces), "statement", "the vertices that are out form no face")
-    total: Total = {}
-    add(total, homology(Simplices(faces, [1] * place), record(lines.next(), ("basis",))["basis"], budget), -1, 1)
-    return stated_groups(statement, total)
-
-
-def prove_by_cells(statement: Statement, lines: Lines, budget: Budget) -> Proved:
-    """Check the one record of the whole product, and return the total."""
-    total: Total = {}
-    space = Words(face_masks(statement, budget), [tuple(pair.cells) for pair in statement.pairs], statement.top, budget)
-    add(total, homology(space, record(lines.next(), ("basis",))["basis"], budget), 0, 1)
-    return stated_groups(statement, total)
-
-
-def prove_real_toric(statement: Statement, lines: Lines, budget: Budget) -> Proved:
-    """Check the one record of the quotient of (D^1, S^0)^K by the kernel of λ, which acts freely."""
-    total: Total = {}
-    add(total, homology(Chambers(statement, budget), record(lines.next(), ("basis",))["basis"], budget), 0, 1)
-    return stated_groups(statement, total)
+    return Simplices(faces, [1] * place)
 
 
 # ---- symmetry: groups, characters, fixed sets, orbit spaces, surfaces, counts ----------------------------------------
@@ -1213,20 +1193,20 @@ def full_group(statement: Statement, budget: Budget) -> tuple[int, list[Element]
     return order, generators
 
 
+def cycles_of(element: Element) -> list[list[int]]:
+    """Return the cycles on the vertices, in the order of their first members."""
+    found = [orbit(vertex, lambda v: [abs(element[v - 1])]) for vertex in range(1, len(element) + 1)]
+    return [cycle for cycle in found if cycle[0] == min(cycle)]
+
+
 def cycles_text(elements: Iterable[Element]) -> str:
     """Write signed permutations as cycles; a minus sign where a coordinate changes sign on the way to this vertex."""
     texts = []
     for element in elements:
-        text, seen = "", set()
-        for start in range(1, len(element) + 1):
-            cycle = []
-            vertex = start
-            while vertex not in seen:
-                seen.add(vertex)
-                cycle.append(vertex)
-                vertex = abs(element[vertex - 1])
-            signed = [f"{'-' if element[v - 1] < 0 else ''}{abs(element[v - 1])}" for v in cycle]
-            text += f"({' '.join(signed[-1:] + signed[:-1])})" if len(cycle) > 1 or signed[-1:] == [f"-{start}"] else ""
+        text = ""
+        for cycle in cycles_of(element):
+            signed = [str(element[vertex - 1]) for vertex in cycle[-1:] + cycle[:-1]]
+            text += f"({' '.join(signed)})" if len(cycle) > 1 or signed[0][0] == "-" else ""
         texts.append(text or "()")
     return ", ".join(texts)
 
@@ -1280,17 +1260,18 @@ def act(word: bytes, element: Element, alphabets: Sequence[Alphabet]) -> tuple[b
 
 def matrix_of(space: Words, element: Element, alphabets: Sequence[Alphabet]) -> list[list[int]]:
     """Return the columns of the matrix of an element on homology modulo torsion, in the cycles of the basis."""
-    frame, degree = space.frame, space.watched
-    columns: list[list[int]] = []
-    if frame is None:
-        return columns
-    for number in frame.cycles:
+    columns = []
+    for number in space.stairs.cycles:
         image: Counter[int] = Counter()
-        for cell, coefficient in frame.family[number]:
-            word, sign = act(space.cells[degree][cell], element, alphabets)
-            image[space.index[degree][word]] += sign * coefficient
-        columns.append(frame.coordinates(image.items()))
+        for cell, coefficient in space.stairs.family[number]:
+            word, sign = act(space.cells[space.watched][cell], element, alphabets)
+            image[space.index[space.watched][word]] += sign * coefficient
+        columns.append(space.stairs.coordinates(image.items()))
     return columns
+
+
+def trace(columns: list[list[int]]) -> int:
+    return sum(column[i] for i, column in enumerate(columns))
 
 
 def watched_words(
@@ -1312,86 +1293,84 @@ def traces_by_cells(statement: Statement, elements: list[Element], lines: Lines,
     require(statement.value["summands"] is None, "statement", "single summands have the route blocks only")
     alphabets = [tuple(pair.cells) for pair in statement.pairs]
     space = watched_words(face_masks(statement, budget), alphabets, statement.degree, lines, budget)
-    matrices = [matrix_of(space, element, alphabets) if space else [] for element in elements]
-    return [sum(column[i] for i, column in enumerate(matrix)) for matrix in matrices]
+    return [trace(matrix_of(space, element, alphabets)) if space else 0 for element in elements]
 
 
 def traces_by_blocks(statement: Statement, elements: list[Element], lines: Lines, budget: Budget) -> list[int]:
-    """Return the traces of elements: only blocks that an element maps to themselves count (docs/mathematics.md).
-
-    The vertices of a cycle must choose the same summand, and the same copy of it. On the block of a word an element
-    permutes letters; a change of sign acts on it, up to smaller blocks, as -1 for each interval that is kept.
-    """
+    """Return the traces of elements on the blocks, all of them or those of the orbits of some words."""
     find_summands(statement, lines, budget)
     faces = face_masks(statement, budget)
-    size = sum(map(len, faces))
-    traces = []
     chosen = None
-    if statement.value["summands"] is not None:  # the orbits of some words
+    if statement.value["summands"] is not None:
         words = [tuple(str(word)) for word in sequence(statement.value["summands"])]
-        by = [inverse_of(generator) for generator in statement.generators or []]
-        moves = [[abs(place) - 1 for place in back] for back in by]
         fit = all(len(word) == statement.vertices for word in words)
         require(fit, "statement", "a summand is a word with a digit for each vertex")
-        chosen = {"".join(w) for word in words for w in orbit(word, partial(permuted, moves))}
+        by = [inverse_of(generator) for generator in statement.generators or []]
+        moved_words = (orbit(word, lambda w: [tuple(w[abs(v) - 1] for v in back) for back in by]) for word in words)
+        chosen = {"".join(word) for reached in moved_words for word in reached}
+    traces = []
     for element in elements:
         if chosen is None and element == tuple(range(1, statement.vertices + 1)):
             total = sum_of_blocks(statement, lines, budget)
             traces.append(total.get((statement.degree,), Counter())[0])
-            continue
-        cycles, trace = [], 0
-        for vertex in range(1, statement.vertices + 1):
-            cycle = orbit(vertex, partial(step, element))
-            if vertex == min(cycle):
-                cycles.append([v - 1 for v in cycle])
-        options = [
-            [
-                (digit, shape, shift)
-                for digit, shape in enumerate(statement.pairs[cycle[0]].shapes)
-                for shift in sorted(shape[2])
-            ]
-            for cycle in cycles
-        ]
-        known: dict[object, int] = {}
-        room = BATCH
-        for choice in product(*options):
-            budget.spend("cells", size)
-            alphabets: list[Alphabet] = [()] * statement.vertices
-            shapes: list[Shape] = [(STAY, 0, {})] * statement.vertices
-            word, factor, low = [""] * statement.vertices, 1, 0
-            for cycle, (digit, shape, shift) in zip(cycles, choice, strict=True):
-                factor *= shape[2][shift]
-                low += shift * len(cycle)
-                for v in cycle:
-                    word[v], alphabets[v], shapes[v] = DIGITS[digit], letters_of(shape, shift), shape
-                    factor *= -1 if element[v] < 0 and shape[0] == KEEP else 1
-            if low <= statement.degree and (chosen is None or "".join(word) in chosen):
-                shorten(alphabets, shapes, cycles, faces)
-                live = [v for v, letters in enumerate(alphabets) if letters[1:] or letters[0][1] or letters[0][0] & 1]
-                degree = statement.degree - sum(a[0][0] for v, a in enumerate(alphabets) if v not in live)
-                letters = tuple(alphabets[v] for v in live)
-                places = sum(1 << v for v in live if any(outside for _, outside, _ in alphabets[v]))
-                part = tuple(tuple(restricted(mask, live) for mask in masks if not mask & ~places) for masks in faces)
-                plain = tuple(live.index(abs(element[v]) - 1) + 1 for v in live)
-                key = (part, letters, plain, degree)
-                if key not in known:
-                    room -= sum(map(len, part))
-                    if room < 0:
-                        known, room = {}, BATCH - sum(map(len, part))
-                    space = watched_words(part, letters, degree, lines, budget, "".join(word))
-                    columns = matrix_of(space, plain, letters) if space else []
-                    known[key] = sum(column[i] for i, column in enumerate(columns))
-                trace += factor * known[key]
-        traces.append(trace)
+        else:
+            traces.append(trace_by_blocks(statement, element, faces, chosen, lines, budget))
     return traces
 
 
-def shorten(alphabets: list[Alphabet], shapes: list[Shape], cycles: list[list[int]], faces: Faces) -> None:
+def trace_by_blocks(
+    statement: Statement, element: Element, faces: Faces, chosen: set[str] | None, lines: Lines, budget: Budget
+) -> int:
+    """Return the trace of an element: only blocks that it maps to themselves count (docs/mathematics.md, 12.3).
+
+    The vertices of a cycle must choose the same summand, and the same copy of it. On the block of a word an element
+    permutes letters; a change of sign acts on it, up to smaller blocks, as -1 for each interval that is kept.
+    """
+    cycles = [[vertex - 1 for vertex in cycle] for cycle in cycles_of(element)]
+    options = []
+    for cycle in cycles:
+        shapes = enumerate(statement.pairs[cycle[0]].shapes)
+        options.append([(digit, shape, shift) for digit, shape in shapes for shift in sorted(shape[2])])
+    size, total = sum(map(len, faces)), 0
+    known: dict[object, int] = {}
+    room = BATCH
+    for choice in product(*options):
+        budget.spend("cells", size + 1)
+        digits, taken, alphabets, factor, low = {}, {}, {}, 1, 0
+        for cycle, (digit, shape, shift) in zip(cycles, choice, strict=True):
+            factor *= shape[2][shift]
+            low += shift * len(cycle)
+            for v in cycle:
+                digits[v], taken[v], alphabets[v] = DIGITS[digit], shape, letters_of(shape, shift)
+                factor *= -1 if element[v] < 0 and shape[0] == KEEP else 1
+        word = "".join(digits[v] for v in range(statement.vertices))
+        if low > statement.degree or (chosen is not None and word not in chosen):
+            continue
+        shorten(alphabets, taken, cycles, faces)
+        # A vertex with one cell, inside and of even degree, has no part in any sign, and is left out.
+        live = [v for v, letters in sorted(alphabets.items()) if letters[1:] or letters[0][1] or letters[0][0] & 1]
+        degree = statement.degree - sum(letters[0][0] for v, letters in alphabets.items() if v not in live)
+        parts = tuple(alphabets[v] for v in live)
+        outside = sum(1 << v for v in live if any(side for _, side, _ in alphabets[v]))
+        small = tuple(tuple(restricted(mask, live) for mask in masks if not mask & ~outside) for masks in faces)
+        plain = tuple(live.index(abs(element[v]) - 1) + 1 for v in live)
+        key = (small, parts, plain, degree)
+        if key not in known:
+            room -= sum(map(len, small))
+            if room < 0:
+                known, room = {}, BATCH - sum(map(len, small))
+            space = watched_words(small, parts, degree, lines, budget, word)
+            known[key] = trace(matrix_of(space, plain, parts)) if space else 0
+        total += factor * known[key]
+    return total
+
+
+def shorten(alphabets: dict[int, Alphabet], shapes: dict[int, Shape], cycles: list[list[int]], faces: Faces) -> None:
     """Leave only the cell t at the vertices of a cycle that are superfluous, and not just by one another (Lemma C)."""
-    out = sum(1 << v for v, (move, _, _) in enumerate(shapes) if move in (OUT, OUTER))
-    kept = sum(1 << v for v, (move, _, _) in enumerate(shapes) if move == KEEP)
+    out = sum(1 << v for v, (move, _, _) in shapes.items() if move in (OUT, OUTER))
+    kept = sum(1 << v for v, (move, _, _) in shapes.items() if move == KEEP)
     left = tuple(tuple(mask for mask in masks if not mask & ~kept & ~out and mask & out == out) for masks in faces)
-    tags = tuple(tag if move == KEEP else 0 for move, tag, _ in shapes)
+    tags = tuple(shape[1] if shape[0] == KEEP else 0 for _, shape in sorted(shapes.items()))
     rest = [cycle for cycle in cycles if type(tags[cycle[0]]) is int and shapes[cycle[0]][0] == KEEP]
     place = 0
     while place < len(rest):
@@ -1408,14 +1387,6 @@ def shorten(alphabets: list[Alphabet], shapes: list[Shape], cycles: list[list[in
 
 def restricted(mask: int, vertices: Sequence[int]) -> int:
     return sum(1 << place for place, v in enumerate(vertices) if mask >> v & 1)
-
-
-def permuted(moves: list[list[int]], word: tuple[str, ...]) -> list[tuple[str, ...]]:
-    return [tuple(word[place] for place in move) for move in moves]
-
-
-def step(element: Element, vertex: int) -> list[int]:
-    return [abs(element[vertex - 1])]
 
 
 def letters_of(shape: Shape, shift: int) -> Alphabet:
@@ -1468,7 +1439,7 @@ def prove_action(statement: Statement, lines: Lines, budget: Budget) -> Proved:
     element = read_element(statement.value["element"], statement)
     alphabets = [tuple(pair.cells) for pair in statement.pairs]
     space = watched_words(face_masks(statement, budget), alphabets, statement.degree, lines, budget)
-    cycles = [space.frame.family[number] for number in space.frame.cycles] if space and space.frame else []
+    cycles = [space.stairs.family[number] for number in space.stairs.cycles] if space else []
     basis = [[spelled(entry) for term in terms for entry in term] for terms in cycles]
     columns = matrix_of(space, element, alphabets) if space else []
     matrix = [[spelled(entry) for entry in row] for row in zip(*columns, strict=True)]
@@ -1524,7 +1495,7 @@ class OrbitSpace(Space):
             for word, moved in images.items()
             for g, (image, _) in zip(self.group, moved, strict=True)
         )
-        cells = [list(level) for level in words.cells]
+        cells: list[list[tuple[bytes, ...]]] = [[(word,) for word in level] for level in words.cells]
         if self.chains:
             below: dict[bytes, list[bytes]] = {}
             flags: dict[bytes, list[tuple[bytes, ...]]] = {}
@@ -1537,44 +1508,34 @@ class OrbitSpace(Space):
                     budget.spend("cells", len(flags[word]) * len(self.group))
                     for chain in flags[word]:
                         cells[len(chain) - 1].append(chain)
-        self.first: dict[Any, tuple[Any, int]] = {}
+        self.first: dict[tuple[bytes, ...], tuple[tuple[bytes, ...], int]] = {}
         self.isotropy: list[Counter[int]] = []
-        kept: list[list[Any]] = []
+        kept: list[list[tuple[bytes, ...]]] = []
         for level in cells:
             kept.append([])
             self.isotropy.append(Counter())
             for cell in sorted(level):
                 if cell not in self.first:
-                    parts_moved = [images[word] for word in cell] if self.chains else [images[cell]]
-                    moved = list(zip(*parts_moved, strict=True))
-                    for image in moved:
-                        key = tuple(word for word, _ in image) if self.chains else image[0][0]
-                        self.first.setdefault(key, (cell, 1 if self.chains else image[0][1]))
+                    fixing = 0
+                    for image in zip(*(images[word] for word in cell), strict=True):
+                        moved = tuple(word for word, _ in image)
+                        self.first.setdefault(moved, (cell, 1 if self.chains else image[0][1]))
+                        fixing += moved == cell
                     kept[-1].append(cell)
-                    fixing = sum(
-                        1 for image in moved if tuple(w for w, _ in image) == (cell if self.chains else (cell,))
-                    )
                     self.isotropy[-1][fixing] += 1
         self.words = words
         super().__init__(kept, self.ends)
 
-    def ends(self, cell: Any) -> list[tuple[Any, int]]:
+    def ends(self, cell: tuple[bytes, ...]) -> list[tuple[tuple[bytes, ...], int]]:
         """Return d of a cell in the cells that stand for orbits, each once."""
         if self.chains:
             left_out = [(cell[:i] + cell[i + 1 :], (-1) ** i) for i in range(len(cell)) if len(cell) > 1]
         else:
-            left_out = self.words.leibniz(cell)
-        terms: Counter[Any] = Counter()
+            left_out = [((end,), sign) for end, sign in self.words.leibniz(cell[0])]
+        terms: Counter[tuple[bytes, ...]] = Counter()
         for end, sign in left_out:
             terms[self.first[end][0]] += sign * self.first[end][1]
         return [(end, coefficient) for end, coefficient in terms.items() if coefficient]
-
-
-def prove_orbit_space(statement: Statement, lines: Lines, budget: Budget) -> Proved:
-    """Check the one record of the quotient, and return its homology."""
-    total: Total = {}
-    add(total, homology(OrbitSpace(statement, budget), record(lines.next(), ("basis",))["basis"], budget), 0, 1)
-    return stated_groups(statement, total)
 
 
 def prove_surface(statement: Statement, _: Lines, budget: Budget) -> Proved:
@@ -1638,10 +1599,8 @@ def prove_branching(statement: Statement, _: Lines, budget: Budget) -> Proved:
 
 def prove_shelling(statement: Statement, lines: Lines, _: Budget) -> Proved:
     """Require that the facets in the order given are a shelling, and that each ridge lies in two facets."""
-    order = [
-        tuple(numbers(facet, 1, statement.vertices + 1))
-        for facet in sequence(record(lines.next(), ("order",))["order"])
-    ]
+    given = sequence(record(lines.next(), ("order",))["order"])
+    order = [tuple(numbers(facet, 1, statement.vertices + 1)) for facet in given]
     require(sorted(map(list, order)) == statement.facets, "shelling", "the order lists every facet once")
     size = len(order[0])
     require(all(len(facet) == size for facet in order), "shelling", "facets of one size are expected")
@@ -1650,17 +1609,11 @@ def prove_shelling(statement: Statement, lines: Lines, _: Budget) -> Proved:
     for number, facet in enumerate(order[1:], 1):
         before = [set(facet) & set(earlier) for earlier in order[:number]]
         free = {vertex for common in before if len(common) == size - 1 for vertex in set(facet) - common}
-        require(
-            all(free - common for common in before),
-            "shelling",
-            f"facet {number + 1} does not meet those before it well",
-        )
-    spaces = (
-        "(D¹,S⁰)^K and (D²,S¹)^K are closed manifolds"
-        if len({v for f in order for v in f}) == statement.vertices
-        else ""
-    )
-    return {}, f"K is a shellable sphere of dimension {size - 1}" + (f", so {spaces}" if spaces else "")
+        well = all(free - common for common in before)
+        require(well, "shelling", f"facet {number + 1} does not meet those before it well")
+    whole = len({vertex for facet in order for vertex in facet}) == statement.vertices
+    spaces = ", so (D¹,S⁰)^K and (D²,S¹)^K are closed manifolds" if whole else ""
+    return {}, f"K is a shellable sphere of dimension {size - 1}{spaces}"
 
 
 def prove_orbit_count(statement: Statement, _: Lines, budget: Budget) -> Proved:
@@ -1668,16 +1621,13 @@ def prove_orbit_count(statement: Statement, _: Lines, budget: Budget) -> Proved:
     colours = integer(statement.value["colours"], budget)
     content = statement.value["content"]
     parts = None if content is None else [integer(entry, budget) for entry in sequence(content)]
-    require(
-        colours >= 0 and (parts is None or (len(parts) == colours and min(parts, default=0) >= 0)),
-        "statement",
-        "colours",
-    )
+    fit = parts is None or (len(parts) == colours and min(parts, default=0) >= 0)
+    require(colours >= 0 and fit, "statement", "a content gives a number of vertices for each colour")
     group = group_of(statement, budget)
     require(all(to > 0 for element in group for to in element), "symmetry", "elements have no signs here")
 
     def blocks(element: Element) -> frozenset[frozenset[int]]:
-        return frozenset(frozenset(orbit(v, lambda w: [element[w - 1]])) for v in range(1, statement.vertices + 1))
+        return frozenset(map(frozenset, cycles_of(element)))
 
     def constant(partition: Iterable[frozenset[int]]) -> int:
         if parts is None:
@@ -1788,13 +1738,8 @@ def small_number(node: ast.AST, names: dict[str, int], budget: Budget) -> int:
     return value
 
 
-OPERATIONS: dict[str, Callable[[int, int], int]] = {
-    "Add": add_numbers,
-    "Sub": sub,
-    "Mult": mul,
-    "FloorDiv": floordiv,
-    "Pow": pow,
-}
+OPERATIONS: dict[str, Callable[[int, int], int]]
+OPERATIONS = {"Add": operator.add, "Sub": operator.sub, "Mult": operator.mul, "FloorDiv": operator.floordiv, "Pow": pow}
 
 
 def prove_identity(statement: Statement, _: Lines, budget: Budget) -> Proved:
@@ -1823,12 +1768,12 @@ CHARACTERS: Routes = {
     "cells": partial(prove_character, traces_by_cells),
 }
 KINDS: dict[str, tuple[tuple[str, ...], tuple[str, ...], Routes]] = {  # kind: keys of question and answer, routes
-    "homology": (("degrees", "pairs"), ("groups",), BY_BLOCKS | {"cells": prove_by_cells}),
+    "homology": (("degrees", "pairs"), ("groups",), BY_BLOCKS | {"cells": partial(prove_whole, whole_product)}),
     "smash": (("degrees", "pairs"), ("groups",), BY_BLOCKS),
-    "real-toric": (("degrees", "rows"), ("groups",), {"cells": prove_real_toric}),
+    "real-toric": (("degrees", "rows"), ("groups",), {"cells": partial(prove_whole, Chambers)}),
     "tor": ((), ("groups",), {"blocks": prove_tor}),
     "table": ((), ("groups",), {"blocks": prove_table}),
-    "summand": (("kept", "out"), ("groups",), {"cells": prove_summand}),
+    "summand": (("kept", "out"), ("groups",), {"cells": partial(prove_whole, link_part)}),
     "automorphisms": (("generators", "pairs"), ("orbits", "order"), {"permutations": prove_automorphisms}),
     "character": (
         ("degree", "elements", "functions", "generators", "pairs", "summands"),
@@ -1837,7 +1782,7 @@ KINDS: dict[str, tuple[tuple[str, ...], tuple[str, ...], Routes]] = {  # kind: k
     ),
     "action": (("degree", "element", "pairs"), ("basis", "matrix"), {"cells": prove_action}),
     "fixed-set": (("degrees", "generators", "pairs"), ("groups",), {"blocks": prove_fixed_set}),
-    "orbit-space": (("degrees", "generators"), ("groups",), {"cells": prove_orbit_space}),
+    "orbit-space": (("degrees", "generators"), ("groups",), {"cells": partial(prove_whole, OrbitSpace)}),
     "surface": (("generators",), ("boundary", "euler", "orientable"), {"cells": prove_surface}),
     "branching": (("generators",), ("orbits",), {"cells": prove_branching}),
     "shelling": ((), (), {"shelling": prove_shelling}),

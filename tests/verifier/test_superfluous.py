@@ -2,6 +2,8 @@
 
 from __future__ import annotations
 
+from typing import Any
+
 import pytest
 from hypothesis import given
 from hypothesis import strategies as st
@@ -66,3 +68,34 @@ def test_cases_of_superfluous_vertices(
     faces: tuple[tuple[int, ...], ...], place: int, tags: tuple[object, ...], superfluous: bool
 ) -> None:
     assert verifier().superfluous(faces, place, tags) is superfluous
+
+
+KEPT = ((0, 0, ()), (1, 1, ((0, 1),)))
+"""The cells of a kept interval: t inside, e outside with d e = t."""
+
+TWICE = ((0, 0, ()), (1, 1, ((0, 2),)))
+
+
+@pytest.mark.parametrize(
+    ("faces", "cells", "cycles", "left_out"),
+    [
+        # The ends of an edge dominate each other; if they are exchanged, neither may go.
+        (EDGE, [KEPT, KEPT], [[0], [1]], [0]),
+        (EDGE, [KEPT, KEPT], [[0, 1]], []),
+        # The ends of a path, which are exchanged, are dominated by its middle.
+        (((0,), (1, 2, 4), (3, 6)), [KEPT, KEPT, KEPT], [[0, 2], [1]], [0, 2]),
+        (((0,), (1, 2, 4), (3, 6)), [KEPT, TWICE, KEPT], [[0, 2], [1]], []),
+        # Vertices that are rotated, or in no face, and a larger summand.
+        (TRIANGLE, [KEPT, KEPT, KEPT], [[0, 1, 2]], []),
+        (((0,),), [KEPT, TWICE], [[0, 1]], [0, 1]),
+        (EDGE, [KEPT, LARGER], [[0], [1]], []),
+    ],
+)
+def test_cycles_are_left_out_as_a_whole(
+    faces: tuple[tuple[int, ...], ...], cells: list[tuple[Any, ...]], cycles: list[list[int]], left_out: list[int]
+) -> None:
+    alphabets = dict(enumerate(cells))
+    keep = verifier().KEEP
+    shapes = {v: (keep, each if each == LARGER else each[1][2][0][1], {0: 1}) for v, each in alphabets.items()}
+    verifier().shorten(alphabets, shapes, cycles, faces)
+    assert alphabets == {v: each[:1] if v in left_out else each for v, each in enumerate(cells)}
