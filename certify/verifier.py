@@ -980,6 +980,8 @@ class Choices:
 
     def __init__(self, statement: Statement, budget: Budget) -> None:
         self.pairs, self.top = statement.pairs, statement.top
+        self.steps: dict[object, tuple[tuple[Tag, ...], Faces]] = {}  # what choices lead to, for at most BATCH faces
+        self.room = BATCH
         self.path: list[Block] = [("", (), face_masks(statement, budget), {0: 1})]
 
     def block(self, word: str) -> Block:
@@ -989,8 +991,13 @@ class Choices:
         for vertex in range(len(self.path) - 1, len(word)):
             shape = self.pairs[vertex].shapes[DIGITS.index(word[vertex])]
             _, tags, faces, shifts = self.path[-1]
-            state = choose(tags, faces, shape) if faces else (tags, ())
-            self.path.append((word[: vertex + 1], *state, convolved(shifts, shape[2], self.top)))
+            key = (tags, faces, shape[:2])
+            if key not in self.steps:
+                self.room -= sum(map(len, faces))
+                if self.room < 0:
+                    self.steps, self.room = {}, BATCH
+                self.steps[key] = choose(tags, faces, shape) if faces else (tags, ())
+            self.path.append((word[: vertex + 1], *self.steps[key], convolved(shifts, shape[2], self.top)))
         return self.path[-1]
 
 

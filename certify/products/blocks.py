@@ -155,11 +155,16 @@ def block_classes(product: PolyhedralProduct, top: int | None = None) -> Iterato
 
 
 class Choices:
-    """The blocks of single words, without merging; what words asked for in turn have in common is decided once."""
+    """The blocks of single words, without merging; what words asked for in turn have in common is decided once.
+
+    Steps from a state to the next are remembered, as far as their faces fit into a batch: words have few states.
+    """
 
     def __init__(self, product: PolyhedralProduct, top: int | None = None) -> None:
         self._product = product
         self._top = top
+        self._steps: dict[tuple[_State, Move, Tag], _State] = {}
+        self._room = BATCH
         self._path: list[tuple[str, _State, dict[int, int]]] = [("", ((), relevant_faces(product, top)), {0: 1})]
 
     def block(self, word: str) -> Block | None:
@@ -168,11 +173,20 @@ class Choices:
             self._path.pop()
         for vertex in range(len(self._path) - 1, len(word)):
             shape = self._product.pairs[vertex].shapes[DIGITS.index(word[vertex])]
-            _, (tags, faces), shifts = self._path[-1]
-            state = _decide(tags, faces, shape) if faces else (tags, ())
-            self._path.append((word[: vertex + 1], state, _convolved(shifts, shape.shifts, self._top)))
+            _, state, shifts = self._path[-1]
+            left = self._step(state, shape) if state[1] else state
+            self._path.append((word[: vertex + 1], left, _convolved(shifts, shape.shifts, self._top)))
         name, (tags, faces), shifts = self._path[-1]
         return Block(name, tags, faces, shifts) if faces and shifts else None
+
+    def _step(self, state: _State, shape: Shape) -> _State:
+        key = (state, shape.move, shape.tag)
+        if key not in self._steps:
+            if self._room < 0:
+                self._steps, self._room = {}, BATCH
+            self._steps[key] = _decide(*state, shape)
+            self._room -= len(state[1]) + len(self._steps[key][1])
+        return self._steps[key]
 
 
 def relevant_faces(product: PolyhedralProduct, top: int | None) -> _Masks:
