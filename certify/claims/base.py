@@ -242,7 +242,8 @@ class Sum(Generic[Key]):
         found = list(orders)
         if len(torsion) + len(found) * times > _MOST_TORSION:
             raise LimitReached(f"more than {_MOST_TORSION} torsion summands in one degree cannot be written out")
-        torsion.extend(found * times)
+        if found:  # otherwise `times` may be any number, also one that is too large for the length of a list
+            torsion.extend(found * times)
 
     def groups(self) -> dict[Key, AbelianGroup]:
         """Return the sums that are not zero, keys ascending."""

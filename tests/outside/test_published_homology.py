@@ -28,8 +28,18 @@ def test_polygons_give_surfaces(n: int) -> None:
     The formula was seen in Yu. A. Neretin, arXiv 1904.08181.
     """
     genus = entry("A01").value[str(n)]
-    assert genus == 1 + (n - 4) * 2 ** (n - 3)
+    assert genus == _genus(n)
     assert certified_homology(disc_product(build("polygon", n=n), REAL)) == graded({0: 1, 1: 2 * genus, 2: 1})
+
+
+def test_a_polygon_gives_a_surface_whose_genus_is_no_machine_number() -> None:
+    """The same formula where a class of blocks has over 2^64 members."""
+    groups = certified_homology(disc_product(build("polygon", n=80), REAL))
+    assert groups == graded({0: 1, 1: 2 * _genus(80), 2: 1})
+
+
+def _genus(n: int) -> int:
+    return int(1 + (n - 4) * 2 ** (n - 3))
 
 
 @pytest.mark.parametrize("m", range(2, 8))
