@@ -19,7 +19,7 @@ from certify.claims.shellings import ShellingClaim
 from certify.errors import BadInput
 from certify.products import PolyhedralProduct, parse_pairs
 from certify.simplicial import SimplicialComplex
-from certify.symmetry import automorphism_generators
+from certify.symmetry.automorphisms import Generators, acting
 from certify.symmetry.characters import IRREDUCIBLES
 from certify.symmetry.elements import Element, element_from_cycles, element_from_sympy, spell_cycles
 from certify.symmetry.surfaces import Surface
@@ -219,18 +219,16 @@ def automorphism_group(
     60
     """
     product = k if isinstance(k, PolyhedralProduct) else _intervals(k)
-    elements = None if generators is None else _elements(generators, product.complex)
+    elements = _elements(generators, product.complex)
     found, certificate = proved_value(AutomorphismsClaim(product, elements), "the order of a group of symmetries")
-    if elements is None:
-        elements = tuple(tuple(to + 1 for to in image) for image in automorphism_generators(product))
-    names = tuple(spell_cycles(element, product.complex) for element in elements)
+    names = tuple(spell_cycles(element, product.complex) for element in acting(elements, product))
     return SymmetryGroup(product.complex, names, int(found["order"]), found["orbits"], certificate)
 
 
 def character(
     product: PolyhedralProduct,
     degree: int,
-    generators: Iterable[Given],
+    generators: Iterable[Given] | None,
     *,
     irreducibles: str | None = None,
     functions: Mapping[str, Sequence[int]] | None = None,
@@ -244,7 +242,8 @@ def character(
     ----------
     product : PolyhedralProduct
     degree : int
-    generators : iterable of str, tuples, or SymPy permutations
+    generators : iterable of str, tuples, or SymPy permutations, or None
+        None is for all automorphisms of K and the pairs, here and in the other functions.
     irreducibles : {"symmetric", "cyclic", "dihedral"}, optional
         Give the multiplicities of the characters irreducible over ℚ of such a group.
     functions : mapping, optional
@@ -273,9 +272,9 @@ def character(
     if irreducibles is not None:
         if irreducibles not in IRREDUCIBLES:
             raise BadInput(where="irreducibles", expected=f"one of {', '.join(IRREDUCIBLES)}", found=irreducibles)
-        chosen = {**IRREDUCIBLES[irreducibles](elements, plain.elements or ()), **chosen}
+        chosen = {**IRREDUCIBLES[irreducibles](acting(elements, product), plain.elements or ()), **chosen}
     if functions_of is not None:
-        chosen = {**functions_of(elements, plain.elements or ()), **chosen}
+        chosen = {**functions_of(acting(elements, product), plain.elements or ()), **chosen}
     claim = CharacterClaim(product, degree, elements, plain.elements, {}, chosen, words)
     found, certificate = proved_value(claim, f"the character on H_{degree}({product}; ℚ)", jobs)
     value = claim.value(found)
@@ -284,7 +283,11 @@ def character(
 
 
 def fixed_set_homology(
-    product: PolyhedralProduct, generators: Iterable[Given], degrees: Iterable[int] | None = None, *, jobs: int = 1
+    product: PolyhedralProduct,
+    generators: Iterable[Given] | None,
+    degrees: Iterable[int] | None = None,
+    *,
+    jobs: int = 1,
 ) -> Homology:
     """Return the integral homology of the points of (X, A)^K that a group of symmetries fixes, proved.
 
@@ -301,7 +304,7 @@ def fixed_set_homology(
 
 
 def orbit_space_homology(
-    k: SimplicialComplex, generators: Iterable[Given], degrees: Iterable[int] | None = None, *, jobs: int = 1
+    k: SimplicialComplex, generators: Iterable[Given] | None, degrees: Iterable[int] | None = None, *, jobs: int = 1
 ) -> Homology:
     """Return the integral homology of (D¹, S⁰)^K / G, proved.
 
@@ -317,7 +320,7 @@ def orbit_space_homology(
     return Homology(tuple(found.items()), claim.degrees, "(D¹,S⁰)^K/G", certificate=certificate)
 
 
-def surface(k: SimplicialComplex, generators: Iterable[Given] = ()) -> ProvedSurface:
+def surface(k: SimplicialComplex, generators: Iterable[Given] | None = ()) -> ProvedSurface:
     """Return the surface that (D¹, S⁰)^K, or its quotient by a group, is, proved.
 
     Raises
@@ -337,7 +340,7 @@ def surface(k: SimplicialComplex, generators: Iterable[Given] = ()) -> ProvedSur
     return ProvedSurface(Surface(found["euler"], bool(found["orientable"]), found["boundary"]), certificate)
 
 
-def branch_points(k: SimplicialComplex, generators: Iterable[Given]) -> BranchPoints:
+def branch_points(k: SimplicialComplex, generators: Iterable[Given] | None) -> BranchPoints:
     """Return the orbits of points of (D¹, S⁰)^K with isotropy, where these points are isolated, proved.
 
     Examples
@@ -365,8 +368,7 @@ def orbit_count(
     >>> orbit_count(polygon(6), 2, ["(1 2 3 4 5 6)"])
     14 orbits, 9 with trivial isotropy
     """
-    elements = None if generators is None else _elements(generators, k)
-    claim = OrbitCountClaim(k, colours, elements, None if content is None else tuple(content))
+    claim = OrbitCountClaim(k, colours, _elements(generators, k), None if content is None else tuple(content))
     found, certificate = proved_value(claim, "a number of orbits")
     return OrbitCount(int(found["orbits"]), int(found["primitive"]), certificate)
 
@@ -392,8 +394,10 @@ def _intervals(k: SimplicialComplex) -> PolyhedralProduct:
     return PolyhedralProduct(k, parse_pairs("(D1, S0)", k.vertex_count))
 
 
-def _elements(given: Iterable[Given], k: SimplicialComplex) -> tuple[Element, ...]:
+def _elements(given: Iterable[Given] | None, k: SimplicialComplex) -> Generators:
     """Return elements from what people give."""
+    if given is None:
+        return None
     if isinstance(given, str):
         raise BadInput(where="generators", expected="a list of permutations", found=repr(given))
     found = []

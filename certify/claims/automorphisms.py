@@ -8,12 +8,11 @@ from functools import partial
 from typing import Any, ClassVar
 
 from certify.certificate.canonical import integer_value
-from certify.claims.base import Contribution
+from certify.claims.base import Contribution, generators_value
 from certify.claims.values import ValuesClaim
 from certify.products import PolyhedralProduct
 from certify.simplicial.complexes import SimplicialComplex
-from certify.symmetry import automorphism_generators
-from certify.symmetry.automorphisms import automorphism_count
+from certify.symmetry.automorphisms import Generators, acting, automorphism_count
 from certify.symmetry.elements import Element, check_symmetries, generated_group, moved_mask, orbit
 
 __all__ = ["MOST_VERTICES", "AutomorphismsClaim"]
@@ -43,7 +42,7 @@ class AutomorphismsClaim(ValuesClaim):
     """
 
     product: PolyhedralProduct
-    generators: tuple[Element, ...] | None = None
+    generators: Generators = None
     claimed: Mapping[str, Any] = field(default_factory=dict)
     route: str = "permutations"
     kind: ClassVar[str] = "automorphisms"
@@ -59,17 +58,14 @@ class AutomorphismsClaim(ValuesClaim):
 
     def fields(self) -> dict[str, Any]:
         """Return generators and pairs."""
-        generators = None if self.generators is None else [list(element) for element in self.generators]
-        return {"generators": generators, "pairs": [pair.value for pair in self.product.pairs]}
+        return {"generators": generators_value(self.generators), "pairs": [pair.value for pair in self.product.pairs]}
 
     def found(self, contributions: Iterable[Contribution]) -> dict[str, Any]:  # noqa: ARG002 - there are none
         """Return order and orbits."""
         k, m = self.base, self.base.vertex_count
-        if self.generators is None:
-            generators = tuple(tuple(to + 1 for to in image) for image in automorphism_generators(self.product))
-            order = automorphism_count(self.product)
-        else:
-            generators, order = self.generators, len(generated_group(self.generators, m))
+        generators = acting(self.generators, self.product)
+        every = self.generators is None
+        order = automorphism_count(self.product) if every else len(generated_group(generators, m))
         levels: dict[int, list[int]] = {}
         for mask in k.face_masks():
             levels.setdefault(mask.bit_count(), []).append(mask)

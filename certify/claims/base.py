@@ -14,6 +14,7 @@ from certify.exact import AbelianGroup, BasedComplex, adapted_basis
 from certify.products import Block
 from certify.simplicial.complexes import SimplicialComplex
 from certify.symmetry.actions import ActedCells
+from certify.symmetry.automorphisms import Generators
 
 __all__ = [
     "Claim",
@@ -28,6 +29,7 @@ __all__ = [
     "Task",
     "checked_degrees",
     "complex_value",
+    "generators_value",
     "group_value",
     "solve",
 ]
@@ -223,6 +225,11 @@ def group_value(group: AbelianGroup) -> tuple[int | str, list[int | str]]:
 def complex_value(k: SimplicialComplex) -> dict[str, Any]:
     """Return the complex as statements have it."""
     return {"facets": [[number + 1 for number in facet] for facet in k.facets], "vertices": k.vertex_count}
+
+
+def generators_value(generators: Generators) -> list[list[int]] | None:
+    """Return generators as statements have them."""
+    return None if generators is None else [list(element) for element in generators]
 
 
 _MOST_TORSION = 10**6

@@ -9,7 +9,7 @@ from typing import Any, ClassVar, Literal
 
 from certify.certificate import vector_value
 from certify.certificate.canonical import integer_value
-from certify.claims.base import Contribution, Task
+from certify.claims.base import Contribution, Task, generators_value
 from certify.claims.homology import HomologyClaim
 from certify.claims.values import Values, ValuesClaim
 from certify.errors import BadInput
@@ -18,6 +18,7 @@ from certify.products import Block, PolyhedralProduct, block_classes
 from certify.products.blocks import DIGITS
 from certify.simplicial.complexes import SimplicialComplex
 from certify.symmetry.actions import ActedCells, acted_blocks
+from certify.symmetry.automorphisms import Generators, acting
 from certify.symmetry.elements import (
     Element,
     check_symmetries,
@@ -40,7 +41,8 @@ class CharacterClaim(ValuesClaim):
     ----------
     product : PolyhedralProduct
     degree : int
-    generators : tuple of Element
+    generators : tuple of Element, or None
+        None is for all automorphisms of K and the pairs.
     elements : tuple of Element, or None
         One element of each rational class; None lets them be found.
     claimed : mapping
@@ -62,7 +64,7 @@ class CharacterClaim(ValuesClaim):
 
     product: PolyhedralProduct
     degree: int
-    generators: tuple[Element, ...]
+    generators: Generators
     elements: tuple[Element, ...] | None = None
     claimed: Values = field(default_factory=dict)
     functions: Mapping[str, tuple[int, ...]] = field(default_factory=dict)
@@ -73,9 +75,9 @@ class CharacterClaim(ValuesClaim):
     def __post_init__(self) -> None:
         """Refuse generators that are no symmetries, and a list of elements that does not match the classes."""
         k = self.base
-        check_symmetries(self.generators, self.product)
-        group = generated_group(self.generators, k.vertex_count)
-        classes = rational_classes(group, self.generators)
+        check_symmetries(self.generators or (), self.product)
+        generators = acting(self.generators, self.product)
+        classes = rational_classes(generated_group(generators, k.vertex_count), generators)
         if self.elements is None:
             object.__setattr__(self, "elements", tuple(own[0] for own in classes))
         where = {element: number for number, own in enumerate(classes) for element in own}
@@ -117,7 +119,7 @@ class CharacterClaim(ValuesClaim):
         """Return the words in the orbits of those that are meant."""
         if self.summands is None:
             return None
-        backs = [inverse(element) for element in self.generators]
+        backs = [inverse(element) for element in acting(self.generators, self.product)]
 
         def images(word: str) -> list[str]:
             return ["".join(word[abs(place) - 1] for place in back) for back in backs]
@@ -144,7 +146,7 @@ class CharacterClaim(ValuesClaim):
             "degree": self.degree,
             "elements": [list(element) for element in self._elements],
             "functions": [[integer_value(x) for x in psi] for psi in self.functions.values()],
-            "generators": [list(element) for element in self.generators],
+            "generators": generators_value(self.generators),
             "pairs": [pair.value for pair in self.product.pairs],
             "summands": None if self.summands is None else list(self.summands),
         }

@@ -7,14 +7,14 @@ from dataclasses import dataclass, field
 from typing import Any, ClassVar
 
 from certify.certificate.canonical import integer_value
-from certify.claims.base import Contribution
+from certify.claims.base import Contribution, generators_value
 from certify.claims.values import Values, ValuesClaim
 from certify.errors import BadInput
 from certify.products import PolyhedralProduct, parse_pairs
 from certify.simplicial.complexes import SimplicialComplex
-from certify.symmetry import automorphism_generators
+from certify.symmetry.automorphisms import Generators, acting
 from certify.symmetry.counting import colouring_orbits
-from certify.symmetry.elements import Element, check_symmetries, generated_group
+from certify.symmetry.elements import check_symmetries, generated_group
 
 __all__ = ["OrbitCountClaim"]
 
@@ -42,7 +42,7 @@ class OrbitCountClaim(ValuesClaim):
 
     complex: SimplicialComplex
     colours: int
-    generators: tuple[Element, ...] | None = None
+    generators: Generators = None
     content: tuple[int, ...] | None = None
     claimed: Values = field(default_factory=dict)
     route: str = "permutations"
@@ -72,16 +72,13 @@ class OrbitCountClaim(ValuesClaim):
         return {
             "colours": self.colours,
             "content": None if self.content is None else list(self.content),
-            "generators": None if self.generators is None else [list(element) for element in self.generators],
+            "generators": generators_value(self.generators),
         }
 
     def found(self, contributions: Iterable[Contribution]) -> dict[str, Any]:
         """Return both numbers."""
         list(contributions)
-        generators = self.generators
-        if generators is None:
-            generators = tuple(tuple(to + 1 for to in image) for image in automorphism_generators(self._product))
-        group = generated_group(generators, self.complex.vertex_count)
+        group = generated_group(acting(self.generators, self._product), self.complex.vertex_count)
         orbits, primitive = colouring_orbits(group, self.colours, self.content)
         return {"orbits": integer_value(orbits), "primitive": integer_value(primitive)}
 

@@ -6,10 +6,12 @@ from collections.abc import Iterator, Mapping
 from dataclasses import dataclass
 from typing import Any, ClassVar
 
-from certify.claims.base import Task
+from certify.claims.base import Task, generators_value
 from certify.claims.homology import HomologyClaim
 from certify.exact import AbelianGroup
-from certify.symmetry.elements import Element, check_symmetries
+from certify.products import PolyhedralProduct
+from certify.symmetry.automorphisms import Generators, acting
+from certify.symmetry.elements import check_symmetries
 from certify.symmetry.fixed_sets import fixed_set
 
 __all__ = ["FixedSetClaim"]
@@ -24,7 +26,8 @@ class FixedSetClaim(HomologyClaim):
     product : PolyhedralProduct
     degrees, groups
         As for `HomologyClaim`.
-    generators : tuple of Element
+    generators : tuple of Element, or None
+        None is for all automorphisms of K and the pairs.
 
     Raises
     ------
@@ -32,18 +35,22 @@ class FixedSetClaim(HomologyClaim):
         If a generator is no symmetry of K and the pairs.
     """
 
-    generators: tuple[Element, ...] = ()
+    generators: Generators = ()
     kind: ClassVar[str] = "fixed-set"
 
     def __post_init__(self) -> None:
         """Refuse generators that are no symmetries."""
         super().__post_init__()
-        check_symmetries(self.generators, self.product)
+        check_symmetries(self.generators or (), self.product)
+
+    @property
+    def _fixed(self) -> PolyhedralProduct | None:
+        return fixed_set(self.product, acting(self.generators, self.product))
 
     @property
     def _inner(self) -> HomologyClaim | None:
         """The claim about the polyhedral product that the fixed set is, or None if it is empty."""
-        fixed = fixed_set(self.product, self.generators)
+        fixed = self._fixed
         return None if fixed is None else HomologyClaim(fixed, self.degrees)
 
     def opening(self) -> Iterator[dict[str, Any]]:
@@ -63,7 +70,7 @@ class FixedSetClaim(HomologyClaim):
 
     def fields(self) -> dict[str, Any]:
         """Return degrees, pairs and generators."""
-        return super().fields() | {"generators": [list(element) for element in self.generators]}
+        return super().fields() | {"generators": generators_value(self.generators)}
 
     def in_degree(self, degree: str) -> str:
         """Write a homology group as in print."""
@@ -71,6 +78,6 @@ class FixedSetClaim(HomologyClaim):
 
     def lines(self, found: Mapping[int, AbelianGroup]) -> list[str]:
         """Write the groups, and what the fixed set is."""
-        fixed = fixed_set(self.product, self.generators)
+        fixed = self._fixed
         which = "empty" if fixed is None else f"{fixed}, K_G on {fixed.complex}"
         return [*super().lines(found), f"the fixed set is {which}"]

@@ -7,13 +7,14 @@ from collections.abc import Iterable, Iterator, Mapping
 from dataclasses import dataclass, field
 from typing import Any, ClassVar
 
-from certify.claims.base import Contribution, DegreesClaim, Task, checked_degrees
+from certify.claims.base import Contribution, DegreesClaim, Task, checked_degrees, generators_value
 from certify.claims.values import Values, ValuesClaim
 from certify.errors import BadInput, ClaimIsFalse
 from certify.exact import AbelianGroup
 from certify.products import PolyhedralProduct, parse_pairs
 from certify.simplicial.complexes import SimplicialComplex
-from certify.symmetry.elements import Element, check_symmetries
+from certify.symmetry.automorphisms import Generators, acting
+from certify.symmetry.elements import check_symmetries
 from certify.symmetry.orbit_spaces import OrbitSpace
 from certify.symmetry.surfaces import Surface, branch_orbits, recognise_surface
 
@@ -31,8 +32,8 @@ class OrbitSpaceClaim(DegreesClaim):
     Parameters
     ----------
     complex : SimplicialComplex
-    generators : tuple of Element
-        Of G; signed.
+    generators : tuple of Element, or None
+        Of G; signed. None is for all automorphisms of K.
     degrees : tuple of int, or None
     groups : mapping from degree to AbelianGroup, or None
 
@@ -43,7 +44,7 @@ class OrbitSpaceClaim(DegreesClaim):
     """
 
     complex: SimplicialComplex
-    generators: tuple[Element, ...]
+    generators: Generators
     degrees: tuple[int, ...] | None = None
     groups: Mapping[int, AbelianGroup] | None = None
     route: str = "cells"
@@ -52,7 +53,7 @@ class OrbitSpaceClaim(DegreesClaim):
     def __post_init__(self) -> None:
         """Refuse generators that are no symmetries, and degrees that are none."""
         object.__setattr__(self, "degrees", checked_degrees(self.degrees, self.groups))
-        check_symmetries(self.generators, _intervals(self.complex))
+        check_symmetries(self.generators or (), _intervals(self.complex))
 
     @property
     def base(self) -> SimplicialComplex:
@@ -61,7 +62,8 @@ class OrbitSpaceClaim(DegreesClaim):
 
     def tasks(self) -> Iterator[Task]:
         """Yield the one piece of work."""
-        yield Task(OrbitSpace(_intervals(self.complex), self.generators))
+        product = _intervals(self.complex)
+        yield Task(OrbitSpace(product, acting(self.generators, product)))
 
     def in_degree(self, degree: str) -> str:
         """Write a homology group as in print."""
@@ -69,7 +71,7 @@ class OrbitSpaceClaim(DegreesClaim):
 
     def fields(self) -> dict[str, Any]:
         """Return degrees and generators."""
-        return super().fields() | {"generators": [list(element) for element in self.generators]}
+        return super().fields() | {"generators": generators_value(self.generators)}
 
 
 @dataclass(frozen=True)
@@ -77,13 +79,13 @@ class _QuotientClaim(ValuesClaim):
     """A claim about values that are read off the chains of cells of (D¹, S⁰)^K / G."""
 
     complex: SimplicialComplex
-    generators: tuple[Element, ...] = ()
+    generators: Generators = ()
     claimed: Values = field(default_factory=dict)
     route: str = "cells"
 
     def __post_init__(self) -> None:
         """Refuse generators that are no symmetries."""
-        check_symmetries(self.generators, _intervals(self.complex))
+        check_symmetries(self.generators or (), _intervals(self.complex))
 
     @property
     def base(self) -> SimplicialComplex:
@@ -92,12 +94,13 @@ class _QuotientClaim(ValuesClaim):
 
     def fields(self) -> dict[str, Any]:
         """Return the generators."""
-        return {"generators": [list(element) for element in self.generators]}
+        return {"generators": generators_value(self.generators)}
 
     def found(self, contributions: Iterable[Contribution]) -> dict[str, Any]:
         """Return the values of the quotient."""
         list(contributions)
-        space = OrbitSpace(_intervals(self.complex), self.generators, always_chains=True)
+        product = _intervals(self.complex)
+        space = OrbitSpace(product, acting(self.generators, product), always_chains=True)
         try:
             return self.read_off(space)
         except BadInput as fault:
@@ -115,8 +118,8 @@ class SurfaceClaim(_QuotientClaim):
     Parameters
     ----------
     complex : SimplicialComplex
-    generators : tuple of Element
-        Of G; none for the space itself.
+    generators : tuple of Element, or None
+        Of G; empty for the space itself. None is for all automorphisms of K.
     claimed : mapping
         Some of ``euler``, ``orientable`` (0 or 1) and ``boundary``, the number of boundary circles.
 
@@ -140,7 +143,7 @@ class SurfaceClaim(_QuotientClaim):
 
     @property
     def _space(self) -> str:
-        return f"(D¹,S⁰)^K{'/G' if self.generators else ''}"
+        return f"(D¹,S⁰)^K{'' if self.generators == () else '/G'}"
 
     def shown(self, key: str, value: Any) -> str:
         """Write a value."""
@@ -157,7 +160,8 @@ class BranchingClaim(_QuotientClaim):
     Parameters
     ----------
     complex : SimplicialComplex
-    generators : tuple of Element
+    generators : tuple of Element, or None
+        None is for all automorphisms of K.
     claimed : mapping
         ``orbits``: pairs of the order of an isotropy group above 1 and the number of orbits, orders ascending.
 

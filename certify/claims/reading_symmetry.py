@@ -17,6 +17,7 @@ from certify.claims.shellings import ShellingClaim
 from certify.products import PolyhedralProduct
 from certify.simplicial import SimplicialComplex
 from certify.simplicial.inputs import placed, plain_labels
+from certify.symmetry.automorphisms import Generators, acting
 from certify.symmetry.characters import IRREDUCIBLES, induced_character
 from certify.symmetry.elements import Element, element_from_cycles, generated_group, rational_classes
 from certify.tables import Table, shown
@@ -25,7 +26,8 @@ __all__ = ["SYMMETRY_KINDS"]
 
 
 def _automorphisms(table: Table, given: Given) -> AutomorphismsClaim:
-    product = product_of(_with_pair(table), given)
+    table = _with(table, pair="(D1, S0)", generators="all")
+    product = product_of(table, given)
     claimed: dict[str, Any] = {}
     if "order" in table.values:
         claimed["order"] = _whole(table, "order", least=1)
@@ -50,10 +52,10 @@ def _orbits(table: Table) -> dict[str, Any]:
 
 
 def _character(table: Table, given: Given) -> CharacterClaim:
-    product = product_of(_with_pair(table), given)
+    product = product_of(_with(table, pair="(D1, S0)"), given)
     k = product.complex
     degree = _whole(table, "degree")
-    generators = _required_generators(table, k)
+    generators = _generators(table, k)
     elements: tuple[Element, ...] | None = None
     claimed: dict[str, Any] = {}
     if "values" in table.values:
@@ -63,7 +65,7 @@ def _character(table: Table, given: Given) -> CharacterClaim:
         CharacterClaim(product, degree, generators)
     with placed(table, "values"):
         claim = CharacterClaim(product, degree, generators, elements)
-    functions = _functions(table, k, generators, claim.elements or ())
+    functions = _functions(table, k, acting(generators, product), claim.elements or ())
     if "multiplicities" in table.values:
         claimed["multiplicities"] = _multiplicities(table, functions)
     summands = _summands(table, product) if "summands" in table.values else None
@@ -132,19 +134,19 @@ def _multiplicities(table: Table, functions: Mapping[str, tuple[int, ...]]) -> d
 
 
 def _action(table: Table, given: Given) -> ActionClaim:
-    product = product_of(_with_pair(table), given)
+    product = product_of(_with(table, pair="(D1, S0)"), given)
     element = _element(table, "element", product.complex)
     with table.at("element"):
         return ActionClaim(product, _whole(table, "degree"), element)
 
 
 def _fixed_set(table: Table, given: Given) -> FixedSetClaim:
-    product = product_of(_with_pair(table), given)
+    product = product_of(_with(table, pair="(D1, S0)"), given)
     if ("element" in table.values) == ("generators" in table.values):
         raise table.fault(expected="one of the keys element and generators", found="both or neither")
     key = "element" if "element" in table.values else "generators"
-    alone = key == "element"
-    elements = (_element(table, key, product.complex),) if alone else _required_generators(table, product.complex)
+    k, alone = product.complex, key == "element"
+    elements = (_element(table, key, k),) if alone else _generators(table, k)
     degrees, groups = degrees_of(table), groups_by_degree(table)
     with placed(table, key):
         return FixedSetClaim(product, degrees, groups, generators=elements)
@@ -152,7 +154,7 @@ def _fixed_set(table: Table, given: Given) -> FixedSetClaim:
 
 def _orbit_space(table: Table, given: Given) -> OrbitSpaceClaim:
     k = complex_of(table, given)
-    generators, degrees, groups = _required_generators(table, k), degrees_of(table), groups_by_degree(table)
+    generators, degrees, groups = _generators(table, k), degrees_of(table), groups_by_degree(table)
     with placed(table, "generators"):
         return OrbitSpaceClaim(k, generators, degrees, groups)
 
@@ -176,7 +178,7 @@ def _surface(table: Table, given: Given) -> SurfaceClaim:
             raise table.fault("genus", expected=expected, found="another surface")
         claimed |= {"boundary": 0, "euler": 2 - 2 * _whole(table, "genus")}
     with table.at("generators"):
-        return SurfaceClaim(k, _generators(table, k) or (), claimed)
+        return SurfaceClaim(k, _generators(_with(table, generators=[]), k), claimed)
 
 
 def _branching(table: Table, given: Given) -> BranchingClaim:
@@ -188,7 +190,7 @@ def _branching(table: Table, given: Given) -> BranchingClaim:
             if not key.isdecimal() or int(key) < 2 or str(int(key)) != key:
                 raise inner.fault(key, expected="the order of an isotropy group, from 2 on", found=shown(key))
         claimed["orbits"] = sorted([int(key), _whole(inner, key, least=1)] for key in inner.values)
-    generators = _required_generators(table, k)
+    generators = _generators(table, k)
     with table.at("generators"):
         return BranchingClaim(k, generators, claimed)
 
@@ -206,7 +208,8 @@ def _orbit_count(table: Table, given: Given) -> OrbitCountClaim:
     colours = _whole(table, "colours", least=1) if "colours" in table.values or content is None else len(content)
     claimed = {key: _whole(table, key) for key in ("orbits", "primitive") if key in table.values}
     with placed(table, "generators"):
-        return OrbitCountClaim(k, colours, _generators(table, k), content, claimed)
+        generators = _generators(_with(table, generators="all"), k)
+        return OrbitCountClaim(k, colours, generators, content, claimed)
 
 
 def _identity(table: Table, _: Given) -> IdentityClaim:
@@ -250,9 +253,9 @@ SYMMETRY_KINDS: Mapping[str, Kind] = MappingProxyType(
 # -- values that several kinds have -------------------------------------------------------------
 
 
-def _with_pair(table: Table) -> Table:
-    """Return a table in which (D1, S0) stands where no pair is given."""
-    return Table(table.keys, {"pair": "(D1, S0)", **table.values})
+def _with(table: Table, **values: Any) -> Table:
+    """Return a table in which these values stand where none are given."""
+    return Table(table.keys, {**values, **table.values})
 
 
 def _whole(table: Table, key: str, place: int | None = None, *, least: int | None = 0) -> int:
@@ -273,8 +276,10 @@ def _element(table: Table, key: str, k: SimplicialComplex) -> Element:
         return element_from_cycles(text, k)
 
 
-def _elements(table: Table, key: str, k: SimplicialComplex) -> tuple[Element, ...]:
-    expected = 'a list of permutations in cycles like ["(1 2 3)(4 5)"]'
+_LIST = 'a list of permutations in cycles like ["(1 2 3)(4 5)"]'
+
+
+def _elements(table: Table, key: str, k: SimplicialComplex, expected: str = _LIST) -> tuple[Element, ...]:
     found = []
     for place, text in enumerate(table.items(key, expected)):
         if not isinstance(text, str):
@@ -284,14 +289,11 @@ def _elements(table: Table, key: str, k: SimplicialComplex) -> tuple[Element, ..
     return tuple(found)
 
 
-def _generators(table: Table, k: SimplicialComplex) -> tuple[Element, ...] | None:
-    """Return the generators, or None where none are given."""
-    return _elements(table, "generators", k) if "generators" in table.values else None
-
-
-def _required_generators(table: Table, k: SimplicialComplex) -> tuple[Element, ...]:
-    table.items("generators", 'a list of permutations in cycles like ["(1 2 3)(4 5)"]')
-    return _elements(table, "generators", k)
+def _generators(table: Table, k: SimplicialComplex) -> Generators:
+    """Return the generators of G, or None for all automorphisms."""
+    if table.values.get("generators") == "all":
+        return None
+    return _elements(table, "generators", k, f'{_LIST}, or "all"')
 
 
 def _by_element(table: Table, keys: tuple[str, ...], k: SimplicialComplex) -> dict[Element, int]:

@@ -5,14 +5,34 @@ from __future__ import annotations
 from typing import TYPE_CHECKING
 
 from certify.products import PolyhedralProduct
+from certify.symmetry.elements import Element
 
 if TYPE_CHECKING:
     import igraph
 
-__all__ = ["Permutation", "automorphism_count", "automorphism_generators"]
+__all__ = ["Generators", "Permutation", "acting", "automorphism_count", "automorphism_generators"]
 
 Permutation = tuple[int, ...]
 """The images of the vertex numbers 0, 1, …, in order."""
+
+Generators = tuple[Element, ...] | None
+"""Generators of a group of symmetries; None for that of all automorphisms of K and the pairs."""
+
+
+def acting(generators: Generators, product: PolyhedralProduct) -> tuple[Element, ...]:
+    """Return the generators, or those that are found for the group of all automorphisms.
+
+    Examples
+    --------
+    >>> from certify.products import parse_pairs
+    >>> from certify.simplicial.families import points
+    >>> product = PolyhedralProduct(points(2), parse_pairs("(D1, S0)", 2))
+    >>> acting(None, product), acting(((-1, 2),), product)
+    (((2, 1),), ((-1, 2),))
+    """
+    if generators is not None:
+        return generators
+    return tuple(tuple(to + 1 for to in image) for image in automorphism_generators(product))
 
 
 def automorphism_generators(product: PolyhedralProduct) -> tuple[Permutation, ...]:

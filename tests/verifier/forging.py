@@ -85,6 +85,7 @@ CLAIMS: dict[str, Claim[Any]] = {
     "character": CharacterClaim(
         disc_product(polygon(5), 1), 1, (ROTATION, REFLECTION), functions={"trivial": (1, 1, 1), "two": (4, -1, 0)}
     ),
+    "character-of-all": CharacterClaim(disc_product(polygon(5), 2), 3, None, summands=("10100",)),
     "character-by-cells": CharacterClaim(disc_product(polygon(4), 1), 1, ((2, -3, 4, 1),), route="cells"),
     "character-of-summands": CharacterClaim(disc_product(polygon(5), 2), 3, (ROTATION,), summands=("10100",)),
     "character-of-own-pair": CharacterClaim(
@@ -92,11 +93,14 @@ CLAIMS: dict[str, Claim[Any]] = {
     ),
     "action": ActionClaim(disc_product(polygon(4), 1), 1, (2, 3, 4, 1)),
     "fixed-set": FixedSetClaim(disc_product(polygon(5), 1), generators=(REFLECTION,)),
+    "fixed-set-of-nothing": FixedSetClaim(disc_product(polygon(5), 1)),
+    "fixed-set-of-all": FixedSetClaim(disc_product(polygon(5), 1), generators=None),
     "fixed-set-with-signs": FixedSetClaim(disc_product(polygon(4), 1), generators=((-1, 2, 3, 4),)),
     "fixed-set-of-own-pair": FixedSetClaim(
         PolyhedralProduct(build("points", m=3), (DEGREE_TWO,) * 3), generators=((2, 1, 3),)
     ),
     "orbit-space": OrbitSpaceClaim(polygon(4), ((2, 3, 4, 1),)),
+    "orbit-space-of-all": OrbitSpaceClaim(polygon(4), None),
     "free-orbit-space": OrbitSpaceClaim(polygon(4), ((-1, -2, -3, -4),)),
     "surface": SurfaceClaim(polygon(4), ((1, 4, 3, 2),)),
     "branching": BranchingClaim(polygon(5), (ROTATION,)),

@@ -67,17 +67,17 @@ def _claim(statement: dict[str, Any]) -> Claim[Any]:
             functions = {str(i): tuple(map(int, psi)) for i, psi in enumerate(statement["functions"])}
             words = statement["summands"]
             summands = None if words is None else tuple(words)
-            return CharacterClaim(product, statement["degree"], generators or (), elements, {}, functions, summands)
+            return CharacterClaim(product, statement["degree"], generators, elements, {}, functions, summands)
         case "action":
             return ActionClaim(product, statement["degree"], tuple(statement["element"]))
         case "fixed-set":
-            return FixedSetClaim(product, degrees and tuple(degrees), generators=generators or ())
+            return FixedSetClaim(product, degrees and tuple(degrees), generators=generators)
         case "orbit-space":
-            return OrbitSpaceClaim(k, generators or (), degrees and tuple(degrees))
+            return OrbitSpaceClaim(k, generators, degrees and tuple(degrees))
         case "surface":
-            return SurfaceClaim(k, generators or ())
+            return SurfaceClaim(k, generators)
         case "branching":
-            return BranchingClaim(k, generators or ())
+            return BranchingClaim(k, generators)
         case "shelling":
             return ShellingClaim(k)
         case "orbit-count":
