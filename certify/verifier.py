@@ -1172,7 +1172,7 @@ def full_group(statement: Statement, budget: Budget) -> tuple[int, list[Element]
     The order is the product of the sizes of the orbits of each vertex under those that fix the vertices before it; an
     automorphism with given first images is looked for by trying all, face by face.
     """
-    masks = {face for level in face_masks(statement, budget) for face in level}
+    masks = {face for level in face_masks(statement, budget, whole=True) for face in level}
     m = statement.vertices
     ending = [[face for face in masks if face.bit_length() == vertex + 1] for vertex in range(m)]
     marks = [

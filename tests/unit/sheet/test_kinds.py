@@ -741,7 +741,18 @@ kind = "orbit-space"
 complex = "ring"
 """,
         'line 6, claim 1: expected the key generators with a list of permutations in cycles like ["(1 2 '
-        '3)(4 5)"], found no such key',
+        '3)(4 5)"], or "all", found no such key',
+    ),
+    "a group that is called by another name": (
+        """\
+[[claims]]
+id = "a"
+kind = "orbit-space"
+complex = "ring"
+generators = "most"
+""",
+        'line 10, claim 1, key generators: expected a list of permutations in cycles like ["(1 2 3)(4 5)"], or "all", '
+        "found 'most'",
     ),
 }
 """What follows the complexes, and the whole message."""
