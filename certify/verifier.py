@@ -45,7 +45,8 @@ FORMAT = 1
 LETTERS = [bytes([i]) for i in range(256)]
 DIGITS = "0123456789abcdefghijklmnopqrstuvwxyz"
 BATCH = 1 << 18  # faces that are merged together at most; part of the format, since it decides which records there are
-LARGEST = 2**53 - 1  # integers beyond are written as strings (RFC 7493)
+LARGEST = 2**53 - 1  # integers beyond are written as strings (RFC 7493); above the degrees of all cells, since those
+# of a pair are below 2,000, and more than 10^9 vertices are beyond any limit
 ENDINGS = (".cert.jsonl", ".cert.jsonl.gz")
 CHUNK = 1 << 16
 LINE = 1 << 26  # bytes of a line at most, since a line is held in memory
@@ -224,6 +225,7 @@ class Statement:
         self.value = value = record(raw, ("kind", *about, *question, *answer))
         self.stated = {key: value[key] for key in answer}
         self.vertices = integer(value.get("vertices", 0), budget)
+        budget.spend("cells", self.vertices)
         self.facets = [numbers(facet, 1, self.vertices + 1) for facet in sequence(value.get("facets", [[]]))]
         self.check_facets(budget)
         self.pairs = [Pair(pair, budget) for pair in sequence(value.get("pairs", ["(D1, S0)"] * self.vertices))]
@@ -353,13 +355,14 @@ class Pair:
         self.cells = []
         for degree, side, boundary in entries:
             entry = vector(boundary, len(self.cells), budget) if sequence(boundary) else []
-            self.cells.append((integer(degree, budget), integer(side, budget), tuple(entry)))
+            self.cells.append((numbers([degree], 0, 1000)[0], integer(side, budget), tuple(entry)))
         degrees = [degree for degree, _, _ in self.cells]
         for degree, outside, terms in self.cells:
             below = all(degrees[cell] == degree - 1 and self.cells[cell][1] <= outside for cell, _ in terms)
-            require(degree >= 0 and outside in (0, 1) and below, "pair", "degrees fit, and A is closed under d")
+            require(outside in (0, 1) and below, "pair", "degrees fit, and A is closed under d")
             require(not self.image(terms), "pair", "the boundary of a boundary is zero")
-        names = [f"c{i} in degree {d}" + (f", d c{i} = {t}" if t else "") for i, (d, _, t) in enumerate(self.cells)]
+        ends = [" ".join(f"{x:+} c{i}" for i, x in terms) for _, _, terms in self.cells]
+        names = [f"c{i} in degree {d}" + f", d c{i} = {ends[i]}" * bool(t) for i, (d, _, t) in enumerate(self.cells)]
         inside = " ".join(f"c{i}" for i, (_, outside, _) in enumerate(self.cells) if not outside)
         self.text = f"(⟨{'; '.join(names)}⟩,⟨{inside}⟩)"
 
@@ -394,7 +397,7 @@ class Pair:
                 known = found.setdefault((shape[0], canonical(shape[1])), (shape[0], shape[1], {}))[2]
                 known.update((shift, times + known.get(shift, 0)) for shift, times in shape[2].items())
         self.shapes = [found[key] for key in sorted(found)]
-        require(len(self.shapes) <= len(DIGITS), "limit", "a pair has more different summands than there are digits")
+        require(len(self.shapes) <= len(DIGITS), "pair", "a pair has at most 36 different summands")
 
 
 def components(cells: list[tuple[int, int, dict[int, int]]]) -> list[list[int]]:
@@ -1308,12 +1311,15 @@ def traces_by_blocks(statement: Statement, elements: list[Element], lines: Lines
     faces = face_masks(statement, budget)
     chosen = None
     if statement.value["summands"] is not None:
-        words = [tuple(str(word)) for word in sequence(statement.value["summands"])]
-        fit = all(len(word) == statement.vertices for word in words)
-        require(fit, "statement", "a summand is a word with a digit for each vertex")
+        words = sequence(statement.value["summands"])
+        word_form = "".join(f"[{DIGITS[: len(pair.shapes)]}]" for pair in statement.pairs)
+        fit = all(type(word) is str and re.fullmatch(word_form, word) for word in words)
+        require(bool(words) and fit, "statement", "summands are words with a digit for each vertex")
+        plain = all(to > 0 for generator in statement.generators for to in generator)
+        require(plain, "symmetry", "a change of sign preserves no single summand")
         by = [inverse_of(generator) for generator in statement.generators]
-        moved_words = (orbit(word, lambda w: [tuple(w[abs(v) - 1] for v in back) for back in by]) for word in words)
-        chosen = {"".join(word) for reached in moved_words for word in reached}
+        moved_words = (orbit(word, lambda w: ["".join(w[v - 1] for v in back) for back in by]) for word in words)
+        chosen = {word for reached in moved_words for word in reached}
     traces = []
     for element in elements:
         if chosen is None and element == tuple(range(1, statement.vertices + 1)):
@@ -1675,6 +1681,7 @@ def orbit_partition(parts: list[frozenset[int]]) -> frozenset[frozenset[int]]:
 
 
 def divisors(n: int) -> list[int]:
+    require(n > 0, "expression", "0 has no finite list of divisors")
     return [d for d in range(1, n + 1) if n % d == 0]
 
 
@@ -1702,7 +1709,7 @@ FORMULAS: dict[str, Callable[..., int]] = {
     "mobius": mobius,
     "necklaces": necklaces,
     "witt": lambda *a: sum(mobius(d) * multinomial([x // d for x in a]) for d in divisors(gcd(*a))) // sum(a),
-    "totient": lambda n: sum(1 for k in range(1, n + 1) if gcd(n, k) == 1),
+    "totient": lambda n: sum(mobius(d) * (n // d) for d in divisors(n)),
 }
 
 
@@ -1721,17 +1728,19 @@ def evaluate(node: ast.AST, names: dict[str, int], budget: Budget) -> int:
         case ast.BinOp(left, operation, right) if type(operation).__name__ in OPERATIONS:
             a, b = evaluate(left, names, budget), evaluate(right, names, budget)
             power = isinstance(operation, ast.Pow)
-            small = not power or 0 <= b * max(a.bit_length(), 1) <= budget.limits["bits"]
-            require(small and (b != 0 or not isinstance(operation, ast.FloorDiv)), "expression", "a power or division")
+            fits = b >= 0 if power else b != 0 or not isinstance(operation, ast.FloorDiv)
+            require(fits, "expression", "a negative exponent, or a division by 0")
+            small = not power or b * max(a.bit_length(), 1) <= budget.limits["bits"]
+            require(small, "limit", f"a power of more than {budget.limits['bits']} bits; raise --max-bits")
             return OPERATIONS[type(operation).__name__](a, b)
         case ast.Call(ast.Name("sum"), [ast.GeneratorExp(term, [ast.comprehension(ast.Name(name), over, [])])], []):
-            match over:
-                case ast.Call(ast.Name("divisors"), [number], []):
+            match name, over:
+                case "d", ast.Call(ast.Name("divisors"), [number], []):
                     places: Iterable[int] = divisors(small_number(number, names, budget))
-                case ast.Call(ast.Name("range"), [first, last], []):
+                case "k", ast.Call(ast.Name("range"), [first, last], []):
                     places = range(small_number(first, names, budget), small_number(last, names, budget))
                 case _:
-                    raise Failure("expression", "a sum is over divisors(n) or range(a, b)")
+                    raise Failure("expression", "a sum is over d in divisors(n) or k in range(a, b)")
             return sum(evaluate(term, names | {name: place}, budget) for place in places)
         case ast.Call(ast.Name(name), arguments, []) if name in FORMULAS and arguments:
             return int(FORMULAS[name](*(small_number(argument, names, budget) for argument in arguments)))
@@ -1744,6 +1753,7 @@ def small_number(node: ast.AST, names: dict[str, int], budget: Budget) -> int:
     return value
 
 
+MIXED = "[0-9][a-z]|[a-z][0-9]"
 OPERATIONS: dict[str, Callable[[int, int], int]]
 OPERATIONS = {"Add": operator.add, "Sub": operator.sub, "Mult": operator.mul, "FloorDiv": operator.floordiv, "Pow": pow}
 
@@ -1757,6 +1767,8 @@ def prove_identity(statement: Statement, _: Lines, budget: Budget) -> Proved:
     require(1 <= first <= last <= 1000, "statement", "the range lies within 1 to 1000, and is not empty")
     sides = [str(value[key]) for key in ("left", "right")]
     require(max(map(len, sides)) <= 1000, "statement", "an expression has at most 1000 characters")
+    plain = all(re.fullmatch("[0-9a-z+*/(), -]+", side) and not re.search(MIXED, side) for side in sides)
+    require(plain, "expression", "an expression has lower-case names, decimal numbers and + - * / ( ) , only")
     try:
         left, right = (ast.parse(side, mode="eval") for side in sides)
         pairs = [(evaluate(left, {"n": n}, budget), evaluate(right, {"n": n}, budget)) for n in range(first, last + 1)]
@@ -1884,7 +1896,7 @@ def show(report: dict[str, str | None]) -> None:
     """Print the report on one file."""
     print(f"{report['verdict']:<10} {printable(report['path'])}")
     if report["verdict"] == "accepted":
-        print(f"           {report['statement']}\n           fingerprint {report['fingerprint']}")
+        print(f"           {printable(report['statement'])}\n           fingerprint {report['fingerprint']}")
     else:
         where = f"{report['where']}, " if report["where"] else ""
         print(f"           {where}{report['reason']}: {printable(report['sentence'])}")

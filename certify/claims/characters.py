@@ -106,6 +106,12 @@ class CharacterClaim(ValuesClaim):
         """Refuse words that choose no summands, and summands on the route of cells."""
         if self.summands is not None and self.route == "cells":
             raise BadInput(where="route", expected="blocks where single summands are meant", found="cells")
+        if self.summands == ():
+            raise BadInput(where="summands", expected="at least one summand", found="none")
+        signs = any(to < 0 for element in self.generators or () for to in element)
+        if self.summands is not None and signs:
+            found = "a change of sign, which preserves no single summand"
+            raise BadInput(where="summands", expected="generators without signs", found=found)
         for word in self.summands or ():
             sizes = [len(pair.shapes) for pair in self.product.pairs]
             fits = len(word) == len(sizes) and all(

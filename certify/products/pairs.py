@@ -15,6 +15,8 @@ __all__ = ["Pair", "parse_pair", "parse_pairs"]
 
 _RAISED = str.maketrans("⁰¹²³⁴⁵⁶⁷⁸⁹", "0123456789")
 _MOST_CELLS = 255
+_MOST_SHAPES = 36
+_LARGEST_DEGREE = 999
 _STAY = Shape(Move.STAY, 0, ((0, 1),))
 
 
@@ -62,6 +64,9 @@ class Pair:
         letters = tuple(Letter(degree, outside, entries(dict(boundary))) for degree, outside, boundary in cells)
         _check(letters)
         splitting = split(letters)
+        if len(splitting.shapes) > _MOST_SHAPES:
+            expected = f"at most {_MOST_SHAPES} different summands"
+            raise BadInput(where="the pair", expected=expected, found=f"{len(splitting.shapes)}")
         return cls(_described(letters), "(X,A)", letters, splitting.shapes, splitting)
 
     def __str__(self) -> str:
@@ -82,8 +87,8 @@ def _check(letters: Sequence[Letter]) -> None:
         raise BadInput(where="the pair", expected=f"1 to {_MOST_CELLS} cells", found=f"{len(letters)}")
     for number, letter in enumerate(letters):
         where = f"cell {number + 1} of the pair"
-        if letter.degree < 0:
-            raise BadInput(where=where, expected="a degree from 0 on", found=f"{letter.degree}")
+        if not 0 <= letter.degree <= _LARGEST_DEGREE:
+            raise BadInput(where=where, expected=f"a degree from 0 to {_LARGEST_DEGREE}", found=f"{letter.degree}")
         for place, _ in letter.boundary:
             if not 0 <= place < number:
                 raise BadInput(where=where, expected="a boundary on earlier cells", found=f"cell {place + 1} in it")

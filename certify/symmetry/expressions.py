@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import ast
+import re
 from collections.abc import Callable, Mapping
 from math import comb, gcd
 from types import CodeType, MappingProxyType
@@ -15,26 +16,32 @@ __all__ = ["FORMULAS", "values_of"]
 _MOST_CHARACTERS = 1000
 _LARGEST_ARGUMENT = 1000
 _MOST_BITS = 14_000
-_PLACES = ("divisors", "range")
+_PLACES = {"d": "divisors", "k": "range"}
 _OPERATIONS = (ast.Add, ast.Sub, ast.Mult, ast.FloorDiv, ast.Pow)
 
 
 def _totient(n: int) -> int:
     from sympy import totient
 
-    return int(totient(n))
+    return int(totient(_positive(n)))
 
 
 def _mobius(n: int) -> int:
     from sympy.functions.combinatorial.numbers import mobius
 
-    return int(mobius(n))
+    return int(mobius(_positive(n)))
 
 
 def _divisors(n: int) -> list[int]:
     from sympy import divisors
 
-    return [int(d) for d in divisors(n)]
+    return [int(d) for d in divisors(_positive(n))]
+
+
+def _positive(n: int) -> int:
+    if n < 1:
+        raise ValueError(f"{n} where a number from 1 on is needed")
+    return n
 
 
 FORMULAS: Mapping[str, Callable[..., int]] = MappingProxyType(
@@ -95,6 +102,8 @@ def _compiled(text: str) -> CodeType:
     """Return an expression ready to be evaluated, after a look at each part of it."""
     if len(text) > _MOST_CHARACTERS:
         raise _fault(f"one of {len(text)} characters")
+    if not re.fullmatch("[0-9a-z+*/(), -]+", text) or re.search("[0-9][a-z]|[a-z][0-9]", text):
+        raise _fault(repr(text))
     try:
         tree = ast.parse(text, mode="eval")
     except (SyntaxError, ValueError, RecursionError) as error:
@@ -126,15 +135,13 @@ def _is_known(node: ast.AST) -> bool:
     match node:
         case ast.Constant(value):
             return type(value) is int
-        case ast.Name(name):
-            return not name.startswith("_")
-        case ast.Call(ast.Name("sum"), [ast.GeneratorExp(_, [ast.comprehension(ast.Name(), over, [])])], []):
-            return isinstance(over, ast.Call) and isinstance(over.func, ast.Name) and over.func.id in _PLACES
+        case ast.Call(ast.Name("sum"), [ast.GeneratorExp(_, [ast.comprehension(ast.Name(name), over, [])])], []):
+            return isinstance(over, ast.Call) and isinstance(over.func, ast.Name) and over.func.id == _PLACES.get(name)
         case ast.Call(ast.Name(name), arguments, []):
-            return bool(arguments) and (name in FORMULAS or name in _PLACES)
+            return bool(arguments) and (name in FORMULAS or name in _PLACES.values())
         case ast.BinOp():
             return isinstance(node.op, _OPERATIONS)
-        case ast.Expression() | ast.GeneratorExp() | ast.comprehension() | ast.Load() | ast.Store():
+        case ast.Expression() | ast.Name() | ast.GeneratorExp() | ast.comprehension() | ast.Load() | ast.Store():
             return True
         case _:
             return isinstance(node, _OPERATIONS)
@@ -153,5 +160,5 @@ def _checked(function: Callable[..., object]) -> Callable[..., object]:
 
 def _fault(found: str) -> BadInput:
     formulas = ", ".join(FORMULAS)
-    expected = f"whole numbers, n, + - * // **, sums over divisors(n) or range(a, b), and {formulas}"
+    expected = f"whole numbers, n, + - * // **, sums over d in divisors(n) or k in range(a, b), and {formulas}"
     return BadInput(where="expression", expected=expected, found=found)

@@ -205,7 +205,6 @@ INVALID: dict[str, tuple[str, Any, tuple[str | int, ...], Any]] = {
     "a pair with e = 1 and b": ("record-blocks", RECORD, ("basis", 0, "pairs", 1, 1), 1),
     "groups without an order": ("record-blocks", RECORD, ("basis", 0, "groups"), GROUPED["groups"]),
     "a group of one cell": ("record-cells", {"basis": [GROUPED]}, ("basis", 0, "groups", 0, "cells"), [1]),
-    "no degrees in a basis": ("record-blocks", RECORD, ("basis",), []),
     "an element with 0": ("header", CHARACTER, ("statement", "generators", 0, 0), 0),
     "an image twice": ("header", CHARACTER, ("statement", "generators", 0, 0), 1),
     "a value that is a fraction": ("header", CHARACTER, ("statement", "values", 0), 0.5),

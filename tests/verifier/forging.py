@@ -88,6 +88,9 @@ CLAIMS: dict[str, Claim[Any]] = {
     "character-of-all": CharacterClaim(disc_product(polygon(5), 2), 3, None, summands=("10100",)),
     "character-by-cells": CharacterClaim(disc_product(polygon(4), 1), 1, ((2, -3, 4, 1),), route="cells"),
     "character-of-summands": CharacterClaim(disc_product(polygon(5), 2), 3, (ROTATION,), summands=("10100",)),
+    "character-of-a-point": CharacterClaim(
+        disc_product(SimplicialComplex.from_facets([[]], vertices=[1]), 1), 0, (), summands=("0",)
+    ),
     "character-of-own-pair": CharacterClaim(
         PolyhedralProduct(build("points", m=2), (DEGREE_TWO, DEGREE_TWO)), 2, ((2, 1),)
     ),

@@ -47,6 +47,8 @@ def _vertices(m: int, pair: str = "(D1, S0)") -> dict[str, Any]:
 
 
 GREEDY = {
+    "many ghosts": _statement(vertices=10**9),
+    "more ghosts than there are numbers": _statement(vertices=str(2**70)),
     "a large simplex": _statement(facets=[list(range(1, 61))], **_vertices(60)),
     "many shifts": _statement(
         vertices=26, pairs=[f"(D{2 ** (i % 9) + i}, S{2 ** (i % 9) + i - 1})" for i in range(26)]
@@ -66,7 +68,7 @@ GREEDY = {
                     "generators": [],
                     "kind": "character",
                     "products": [],
-                    "summands": [],
+                    "summands": ["0" * 50],
                     "values": [0],
                     **_vertices(50),
                 },

@@ -237,6 +237,7 @@ CASES: dict[str, tuple[str, Edit, str]] = {
         lambda v: v[0][S]["pairs"][0]["cells"][1].__setitem__(2, [0, 1]),
         "pair",
     ),
+    "a cell of degree 1000": ("own-pair", lambda v: v[0][S]["pairs"][0]["cells"][3].__setitem__(0, 1000), "index"),
     "a boundary of another degree": ("own-pair", lambda v: v[0][S]["pairs"][0]["cells"][2].__setitem__(0, 2), "pair"),
     "a boundary on later cells": (
         "own-pair",
@@ -289,6 +290,15 @@ SYMMETRY_CASES: dict[str, tuple[str, Edit, str]] = {
     "a function that is none of a class": ("character", _state("functions", 0, to=[1, 0, 0]), "false"),
     "other summands": ("character-of-summands", _state("summands", to=["11000"]), "block"),
     "summands of too few vertices": ("character-of-summands", _state("summands", to=["101"]), "statement"),
+    "no summands": ("character-of-summands", _state("summands", to=[]), "statement"),
+    "a summand that the pair has not": ("character-of-summands", _state("summands", to=["20100"]), "statement"),
+    "a summand with a line feed": ("character-of-summands", _state("summands", to=["1010\n"]), "statement"),
+    "a summand that is a number": ("character-of-summands", _state("summands", to=[10100]), "statement"),
+    "a single summand under a change of sign": (
+        "character-of-a-point",
+        lambda v: v[0][S].update(generators=[[-1]], elements=[[1], [-1]], values=[1, 1]),
+        "symmetry",
+    ),
     "a record of a fixed block left out": ("character", lambda v: v.pop(-2), "keys"),
     "another matrix": ("action", _state("matrix", to=[[0, 1], [1, 0]]), "false"),
     "another basis": ("action", _state("basis", 0, to=[0, 1]), "false"),
@@ -366,7 +376,18 @@ SYMMETRY_CASES: dict[str, tuple[str, Edit, str]] = {
     "a truth value in an expression": ("count-identity", _state("left", to="n * True"), "expression"),
     "a fraction": ("count-identity", _state("left", to="n / 1"), "expression"),
     "a division by zero": ("count-identity", _state("left", to="n // 0"), "expression"),
-    "a huge power": ("count-identity", _state("left", to="9 ** 9 ** 9"), "expression"),
+    "a negative exponent": ("count-identity", _state("left", to="n ** (0 - 1)"), "expression"),
+    "a comment in an expression": ("count-identity", _state("left", to="n * n # + 1"), "expression"),
+    "a line in an expression": ("count-identity", _state("left", to="(n +\n n)"), "expression"),
+    "a control sequence in an expression": ("count-identity", _state("left", to="n # \x1b[2Jaccepted"), "expression"),
+    "letters of another alphabet in an expression": ("count-identity", _state("left", to="\uff4e"), "expression"),
+    "hexadecimal numbers": ("count-identity", _state("left", to="n + 0x10"), "expression"),
+    "a number with an underscore": ("count-identity", _state("left", to="n + 1_0"), "expression"),
+    "n as the name in a sum": ("count-identity", _state("left", to="sum(n for n in divisors(n))"), "expression"),
+    "k over divisors": ("count-identity", _state("left", to="sum(k for k in divisors(n))"), "expression"),
+    "divisors of 0": ("count-identity", _state("left", to="sum(d for d in divisors(n - n))"), "expression"),
+    "the Möbius function at 0": ("count-identity", _state("left", to="mobius(0)"), "expression"),
+    "the totient of 0": ("count-identity", _state("left", to="totient(0)"), "expression"),
     "a name that is bound in a sum only": ("count-identity", _state("left", to="d"), "expression"),
 }
 CASES |= SYMMETRY_CASES
@@ -412,6 +433,19 @@ def test_a_real_toric_space_is_one_also_where_its_large_faces_do_not_matter() ->
     assert judged(signed(values))["verdict"] == "accepted"
     values[0]["statement"]["facets"] = [[1, 2, 3]]
     assert judged(signed(values))["reason"] == "not-injective"
+
+
+def test_a_pair_has_no_more_summands_than_there_are_digits() -> None:
+    """With a 37th summand, which no word can name, its group would be left out of the sum."""
+    cells = [[0, 0, []] for _ in range(37)] + [[1, 0, [i, i + 2]] for i in range(37)]
+    identity = [[int(i == j) for j in range(74)] for i in range(74)]
+    values = values_of(genuine("own-pair"))
+    values[0][S] |= {"facets": [[]], "groups": [], "pairs": [{"cells": cells}], "vertices": 1}
+    values[1] = {"splitting": [{"basis": [[i, 1] for i in range(74)], "inverse": identity}]}
+    assert judged(signed(values))["reason"] == "pair"
+    del cells[73], cells[36]
+    values[1] = {"splitting": [{"basis": [[i, 1] for i in range(72)], "inverse": [row[:72] for row in identity[:72]]}]}
+    assert judged(signed(values))["reason"] == "block"
 
 
 def test_a_fixed_set_has_all_faces_also_in_claims_about_low_degrees() -> None:

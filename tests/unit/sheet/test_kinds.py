@@ -717,9 +717,48 @@ right = "x"
 from = 1
 to = 3
 """,
-        "line 10, claim 1, key right: expected whole numbers, n, + - * // **, sums over divisors(n) or "
-        "range(a, b), and binomial, bracelets, gcd, lyndon, mobius, necklaces, totient, witt, found name 'x' "
-        "is not defined for n = 1",
+        "line 10, claim 1, key right: expected whole numbers, n, + - * // **, sums over d in "
+        "divisors(n) or k in range(a, b), and binomial, bracelets, gcd, lyndon, mobius, necklaces, totient, witt, "
+        "found name 'x' is not defined for n = 1",
+    ),
+    "a comment in an expression": (
+        """\
+[[claims]]
+id = "a"
+kind = "count-identity"
+left = "n"
+right = "n # one"
+from = 1
+to = 3
+""",
+        "line 10, claim 1, key right: expected whole numbers, n, + - * // **, sums over d in "
+        "divisors(n) or k in range(a, b), and binomial, bracelets, gcd, lyndon, mobius, necklaces, totient, witt, "
+        "found 'n # one'",
+    ),
+    "a single summand under a change of sign": (
+        """\
+[[claims]]
+id = "a"
+kind = "character"
+complex = "ring"
+degree = 1
+generators = ["(-1)"]
+summands = [[1, 3]]
+""",
+        "line 12, claim 1, key summands: expected generators without signs, found a change of sign, which preserves no "
+        "single summand",
+    ),
+    "no summands": (
+        """\
+[[claims]]
+id = "a"
+kind = "character"
+complex = "ring"
+degree = 1
+generators = ["()"]
+summands = []
+""",
+        "line 12, claim 1, key summands: expected at least one summand, found none",
     ),
     "a range that is empty": (
         """\
