@@ -16,10 +16,11 @@ from certify.certificate.about import NAME_RULE, about_claim, is_claim_name
 from certify.claims import Claim
 from certify.claims.kinds import KINDS
 from certify.claims.reading import Given
-from certify.errors import BadInput
+from certify.errors import BadInput, LimitReached
 from certify.products import Pair
 from certify.products.reading import pair_from_table
 from certify.simplicial import SimplicialComplex
+from certify.simplicial.complexes import Label
 from certify.simplicial.definitions import complex_from_definition
 from certify.tables import KeyFault, Keys, Table, shown
 
@@ -47,18 +48,21 @@ class NamedClaim:
     ----------
     id : str
         The claim's name, which is also the name of its certificate.
+    kind : str
     complex : str
         The name that the sheet gives to K; for a space of a family, that of the family; empty
         where there is none.
-    claim : Claim
+    claim : Claim, or LimitReached
+        Why there is none, where it would take too much even to ask: then this claim alone is undecided.
     about : mapping
         What the certificate says besides the statement: the claim's name under ``claim``, ``title`` and ``source`` if
         the sheet has them, and ``labels`` of the vertices where these are not 1, 2, ….
     """
 
     id: str
+    kind: str
     complex: str
-    claim: Claim[Any]
+    claim: Claim[Any] | LimitReached
     about: Mapping[str, str | list[str]]
 
 
@@ -193,9 +197,18 @@ def _claim(table: Table, given: Given) -> NamedClaim:
         raise table.fault("kind", expected=f"one of the claim kinds {', '.join(KINDS)}", found=shown(kind))
     table.only((*_COMMON, *KINDS[kind].keys))
     prose = {key: table.text(key) for key in ("title", "source") if key in table.values}
-    claim = KINDS[kind].read(table, given)
+    claim, labels = _read(kind, table, given)
     complex_ = next((table.text(key) for key in ("complex", "family") if key in table.values), "")
-    return NamedClaim(name, complex_, claim, about_claim(name, claim.base.labels, prose))
+    return NamedClaim(name, kind, complex_, claim, about_claim(name, labels, prose))
+
+
+def _read(kind: str, table: Table, given: Given) -> tuple[Claim[Any] | LimitReached, tuple[Label, ...]]:
+    """Return a claim and the labels of its complex, or why it takes too much to ask it."""
+    try:
+        claim = KINDS[kind].read(table, given)
+    except LimitReached as limit:
+        return limit, ()
+    return claim, claim.base.labels
 
 
 # -- lines --------------------------------------------------------------------------------------

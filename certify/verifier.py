@@ -1184,7 +1184,7 @@ def full_group(statement: Statement, budget: Budget) -> tuple[int, list[Element]
     ]
 
     def extended(image: list[int]) -> list[int] | None:
-        budget.spend("cells", 1)
+        budget.spend("cells", 1 + m // 16)
         if image:
             last = len(image) - 1
             moved = (sum(1 << image[v] for v in range(m) if face >> v & 1) for face in ending[last])
@@ -1591,8 +1591,8 @@ def prove_surface(statement: Statement, _: Lines, budget: Budget) -> Proved:
 
 
 def letters(chain: tuple[bytes, ...]) -> str:
-    """Write cells as words of -, + and o: the ends of an interval, and its inside."""
-    return " < ".join("".join("-+o"[letter] for letter in word) for word in chain)
+    """Write the middles of cells by their coordinates: -1 and 1 at the ends of an interval, 0 in its middle."""
+    return " < ".join(f"({', '.join(('-1', '1', '0')[letter] for letter in word)})" for word in chain)
 
 
 def prove_branching(statement: Statement, _: Lines, budget: Budget) -> Proved:
@@ -1635,6 +1635,7 @@ def prove_orbit_count(statement: Statement, _: Lines, budget: Budget) -> Proved:
     parts = None if content is None else [integer(entry, budget) for entry in sequence(content)]
     fit = parts is None or (len(parts) == colours and min(parts, default=0) >= 0)
     require(colours >= 0 and fit, "statement", "a content gives a number of vertices for each colour")
+    require(colours.bit_length() * statement.vertices < 10**6, "limit", "a power of more than 10^6 bits is needed")
     group = group_of(statement, budget)
     require(all(to > 0 for element in group for to in element), "symmetry", "elements have no signs here")
 
@@ -1765,8 +1766,8 @@ def prove_identity(statement: Statement, _: Lines, budget: Budget) -> Proved:
     value = statement.value
     first, last = (integer(value[key], budget) for key in ("first", "last"))
     require(1 <= first <= last <= 1000, "statement", "the range lies within 1 to 1000, and is not empty")
-    sides = [str(value[key]) for key in ("left", "right")]
-    require(max(map(len, sides)) <= 1000, "statement", "an expression has at most 1000 characters")
+    sides = [side for side in (value["left"], value["right"]) if type(side) is str and len(side) <= 1000]
+    require(len(sides) == 2, "statement", "an expression is a text of at most 1000 characters")
     plain = all(re.fullmatch("[0-9a-z+*/(), -]+", side) and not re.search(MIXED, side) for side in sides)
     require(plain, "expression", "an expression has lower-case names, decimal numbers and + - * / ( ) , only")
     try:
@@ -1867,6 +1868,11 @@ def examine(path: str, limits: argparse.Namespace) -> dict[str, str | None]:
         report["reason"], report["sentence"] = failure.args
         report["verdict"] = "undecided" if report["reason"] in UNDECIDED else "rejected"
         report["where"] = f"line {1 if report['reason'] == 'false' else lines.number}" if lines else None
+    except (RecursionError, ValueError) as error:
+        if not re.search("recursion|digits", str(error)):
+            raise
+        sentence = "a search goes too deep, or a number that was computed has too many digits; raise --max-bits"
+        report |= {"reason": "limit", "sentence": sentence, "where": f"line {lines.number}" if lines else None}
     except (OSError, MemoryError, zlib.error) as error:
         report |= {"reason": "unreadable", "sentence": f"the file cannot be read ({type(error).__name__})"}
     return report

@@ -8,7 +8,7 @@ from fractions import Fraction
 from types import MappingProxyType
 
 from certify.answers.symmetry import Character, character
-from certify.errors import BadInput
+from certify.errors import BadInput, LimitReached
 from certify.products import PolyhedralProduct, parse_pairs
 from certify.simplicial import SimplicialComplex
 from certify.simplicial.families import cross_polytope, points, polygon, simplex_skeleton
@@ -89,7 +89,14 @@ class Decomposition:
 
 
 def decomposition(
-    family: str, members: Iterable[int], degree: int, *, pair: str = "(D1, S0)", dim: int = 1, jobs: int = 1
+    family: str,
+    members: Iterable[int],
+    degree: int,
+    *,
+    pair: str = "(D1, S0)",
+    dim: int = 1,
+    jobs: int = 1,
+    progress: Callable[[int, int], None] | None = None,
 ) -> Decomposition:
     """Return the multiplicities of irreducible characters in H_k((X, A)^K; ℚ) for members of a family, proved.
 
@@ -105,11 +112,15 @@ def decomposition(
     dim : int
         The dimension of a skeleton.
     jobs : int
+    progress : callable, optional
+        Is told how many members are done, of how many.
 
     Raises
     ------
     BadInput
         If there is no such family, or no such member.
+    LimitReached
+        If the group of a member is too large; the member is named.
 
     Examples
     --------
@@ -127,13 +138,18 @@ def decomposition(
     columns = tuple(members)
     rows: dict[str, dict[int, int]] = {}
     characters: dict[int, Character] = {}
-    for n in columns:
+    for done, n in enumerate(columns, 1):
         if n < acted.least:
             raise BadInput(where=f"family {family}", expected=f"members from {acted.least} on", found=f"{n}")
         k = acted.complex(n, dim)
         product = PolyhedralProduct(k, parse_pairs(pair, k.vertex_count))
-        found = character(product, degree, acted.generators(n), functions_of=acted.functions, jobs=jobs)
+        try:
+            found = character(product, degree, acted.generators(n), functions_of=acted.functions, jobs=jobs)
+        except LimitReached as limit:
+            raise LimitReached(f"{family} {n}: {limit}") from limit
         characters[n] = found
+        if progress is not None:
+            progress(done, len(columns))
         for name, value in found.multiplicities.items():
             rows.setdefault(name, {})[n] = _whole(value)
     table = {name: tuple(values.get(n) for n in columns) for name, values in rows.items()}

@@ -31,6 +31,7 @@ __all__ = [
     "complex_value",
     "generators_value",
     "group_value",
+    "is_whole",
     "solve",
 ]
 
@@ -317,6 +318,11 @@ def solve(task: Task) -> Solved:
     return canonical_line(value), basis.homology(), traces
 
 
+def is_whole(number: object) -> bool:
+    """Tell whether something is a whole number from 0 on; True and False are none."""
+    return isinstance(number, int) and not isinstance(number, bool) and number >= 0
+
+
 def checked_degrees(degrees: Iterable[int] | None, groups: Iterable[int] | None) -> tuple[int, ...] | None:
     """Return the degrees that a claim speaks of, ascending, each once.
 
@@ -328,7 +334,7 @@ def checked_degrees(degrees: Iterable[int] | None, groups: Iterable[int] | None)
     if degrees is not None:
         given = list(degrees)
         degrees = tuple(sorted(set(given)))
-        if not degrees or degrees[0] < 0 or degrees[-1] >= LARGEST:
+        if not degrees or not all(is_whole(degree) for degree in degrees) or degrees[-1] >= LARGEST:
             raise BadInput(where="degrees", expected="at least one degree from 0 on", found=f"{given}")
     for key in groups or ():
         if key < 0 or (degrees is not None and key not in degrees):

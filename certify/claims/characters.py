@@ -9,7 +9,7 @@ from typing import Any, ClassVar, Literal
 
 from certify.certificate import vector_value
 from certify.certificate.canonical import integer_value
-from certify.claims.base import Contribution, Task, generators_value
+from certify.claims.base import Contribution, Task, generators_value, is_whole
 from certify.claims.homology import HomologyClaim
 from certify.claims.values import Values, ValuesClaim
 from certify.errors import BadInput
@@ -75,6 +75,7 @@ class CharacterClaim(ValuesClaim):
     def __post_init__(self) -> None:
         """Refuse generators that are no symmetries, and a list of elements that does not match the classes."""
         k = self.base
+        _check_degree(self.degree)
         check_symmetries(self.generators or (), self.product)
         generators = acting(self.generators, self.product)
         classes = rational_classes(generated_group(generators, k.vertex_count), generators)
@@ -118,7 +119,9 @@ class CharacterClaim(ValuesClaim):
                 digit in DIGITS[:size] for digit, size in zip(word, sizes, strict=True)
             )
             if not fits:
-                expected = f"words with a digit for each of the {len(sizes)} vertices, below the number of summands"
+                expected = (
+                    f"lists of vertices, or words of {len(sizes)} digits, for each vertex that of a summand of its pair"
+                )
                 raise BadInput(where="summands", expected=expected, found=repr(word))
 
     def _chosen(self) -> set[str] | None:
@@ -269,7 +272,8 @@ class ActionClaim(ValuesClaim):
     kind: ClassVar[str] = "action"
 
     def __post_init__(self) -> None:
-        """Refuse an element that is no symmetry."""
+        """Refuse an element that is no symmetry, and a degree that is none."""
+        _check_degree(self.degree)
         check_symmetries([self.element], self.product)
 
     @property
@@ -319,3 +323,8 @@ def _with_cells(cells: ActedCells) -> Iterator[Task]:
     """Yield the task, if there are cells of the degree."""
     if cells.is_watched:
         yield Task(cells)
+
+
+def _check_degree(degree: object) -> None:
+    if not is_whole(degree):
+        raise BadInput(where="degree", expected="a whole number from 0 on", found=repr(degree))

@@ -7,7 +7,7 @@ from dataclasses import dataclass, field
 from typing import Any, ClassVar
 
 from certify.certificate.canonical import integer_value
-from certify.claims.base import Contribution, generators_value
+from certify.claims.base import Contribution, generators_value, is_whole
 from certify.claims.values import Values, ValuesClaim
 from certify.errors import BadInput
 from certify.products import PolyhedralProduct, parse_pairs
@@ -50,9 +50,11 @@ class OrbitCountClaim(ValuesClaim):
 
     def __post_init__(self) -> None:
         """Refuse generators that are no symmetries, and a content that does not fit."""
-        check_symmetries(self.generators or (), self._product)
+        if not is_whole(self.colours):
+            raise BadInput(where="colours", expected="a whole number from 0 on", found=repr(self.colours))
         if any(to < 0 for element in self.generators or () for to in element):
             raise BadInput(where="generators", expected="permutations of the vertices", found="changes of signs")
+        check_symmetries(self.generators or (), self._product)
         content = self.content
         if content is not None and (len(content) != self.colours or sum(content) != self.complex.vertex_count):
             expected = f"{self.colours} numbers with the sum {self.complex.vertex_count}"

@@ -121,7 +121,7 @@ class SurfaceClaim(_QuotientClaim):
     generators : tuple of Element, or None
         Of G; empty for the space itself. None is for all automorphisms of K.
     claimed : mapping
-        Some of ``euler``, ``orientable`` (0 or 1) and ``boundary``, the number of boundary circles.
+        Some of ``euler`` or ``genus``, ``orientable`` (0 or 1) and ``boundary``, the number of boundary circles.
 
     Raises
     ------
@@ -136,9 +136,19 @@ class SurfaceClaim(_QuotientClaim):
         surface = recognise_surface(space)
         return {"boundary": surface.boundary, "euler": surface.euler, "orientable": int(surface.orientable)}
 
+    def check(self, found: Values) -> None:
+        """Raise ClaimIsFalse at the first value that is not the one claimed; the genus follows from the others."""
+        surface = Surface(found["euler"], bool(found["orientable"]), found["boundary"])
+        self.compare(self.claimed, {**found, "genus": surface.genus})
+
     def name(self, key: str) -> str:
         """Write in words what a value is."""
-        names = {"euler": "the Euler characteristic", "orientable": "orientability", "boundary": "boundary circles"}
+        names = {
+            "euler": "the Euler characteristic",
+            "genus": "the genus",
+            "orientable": "orientability",
+            "boundary": "the number of boundary circles",
+        }
         return f"{names[key]} of {self._space}"
 
     @property

@@ -19,7 +19,7 @@ from certify.simplicial import SimplicialComplex
 from certify.simplicial.inputs import placed, plain_labels
 from certify.symmetry.automorphisms import Generators, acting
 from certify.symmetry.characters import IRREDUCIBLES, induced_character
-from certify.symmetry.elements import Element, element_from_cycles, generated_group, rational_classes
+from certify.symmetry.elements import Element, element_from_cycles, generated_group, rational_classes, spell_cycles
 from certify.tables import Table, shown
 
 __all__ = ["SYMMETRY_KINDS"]
@@ -105,6 +105,8 @@ def _functions(
     group = generated_group(generators, k.vertex_count)
     classes = rational_classes(group, generators)
     for name, value in inner.values.items():
+        if not name.strip():
+            raise inner.fault(name, expected="a name for each function", found="an empty one")
         if name in found:
             raise inner.fault(name, expected="a name of its own for each function", found="one that is taken")
         if isinstance(value, list):
@@ -118,7 +120,7 @@ def _functions(
         for own in (set(own) for element in elements for own in classes if element in own):
             fitting = [x for element, x in values.items() if element in own]
             if len(fitting) != 1:
-                found_words = f"{len(fitting)} for one of them"
+                found_words = f"{len(fitting)} for that of {spell_cycles(min(own), k)}"
                 raise inner.fault(name, expected="one value for each rational class", found=found_words)
             by_class += fitting
         found[name] = tuple(by_class)
@@ -174,9 +176,9 @@ def _surface(table: Table, given: Given) -> SurfaceClaim:
         if "euler" in claimed:
             raise table.fault("genus", expected="only one of genus and euler", found="both")
         if claimed.get("orientable") != 1 or claimed.get("boundary", 0):
-            expected = "orientable = true and no boundary where the genus is claimed"
+            expected = "orientable = true and no boundary where the genus is claimed; claim euler for other surfaces"
             raise table.fault("genus", expected=expected, found="another surface")
-        claimed |= {"boundary": 0, "euler": 2 - 2 * _whole(table, "genus")}
+        claimed |= {"boundary": 0, "genus": _whole(table, "genus")}
     with table.at("generators"):
         return SurfaceClaim(k, _generators(_with(table, generators=[]), k), claimed)
 
@@ -205,7 +207,7 @@ def _orbit_count(table: Table, given: Given) -> OrbitCountClaim:
     if "content" in table.values:
         places = range(len(table.items("content", "a list with the number of vertices of each colour")))
         content = tuple(_whole(table, "content", place) for place in places)
-    colours = _whole(table, "colours", least=1) if "colours" in table.values or content is None else len(content)
+    colours = _whole(table, "colours") if "colours" in table.values or content is None else len(content)
     claimed = {key: _whole(table, key) for key in ("orbits", "primitive") if key in table.values}
     with placed(table, "generators"):
         generators = _generators(_with(table, generators="all"), k)

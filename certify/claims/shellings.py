@@ -44,7 +44,8 @@ class ShellingClaim(ValuesClaim):
         try:
             return sphere_shelling(self.complex)
         except BadInput as fault:
-            raise ClaimIsFalse(what="K", claimed="a shellable sphere", found=f"none: it has {fault.found}") from fault
+            found = f"none: expected {fault.expected}, found {fault.found}"
+            raise ClaimIsFalse(what="K", claimed="a shellable sphere", found=found) from fault
 
     def fields(self) -> dict[str, Any]:
         """Return nothing more."""

@@ -7,8 +7,9 @@ from pathlib import Path
 import click
 
 from certify.commands import codes
+from certify.commands.given import blaming
 from certify.commands.options import JOBS, JSON, PATH
-from certify.commands.terminal import printable
+from certify.commands.terminal import printable, progress
 
 __all__ = ["multiplicities"]
 
@@ -52,10 +53,23 @@ def multiplicities(
     as_json: bool,
 ) -> int:
     """Compute, print, and write what is asked for."""
-    from certify.answers.decompositions import decomposition
+    from certify.answers.decompositions import ACTED_FAMILIES, decomposition
     from certify.commands.results import say_json
+    from certify.products import parse_pair
 
-    table = decomposition(family, range(first, last + 1), degree, pair=pair, dim=dim, jobs=jobs)
+    if family not in ACTED_FAMILIES:
+        raise click.BadParameter(f"{family!r} is none of {', '.join(ACTED_FAMILIES)}.", param_hint="'FAMILY'")
+    if last < first:
+        raise click.BadParameter(f"{last} is before the first member, {first}.", param_hint="'--to'")
+    least = ACTED_FAMILIES[family].least
+    if first < least:
+        raise click.BadParameter(f"{family} has members from {least} on.", param_hint="'--from'")
+    with blaming("--pair"):
+        parse_pair(pair)
+    with blaming("--dim"):
+        ACTED_FAMILIES[family].complex(first, dim)
+    with progress("decomposing") as report:
+        table = decomposition(family, range(first, last + 1), degree, pair=pair, dim=dim, jobs=jobs, progress=report)
     if out is not None:
         for n, found in table.characters.items():
             found.certificate.write(out / f"{family}-{n}-degree-{degree}.cert.jsonl")

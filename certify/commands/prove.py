@@ -15,7 +15,7 @@ from certify.commands import codes
 from certify.commands.faults import OUTSIDE, sentence_of
 from certify.commands.options import CLUSTER, JOBS, JSON, PATH, workers
 from certify.commands.terminal import counted, printable, progress, say_row, tell_fault
-from certify.errors import BadInput, ClaimIsFalse
+from certify.errors import BadInput, ClaimIsFalse, LimitReached
 
 if TYPE_CHECKING:
     from certify.claims import Workers
@@ -115,7 +115,8 @@ def prove(
     from certify.commands.results import say_json
     from certify.sheet import read_sheet
 
-    claims = read_sheet(sheet)
+    with progress("reading"):
+        claims = read_sheet(sheet)
     folder = sheet.parent / "certificates" if out is None else out
     with workers(jobs, cluster) as helpers:
         results = outcomes(claims, folder, workers=helpers, packed=packed, state=state)
@@ -184,6 +185,8 @@ def _attempt(item: NamedClaim, path: Path, workers: Workers | None, journal_path
 
     claim = item.claim
     try:
+        if isinstance(claim, LimitReached):
+            raise claim
         with (
             progress(item.id) as report,
             Spool() as spool,
@@ -236,16 +239,17 @@ def say_outcomes(sheet: Sheet, results: Iterator[Outcome]) -> int:
 def _lines(outcome: Outcome) -> Iterator[str]:
     from certify.commands.results import shortened
 
-    if outcome.verdict != "proved":
+    claim = outcome.item.claim
+    if outcome.verdict != "proved" or isinstance(claim, LimitReached):
         yield f"false: {outcome.sentence}"
         if outcome.path.exists():
             yield f"no certificate was written; {outcome.path} is of an earlier run"
         return
-    base = outcome.item.claim.base
+    base = claim.base
     yield from shortened(outcome.lines)
     if outcome.item.complex:
         yield f"where K is {outcome.item.complex}, on {counted(base.vertex_count, 'vertex', 'vertices')}"
-    yield from outcome.item.claim.remarks()
+    yield from claim.remarks()
     yield f"certificate {outcome.path}, {counted(outcome.size or 0, 'byte')}"
     yield f"fingerprint {outcome.fingerprint}"
 
@@ -256,7 +260,7 @@ def _value(outcome: Outcome) -> dict[str, Any]:
         "claim": outcome.item.id,
         "verdict": outcome.verdict,
         "sentence": outcome.sentence,
-        "kind": outcome.item.claim.kind,
+        "kind": outcome.item.kind,
         "found": outcome.value,
         "path": str(outcome.path) if proved else None,
         "bytes": outcome.size,

@@ -50,7 +50,7 @@ def sphere_shelling(k: SimplicialComplex) -> tuple[Face, ...]:
     for ridge, times in ridges.items():
         if times != 2:
             shown = " ".join(str(k.labels[vertex]) for vertex in ridge) or "∅"
-            found = f"the face {shown} in {times}"
+            found = f"the face {shown} in {times} facet{'s' * (times != 1)}"
             raise BadInput(where="complex", expected="a sphere, so each ridge in two facets", found=found)
     found_order = _search(facets)
     if found_order is None:

@@ -35,7 +35,9 @@ def labels_by_text(k: SimplicialComplex) -> Mapping[str, Label]:
     """
     known = {str(label): label for label in k.labels}
     if len(known) < k.vertex_count:
-        raise BadInput(where="the labels", expected="labels that read differently", found="two that read the same")
+        twin = next(label for label in k.labels if known[str(label)] != label)
+        found = f"{twin!r} and {known[str(twin)]!r}"
+        raise BadInput(where="the labels", expected="labels that read differently, or all numbers", found=found)
     return known
 
 

@@ -100,7 +100,7 @@ def induced_character(
 
 def _symmetric(generators: Sequence[Element], elements: Sequence[Element]) -> Functions:
     """Return the Specht characters, by partitions of the number of vertices."""
-    m = len(generators[0]) if generators else 0
+    m = len(elements[0])
     group = generated_group(generators, m)
     if len(group) != factorial(m):
         raise BadInput(
@@ -122,14 +122,16 @@ def specht_functions(n: int, types: Sequence[Partition]) -> Functions:
 
     found = [[part for part, times in p.items() for _ in range(times)] for p in partitions(n)]
     shapes = sorted((tuple(sorted(parts, reverse=True)) for parts in found), reverse=True)
-    return {" ".join(map(str, shape)): tuple(specht_character(shape, kind) for kind in types) for shape in shapes}
+    return {
+        " ".join(map(str, shape)) or "0": tuple(specht_character(shape, kind) for kind in types) for shape in shapes
+    }
 
 
 def _cyclic(generators: Sequence[Element], elements: Sequence[Element]) -> Functions:
     """Return the characters irreducible over ℚ, by the order d of the roots of unity that they add up."""
     from sympy import divisors
 
-    powers = _powers(_only(generators, 1, "one generator")[0])
+    powers = _powers(_only(generators, 1, "one permutation under generators, which generates the group")[0])
     where = {element: r for r, element in enumerate(powers)}
     n = len(powers)
     return {f"{d}": tuple(ramanujan_sum(d, where[element]) for element in elements) for d in divisors(n)}
@@ -139,14 +141,14 @@ def _dihedral(generators: Sequence[Element], elements: Sequence[Element]) -> Fun
     """Return the characters irreducible over ℚ: those of degree 1, and one for each order d of rotations from 3 on."""
     from sympy import divisors
 
-    rotation, reflection = _only(generators, 2, "a rotation and a reflection as generators")
+    expected = "two generators, a rotation and a reflection of a dihedral group in this order"
+    rotation, reflection = _only(generators, 2, expected)
     powers = _powers(rotation)
     n = len(powers)
     one = powers[0]
     is_dihedral = after(reflection, reflection) == one and after(after(reflection, rotation), reflection) == powers[-1]
     if not is_dihedral or reflection in powers:
-        found = "two elements without its relations"
-        raise BadInput(where="irreducibles", expected="a rotation and a reflection of a dihedral group", found=found)
+        raise BadInput(where="irreducibles", expected=expected, found="two that are not a rotation and a reflection")
     turn = {element: r for r, element in enumerate(powers)}
     flip = {after(element, reflection): r for r, element in enumerate(powers)}
     functions = {
@@ -166,7 +168,7 @@ def _dihedral(generators: Sequence[Element], elements: Sequence[Element]) -> Fun
 
 def _only(generators: Sequence[Element], count: int, expected: str) -> Sequence[Element]:
     if len(generators) != count:
-        raise BadInput(where="irreducibles", expected=expected, found=f"{len(generators)}")
+        raise BadInput(where="irreducibles", expected=expected, found=f"{len(generators)} generators")
     return generators
 
 

@@ -106,7 +106,10 @@ def orbit(start: _Point, images: Callable[[_Point], Iterable[_Point]], most: int
         for image in images(point):
             if image not in found:
                 if most is not None and len(order) >= most:
-                    raise LimitReached(f"the group has more than {most:,} elements, and larger ones are not enumerated")
+                    raise LimitReached(
+                        f"the group has more than {most:,} elements, and larger ones are not enumerated; "
+                        "give generators of a smaller one"
+                    )
                 found[image] = None
                 order.append(image)
     return order
@@ -242,7 +245,8 @@ def _cycle(text: str, known: dict[str, int], m: int) -> Element:
         # A label may begin with a minus sign itself.
         sign, plain = (1, name) if name in known else (-1, name.removeprefix("-"))
         if plain not in known:
-            raise BadInput(where="element", expected="vertices of the complex", found=f"{name!r}, which is none")
+            expected = "vertices of the complex, with commas between labels that have blanks in them"
+            raise BadInput(where="element", expected=expected, found=f"{name!r}, which is none")
         if known[plain] in {vertex for vertex, _ in steps}:
             raise BadInput(where="element", expected="each vertex once in a cycle", found=f"{plain!r} twice")
         steps.append((known[plain], sign))

@@ -6,7 +6,6 @@ from collections.abc import Sequence
 
 from certify.products import PolyhedralProduct
 from certify.simplicial import SimplicialComplex
-from certify.simplicial.spelling import spell_labels
 from certify.symmetry.elements import Element, after, moved_mask, orbit
 
 __all__ = ["fixed_set"]
@@ -42,7 +41,12 @@ def fixed_set(product: PolyhedralProduct, generators: Sequence[Element]) -> Poly
     faces = [mask ^ centre for mask in invariant if mask & centre == centre]
     if not faces:
         return None
-    labels = [spell_labels(label for i, label in enumerate(k.labels) if mask >> i & 1) for mask in halves]
+    labels = [_name([str(label) for i, label in enumerate(k.labels) if mask >> i & 1]) for mask in halves]
     sets = [[place for place, half in enumerate(halves) if mask & half] for mask in faces]
     pairs = tuple(product.pairs[vertex - 1] for vertex in halves.values())
     return PolyhedralProduct(SimplicialComplex.from_faces(labels, sets), pairs)
+
+
+def _name(orbit_: Sequence[str]) -> str:
+    """Return what an orbit is called: its vertex, or the set of them."""
+    return orbit_[0] if len(orbit_) == 1 else f"{{{','.join(orbit_)}}}"

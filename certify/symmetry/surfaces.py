@@ -2,15 +2,16 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterable, Sequence
+from collections.abc import Sequence
 from dataclasses import dataclass
 
 import networkx as nx
 
 from certify.errors import BadInput
+from certify.simplicial.spelling import spell_labels
 from certify.symmetry.orbit_spaces import Cell, OrbitSpace
 
-__all__ = ["Surface", "branch_orbits", "recognise_surface", "spell_cell"]
+__all__ = ["Surface", "branch_orbits", "recognise_surface", "spell_point"]
 
 
 @dataclass(frozen=True, slots=True)
@@ -75,13 +76,17 @@ def recognise_surface(space: OrbitSpace) -> Surface:
             links[space.first((triangle[place],))].add_edge(*(edges[:place] + edges[place + 1 :]))
     for edge, triangles in sides.items():
         if len(triangles) not in (1, 2):
-            raise _no_surface(f"an edge {spell_cell(edge)} that lies in {len(triangles)} triangles")
+            near, far = edge
+            moved = [label for label, a, b in zip(space.product.complex.labels, near, far, strict=True) if a != b]
+            towards = f"in the direction of {spell_labels(moved)}"
+            between = f"between the points {spell_point(near)} and {spell_point(far)}, {towards}"
+            raise _no_surface(f"{len(triangles)} sheets that meet along the segment {between}")
         if len(triangles) == 2:
             dual.add_edge(*triangles)
     for vertex, link in links.items():
         if not link or not nx.is_connected(link):
             pieces = nx.number_connected_components(link) if link else 0
-            raise _no_surface(f"the point {spell_cell(vertex)}, whose link has {pieces} pieces")
+            raise _no_surface(f"the point {spell_point(vertex[0])}, whose link has {pieces} pieces")
     if not nx.is_connected(dual):
         raise _no_surface(f"{nx.number_connected_components(dual)} pieces")
     rim: nx.Graph[Cell] = nx.Graph()
@@ -113,15 +118,15 @@ def branch_orbits(space: OrbitSpace) -> list[tuple[int, int]]:
     return sorted((order, number) for order, number in space.isotropy[0].items() if order > 1)
 
 
-def spell_cell(cell: Iterable[Sequence[int]]) -> str:
-    """Write cells with a sign for each vertex: - and + for the ends of an interval, o for its inside.
+def spell_point(word: Sequence[int]) -> str:
+    """Write the middle of a cell by its coordinates: -1 and 1 at the ends of an interval, 0 in its middle.
 
     Examples
     --------
-    >>> spell_cell([(0, 1, 0), (2, 1, 0)])
-    '-+- < o+-'
+    >>> spell_point((0, 1, 2))
+    '(-1, 1, 0)'
     """
-    return " < ".join("".join("-+o"[letter] for letter in word) for word in cell)
+    return f"({', '.join(('-1', '1', '0')[letter] for letter in word)})"
 
 
 def _no_surface(found: str) -> BadInput:

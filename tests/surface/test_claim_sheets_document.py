@@ -29,7 +29,7 @@ def test_every_example_is_proved(certify: Certify, tmp_path: Path) -> None:
     ended = certify("prove", sheet)
     assert ended.code == 0, ended.out + ended.err
     assert certify("verify", tmp_path / "certificates").code == 0
-    assert {item.claim.kind for item in parse_sheet(examples())[1]} == set(KINDS)
+    assert {item.kind for item in parse_sheet(examples())[1]} == set(KINDS)
 
 
 def test_the_tables_name_every_kind_family_and_operation() -> None:

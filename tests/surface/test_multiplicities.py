@@ -52,21 +52,39 @@ def test_a_table_can_be_drawn(certify: Certify, tmp_path: Path) -> None:
     [
         (
             ["cube", "--from", "2", "--to", "3", "--degree", "1"],
-            3,
-            "family: expected one of points, simplex-skeleton, polygon, cross-polytope, found 'cube'",
+            2,
+            "Invalid value for 'FAMILY': 'cube' is none of points, simplex-skeleton, polygon, cross-polytope.",
         ),
         (
             ["polygon", "--from", "2", "--to", "3", "--degree", "1"],
-            3,
-            "family polygon: expected members from 3 on, found 2",
+            2,
+            "Invalid value for '--from': polygon has members from 3 on.",
         ),
         (
             ["points", "--from", "2", "--to", "3", "--degree", "1", "--pair", "(D1, S1)"],
+            2,
+            "Invalid value for '--pair': the pair: expected the boundary sphere of the disc, as in \"(D1, S0)\", "
+            "found '(D1, S1)'",
+        ),
+        (
+            ["points", "--from", "6", "--to", "2", "--degree", "1"],
+            2,
+            "Invalid value for '--to': 2 is before the first member, 6.",
+        ),
+        (
+            ["simplex-skeleton", "--from", "3", "--to", "4", "--degree", "1", "--dim", "7"],
+            2,
+            "Invalid value for '--dim': argument dim: expected a whole number from -1 to 2, found 7",
+        ),
+        (
+            ["points", "--from", "9", "--to", "9", "--degree", "1"],
             3,
-            "the pair: expected the boundary sphere of the disc, as in \"(D1, S0)\", found '(D1, S1)'",
+            "points 9: the group has more than 200,000 elements, and larger ones are not enumerated; give generators "
+            "of a smaller one",
         ),
     ],
 )
 def test_a_wrong_family_is_refused(certify: Certify, arguments: list[str], code: int, message: str) -> None:
     ended = certify("multiplicities", *arguments)
-    assert (ended.code, ended.out, ended.err) == (code, "", f"certify: {message}\n")
+    hint = " (certify multiplicities --help says more.)" if code == 2 else ""
+    assert (ended.code, ended.out, ended.err) == (code, "", f"certify: {message}{hint}\n")

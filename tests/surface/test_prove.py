@@ -279,6 +279,23 @@ def test_a_certificate_that_cannot_be_replaced_stays_as_it_was(
     assert {name: (folder / name).read_bytes() for name in files(folder)} == before
 
 
+def test_a_group_that_is_too_large_leaves_the_other_claims(certify: Certify, tmp_path: Path) -> None:
+    sheet = tmp_path / "large.toml"
+    sheet.write_text(
+        '[complexes.ten]\nfamily = "points"\nm = 10\n'
+        '[[claims]]\nid = "all"\nkind = "character"\ncomplex = "ten"\ndegree = 1\ngenerators = "all"\n'
+        '[[claims]]\nid = "order"\nkind = "automorphisms"\ncomplex = "ten"\norder = 3628800\n',
+        encoding="utf-8",
+    )
+    ended = certify("prove", sheet)
+    assert (ended.code, files(tmp_path / "certificates")) == (3, ["order.cert.jsonl"])
+    assert ended.err == (
+        "certify: claim all: the group has more than 200,000 elements, and larger ones are not enumerated; "
+        "give generators of a smaller one\n"
+    )
+    assert [claim["verdict"] for claim in certify("prove", sheet, "--json").json["claims"]] == ["undecided", "proved"]
+
+
 def test_a_full_disk_for_temporary_files_is_no_crash(
     certify: Certify, rig: Path, monkeypatch: pytest.MonkeyPatch
 ) -> None:

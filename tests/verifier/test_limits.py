@@ -93,6 +93,35 @@ def test_small_files_cannot_ask_for_too_much(name: str) -> None:
     assert time.monotonic() - start < 60
 
 
+def test_a_computed_number_of_too_many_digits_is_a_limit() -> None:
+    """2^16000 points, as many as (D¹, S⁰) has over 16000 ghosts, are a number that Python does not write by itself."""
+    values = values_of(_statement(**_vertices(16_000)))
+    values.insert(1, {"basis": [{"cycles": [[0, 1]]}], "block": "0" * 16_000})
+    report = judged(signed(values))
+    assert (report["verdict"], report["reason"], report["where"]) == ("undecided", "limit", "line 2")
+
+
+@pytest.mark.parametrize("statement", [{"colours": str(10**4000)}, {"colours": 2, "vertices": 10**6}])
+def test_a_power_of_too_many_bits_is_a_limit(statement: dict[str, Any]) -> None:
+    asked: dict[str, Any] = {
+        "content": None,
+        "generators": [],
+        "kind": "orbit-count",
+        "orbits": 1,
+        "primitive": 1,
+        "vertices": 200,
+    }
+    header = {"about": {"claim": "a"}, "format": 1, "route": "permutations"}
+    values = [header | {"statement": {"facets": [[]]} | asked | statement}, {"end": None}]
+    assert judged(signed(values), max_bits=20_000)["reason"] == "limit"
+
+
+def test_a_search_for_automorphisms_that_goes_deep_is_a_limit() -> None:
+    values = values_of(genuine("automorphisms"))
+    values[0]["statement"] |= {"facets": [[]], **_vertices(700)}
+    assert judged(signed(values))["reason"] == "limit"
+
+
 def test_a_huge_multiplicity_of_torsion_is_counted_and_not_written_out() -> None:
     """A multiplicity doubles with each ghost: 2^60 summands ℤ/2 and five ℤ/3 make five ℤ/6."""
     found = verifier().invariant_factors(Counter({0: 3, 2: 2**60, 3: 5}))

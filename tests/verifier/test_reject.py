@@ -377,6 +377,7 @@ SYMMETRY_CASES: dict[str, tuple[str, Edit, str]] = {
     "a fraction": ("count-identity", _state("left", to="n / 1"), "expression"),
     "a division by zero": ("count-identity", _state("left", to="n // 0"), "expression"),
     "a negative exponent": ("count-identity", _state("left", to="n ** (0 - 1)"), "expression"),
+    "an expression that is a number": ("count-identity", _state("left", to=5), "statement"),
     "a comment in an expression": ("count-identity", _state("left", to="n * n # + 1"), "expression"),
     "a line in an expression": ("count-identity", _state("left", to="(n +\n n)"), "expression"),
     "a control sequence in an expression": ("count-identity", _state("left", to="n # \x1b[2Jaccepted"), "expression"),

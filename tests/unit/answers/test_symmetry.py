@@ -79,6 +79,16 @@ def test_answers_have_certificates_that_the_verifier_accepts(tmp_path: Path) -> 
         assert report["fingerprint"] == certificate.fingerprint
 
 
+def test_none_means_all_automorphisms() -> None:
+    generators = automorphism_group(polygon(5)).generators
+    assert fixed_set_homology(PENTAGON, None) == fixed_set_homology(PENTAGON, generators)
+    assert orbit_space_homology(polygon(5), None) == orbit_space_homology(polygon(5), generators)
+    assert surface(polygon(5), None).boundary == 2
+    assert character(polyhedral_product(points(1), "(D1, S0)"), 0, None, irreducibles="symmetric").multiplicities == {
+        "1": 1
+    }
+
+
 def test_a_surface_knows_what_it_is() -> None:
     found = surface(polygon(5), ["(2 5)(3 4)"])
     assert (found.euler, found.orientable, found.boundary, found.genus) == (-4, False, 2, 4)
@@ -91,5 +101,11 @@ def test_what_is_no_answer_is_an_error() -> None:
         orbit_space_homology(polygon(5), "(1 2 3 4 5)")
     with pytest.raises(BadInput, match="by which the face"):
         fixed_set_homology(PENTAGON, ["(1 2)"])
+    with pytest.raises(BadInput, match="colours: expected a whole number from 0 on, found -2"):
+        orbit_count(polygon(5), -2)
+    with pytest.raises(BadInput, match="degree: expected a whole number from 0 on, found -1"):
+        character(PENTAGON, -1, [TURN])
+    with pytest.raises(BadInput, match="degrees: expected at least one degree from 0 on"):
+        orbit_space_homology(polygon(5), [TURN], [True])
     with pytest.raises(BadInput, match="expected one of symmetric, cyclic, dihedral, found abelian"):
         character(PENTAGON, 1, [TURN], irreducibles="abelian")

@@ -56,7 +56,8 @@ FALSE: dict[str, tuple[Claim[Any], str]] = {
     ),
     "three sheets at an edge": (
         SurfaceClaim(BOOK),
-        "the space is claimed to be a connected surface, but is not: it has an edge",
+        "the space is claimed to be a connected surface, but is not: it has 3 sheets that meet along the segment "
+        "between the points (-1, -1, -1, -1) and (0, -1, -1, -1), in the direction of 1",
     ),
     "a space in two pieces": (
         SurfaceClaim(SimplicialComplex.from_facets([[1, 2], [2, 3], [1, 3]], [1, 2, 3, 4])),
@@ -76,7 +77,7 @@ FALSE: dict[str, tuple[Claim[Any], str]] = {
     "a path": (ShellingClaim(SimplicialComplex.from_facets([[1, 2], [2, 3]])), "K is claimed to be a shellable sphere"),
     "two circles": (
         ShellingClaim(SimplicialComplex.from_facets([[1, 2], [2, 3], [1, 3], [4, 5], [5, 6], [4, 6]])),
-        "K is claimed to be a shellable sphere, but is none: it has one without a shelling",
+        "K is claimed to be a shellable sphere, but is none: expected a shellable sphere, found one without a shelling",
     ),
     "a surface of genus 1": (ShellingClaim(build("torus")), "K is claimed to be a shellable sphere"),
     "necklaces": (

@@ -483,7 +483,8 @@ kind = "automorphisms"
 complex = "ring"
 generators = ["(1 9)"]
 """,
-        "line 10, claim 1, key generators, item 1: expected vertices of the complex, found '9', which is none",
+        "line 10, claim 1, key generators, item 1: expected vertices of the complex, with commas between "
+        "labels that have blanks in them, found '9', which is none",
     ),
     "a vertex twice in a cycle": (
         """\
@@ -615,7 +616,8 @@ degree = 1
 generators = ["(1 2 3 4 5)"]
 functions = { f = { "()" = 1 } }
 """,
-        "line 12, claim 1, key functions.f: expected one value for each rational class, found 0 for one of them",
+        "line 12, claim 1, key functions.f: expected one value for each rational class, found 0 for that "
+        "of (1 2 3 4 5)",
     ),
     "a subgroup that is none": (
         """\
@@ -639,8 +641,8 @@ degree = 1
 generators = ["(1 2 3 4 5)"]
 summands = ["01"]
 """,
-        "line 12, claim 1, key summands: expected words with a digit for each of the 5 vertices, below "
-        "the number of summands, found '01'",
+        "line 12, claim 1, key summands: expected lists of vertices, or words of 5 digits, for each vertex "
+        "that of a summand of its pair, found '01'",
     ),
     "a summand with an unknown vertex": (
         """\
@@ -674,7 +676,7 @@ complex = "ring"
 genus = 5
 """,
         "line 10, claim 1, key genus: expected orientable = true and no boundary where the genus is "
-        "claimed, found another surface",
+        "claimed; claim euler for other surfaces, found another surface",
     ),
     "isotropy of order 1": (
         """\
@@ -703,9 +705,9 @@ content = [2, 2]
 id = "a"
 kind = "orbit-count"
 complex = "ring"
-colours = 0
+colours = -1
 """,
-        "line 10, claim 1, key colours: expected a whole number from 1 on, found 0",
+        "line 10, claim 1, key colours: expected a whole number from 0 on, found -1",
     ),
     "an unknown name in an expression": (
         """\

@@ -4,7 +4,7 @@ from itertools import combinations, product
 from typing import Any
 
 import pytest
-from hypothesis import given
+from hypothesis import assume, given
 from hypothesis import strategies as st
 
 from certify.errors import BadInput
@@ -71,6 +71,7 @@ def test_a_missing_face_of_a_wedge_has_all_copies(drawn: tuple[SimplicialComplex
 def test_a_wedge_shifts_the_homology(drawn: tuple[SimplicialComplex, list[int]]) -> None:
     """Each further copy of a vertex suspends the complex."""
     k, numbers = drawn
+    assume(sum(numbers) <= 9)  # dense Smith forms of the boundary of a simplex on 12 vertices take hours
     shift = sum(numbers) - len(numbers)
     shifted = {degree + shift: group for degree, group in reduced_homology(k).items()}
     assert reduced_homology(simplicial_wedge(k, numbers)) == shifted
