@@ -8,7 +8,7 @@ import click
 
 from certify.commands import codes
 from certify.commands.given import blaming
-from certify.commands.options import JOBS, JSON, PATH
+from certify.commands.options import JOBS, JSON, PATH, picture_path
 from certify.commands.terminal import printable, progress
 
 __all__ = ["multiplicities"]
@@ -37,7 +37,9 @@ _EPILOG = """For example:
 @click.option("--pair", default="(D1, S0)", show_default=True, metavar="PAIR", help="The pair at each vertex.")
 @click.option("--dim", type=click.IntRange(-1), default=1, show_default=True, help="The dimension of the skeleton.")
 @click.option("--out", type=PATH, metavar="DIR", help="Write the certificates of the characters there.")
-@click.option("--picture", "path", type=PATH, metavar="FILE", help="Draw the table too, .svg or .png.")
+@click.option(
+    "--picture", "path", type=PATH, callback=picture_path, metavar="FILE", help="Draw the table too, .svg or .png."
+)
 @JOBS
 @JSON
 def multiplicities(

@@ -11,10 +11,27 @@ import click
 if TYPE_CHECKING:
     from certify.claims import Workers
 
-__all__ = ["CLUSTER", "JOBS", "JSON", "PATH", "workers"]
+__all__ = ["CLUSTER", "JOBS", "JSON", "PATH", "picture_path", "workers"]
 
 PATH = click.Path(readable=False, path_type=Path)
 """A path that click does not look at: what is wrong with a file is not what is wrong with a command line."""
+
+
+def picture_path(_: click.Context, parameter: click.Parameter, path: Path | None) -> Path | None:
+    """Return the path of a picture.
+
+    Raises
+    ------
+    click.BadParameter
+        If its ending is that of no picture.
+    """
+    if path is not None:
+        from certify.pictures.drawing import ENDINGS
+
+        if path.suffix.lower() not in ENDINGS:
+            raise click.BadParameter(f"expected a file ending in {' or '.join(ENDINGS)}, found {path}", param=parameter)
+    return path
+
 
 JOBS = click.option(
     "--jobs",

@@ -9,7 +9,7 @@ import click
 
 from certify.commands import codes
 from certify.commands.given import COMPLEX_OPTIONS, blaming, given_complex
-from certify.commands.options import PATH
+from certify.commands.options import PATH, picture_path
 from certify.commands.terminal import printable
 
 __all__ = ["picture"]
@@ -40,7 +40,15 @@ _EPILOG = """For example:
     show_default=True,
     help="The complex, or the quotient surface.",
 )
-@click.option("--out", "path", type=PATH, required=True, metavar="FILE", help="Where the picture goes, .svg or .png.")
+@click.option(
+    "--out",
+    "path",
+    type=PATH,
+    callback=picture_path,
+    required=True,
+    metavar="FILE",
+    help="Where the picture goes, .svg or .png.",
+)
 def picture(
     file: Path | None,
     facets: str | None,
