@@ -1250,21 +1250,23 @@ def moved(mask: int, element: Element) -> int:
 
 
 def act(word: bytes, element: Element, alphabets: Sequence[Alphabet]) -> tuple[bytes, int]:
-    """Return the image of a cell, with its sign.
-
-    Letters move, odd ones past each other; a change of sign swaps the ends of an interval, and turns it around.
-    """
-    image, sign = bytearray(len(word)), 1
+    """Return the image of a cell, with its sign: odd letters move past each other, and a change of sign turns them."""
+    sign = 1
     odd: list[int] = []
-    for place, letter in enumerate(word):
-        to = abs(element[place]) - 1
-        turned = element[place] < 0
-        image[to] = (1, 0, 2)[letter] if turned else letter
-        if alphabets[place][letter][0] & 1:
-            flips = sum(1 for other in odd if other > to) + turned
+    for to, letter, alphabet in zip(element, word, alphabets, strict=True):
+        if alphabet[letter][0] & 1:
+            flips = sum(1 for other in odd if other > abs(to)) + (to < 0)
             sign *= -1 if flips & 1 else 1
-            odd.append(to)
-    return bytes(image), sign
+            odd.append(abs(to))
+    return placed(word, element), sign
+
+
+def placed(word: bytes, element: Element) -> bytes:
+    """Return the word in which the letters have moved; a change of sign swaps the ends of an interval."""
+    image = bytearray(len(word))
+    for to, letter in zip(element, word, strict=True):
+        image[abs(to) - 1] = letter if to > 0 else (1, 0, 2)[letter]
+    return bytes(image)
 
 
 def matrix_of(space: Words, element: Element, alphabets: Sequence[Alphabet]) -> list[list[int]]:
@@ -1501,11 +1503,11 @@ class OrbitSpace(Space):
         words = Words(face_masks(statement, budget, whole=True), intervals, LARGEST, budget)
         self.group = group_of(statement, budget)
         budget.spend("cells", sum(words.sizes) * len(self.group))
-        images = {word: [act(word, g, intervals) for g in self.group] for level in words.cells for word in level}
+        images = {word: [placed(word, g) for g in self.group] for level in words.cells for word in level}
         self.chains = chains or not all(
             image != word or all(g[place] == place + 1 for place, letter in enumerate(word) if letter == 2)
             for word, moved in images.items()
-            for g, (image, _) in zip(self.group, moved, strict=True)
+            for g, image in zip(self.group, moved, strict=True)
         )
         cells: list[list[tuple[bytes, ...]]] = [[(word,) for word in level] for level in words.cells]
         if self.chains:
@@ -1529,10 +1531,10 @@ class OrbitSpace(Space):
             for cell in sorted(level):
                 if cell not in self.first:
                     fixing = 0
-                    for image in zip(*(images[word] for word in cell), strict=True):
-                        moved = tuple(word for word, _ in image)
-                        self.first.setdefault(moved, (cell, 1 if self.chains else image[0][1]))
-                        fixing += moved == cell
+                    for g, image in zip(self.group, zip(*(images[word] for word in cell), strict=True), strict=True):
+                        sign = 1 if self.chains else act(cell[0], g, intervals)[1]
+                        self.first.setdefault(image, (cell, sign))
+                        fixing += image == cell
                     kept[-1].append(cell)
                     self.isotropy[-1][fixing] += 1
         self.words = words
