@@ -4,15 +4,16 @@ from __future__ import annotations
 
 import re
 import warnings
-from collections.abc import Iterable, Mapping, Sequence
-from math import cos, hypot, pi, sin
+from collections.abc import Iterable, Iterator, Mapping, Sequence
+from math import ceil, cos, pi, sin
 from pathlib import Path
-from typing import TYPE_CHECKING, Any
+from typing import TYPE_CHECKING, Any, Literal
 
 import networkx as nx
 
 from certify.certificate import write_whole
 from certify.errors import BadInput
+from certify.pictures.layout import LABEL_SIZE, Label, Place, in_points, labels_beside, places_of, width_of
 from certify.simplicial import SimplicialComplex
 from certify.symmetry.elements import Element
 from certify.symmetry.patterns import Side, side_name
@@ -21,7 +22,7 @@ if TYPE_CHECKING:
     from matplotlib.axes import Axes
     from matplotlib.figure import Figure
 
-__all__ = ["ENDINGS", "draw_complex", "draw_pattern", "draw_table", "places_of"]
+__all__ = ["ENDINGS", "draw_complex", "draw_pattern", "draw_table"]
 
 ENDINGS = (".svg", ".png")
 """The endings of the files that can be drawn."""
@@ -30,8 +31,6 @@ _MARKS = "os^Dv<>ph*"
 """A shape for each orbit of vertices; with the shade of grey it is told apart without colours."""
 
 _MOST_SIDES = 60
-
-Place = tuple[float, float]
 
 
 def draw_complex(k: SimplicialComplex, generators: Sequence[Element], path: Path) -> None:
@@ -50,25 +49,17 @@ def draw_complex(k: SimplicialComplex, generators: Sequence[Element], path: Path
     BadInput
         If the path has another ending or cannot be written, or matplotlib is not installed.
     """
-    orbits = _orbits(k, generators)
-    figure, axes = _canvas(6, 6)
-    places = places_of(k)
+    places = in_points(places_of(k))
+    labels = labels_beside(k, places)
+    figure, axes = _canvas_around(places, labels)
     for a, b, c in k.faces(3):
         axes.fill(*zip(*(places[v] for v in (a, b, c)), strict=True), color="0.85", alpha=0.5, zorder=1, linewidth=0)
     for a, b in k.faces(2):
         axes.plot(*zip(places[a], places[b], strict=True), color="0.35", linewidth=1.2, zorder=2)
-    for number, orbit in enumerate(orbits):
-        shade = f"{0.95 - 0.55 * number / max(len(orbits), 1):.2f}"
-        xs, ys = zip(*(places[vertex] for vertex in orbit), strict=True)
-        mark = _MARKS[number % len(_MARKS)]
-        name = "ghosts" if not k.is_face([k.labels[orbit[0]]]) else f"orbit {number + 1}"
-        axes.scatter(xs, ys, s=110, marker=mark, color=shade, edgecolors="black", linewidths=1.2, zorder=3, label=name)
-    for vertex, label in enumerate(k.labels):
-        _write_beside(axes, str(label), places[vertex], _outwards(places, vertex))
-    if len(orbits) > 1:
-        axes.legend(loc="upper left", bbox_to_anchor=(1.05, 1), frameon=False)
-    axes.set_title(f"{k.vertex_count} vertices, f-vector {', '.join(map(str, k.f_vector()))}", fontsize=10, pad=18)
-    axes.set_aspect("equal")
+    _mark_orbits(axes, k, generators, places)
+    for label in labels:
+        _write(axes, label)
+    axes.set_title(f"{k.vertex_count} vertices, f-vector {', '.join(map(str, k.f_vector()))}", fontsize=10, pad=12)
     _save(figure, path)
 
 
@@ -82,8 +73,9 @@ def draw_pattern(sides: Sequence[Side], title: str, path: Path) -> None:
         installed.
     """
     if len(sides) > _MOST_SIDES:
-        expected = f"a polygon with at most {_MOST_SIDES} sides, as quotients by larger groups have"
-        raise BadInput(where="the picture", expected=expected, found=f"one with {len(sides)}")
+        expected = f"a polygon with at most {_MOST_SIDES} sides"
+        found = f"one with {len(sides)}; a quotient by a larger group has fewer"
+        raise BadInput(where="the picture", expected=expected, found=found)
     figure, axes = _canvas(6, 6)
     count = max(len(sides), 3) if len(sides) != 2 else 2
     corners = [(sin(2 * pi * i / count), cos(2 * pi * i / count)) for i in range(count)]
@@ -124,19 +116,23 @@ def draw_table(columns: Sequence[str], rows: Mapping[str, Sequence[str]], title:
     BadInput
         If the path has another ending or cannot be written, or matplotlib is not installed.
     """
-    figure, axes = _canvas(2 + 0.8 * len(columns), 1 + 0.35 * len(rows))
-    shades = [["0.88" if cell not in ("0", "") else "white" for cell in cells] for cells in rows.values()]
-    table = axes.table(
-        cellText=[list(cells) for cells in rows.values()],
-        rowLabels=list(rows),
-        colLabels=list(columns),
-        cellColours=shades,
-        loc="center",
-        cellLoc="center",
-    )
+    lines = [["", *columns], *([head, *cells] for head, cells in rows.items())]
+    widths = [max(width_of(line[i], 10) for line in lines) + 18 for i in range(len(columns) + 1)]
+    figure, axes = _canvas(sum(widths) / 72, 20 * len(lines) / 72)
+    from matplotlib.table import Table
+    from matplotlib.transforms import Bbox
+
+    # The table fills the axes and the axes the figure, so that nothing is blank but the margin.
+    table = Table(axes, bbox=Bbox.unit())
     table.auto_set_font_size(False)
-    table.set_fontsize(10)
-    axes.set_title(title, fontsize=10)
+    for row, line in enumerate(lines):
+        for column, text in enumerate(line):
+            shade = "0.88" if row and column and text not in ("0", "") else "white"
+            loc: Literal["left", "center"] = "center" if column else "left"
+            cell = table.add_cell(row, column, widths[column], 1, text=text, facecolor=shade, loc=loc)
+            cell.set_fontsize(10)
+    axes.add_table(table)
+    axes.set_title(title, fontsize=10, pad=10)
     _save(figure, path)
 
 
@@ -148,57 +144,50 @@ def _orbits(k: SimplicialComplex, generators: Sequence[Element]) -> list[list[in
     return sorted(sorted(part) for part in parts if part)
 
 
-def places_of(k: SimplicialComplex) -> dict[int, Place]:
-    """Return places of the vertices: the pieces with edges side by side, and a row of the other vertices below."""
-    graph: nx.Graph[int] = nx.Graph()
-    graph.add_nodes_from(range(k.vertex_count))
-    graph.add_edges_from((a, b) for a, b in k.faces(2))
-    if not graph.edges:
-        return _plain(nx.circular_layout(graph))
-    places: dict[int, Place] = {}
-    pieces = [graph.subgraph(sorted(part)) for part in nx.connected_components(graph) if len(part) > 1]
-    for number, piece in enumerate(pieces):
-        places |= {v: (x + 2.6 * number, y) for v, (x, y) in _places_of_piece(piece).items()}
-    alone = sorted(nx.isolates(graph))
-    middle = 1.3 * (len(pieces) - 1)
-    return places | {v: (middle + 0.5 * (i - (len(alone) - 1) / 2), -1.5) for i, v in enumerate(alone)}
+def _mark_orbits(axes: Axes, k: SimplicialComplex, generators: Sequence[Element], places: Mapping[int, Place]) -> None:
+    """Draw the vertices, with a mark and a shade for each orbit; outlines of ghosts are dotted."""
+    # Without a group there is one part of all vertices, in which the ghosts must still be told apart.
+    ghosts = {v for v in range(k.vertex_count) if not k.is_face([k.labels[v]])}
+    parts = [part for orbit in _orbits(k, generators) for part in _parted(orbit, ghosts)]
+    for number, part in enumerate(parts):
+        is_ghost = part[0] in ghosts
+        name = f"orbit {number + 1}{', ghosts' * is_ghost}" if generators else "ghosts" if is_ghost else "vertices"
+        axes.scatter(
+            [places[vertex][0] for vertex in part],
+            [places[vertex][1] for vertex in part],
+            s=80,
+            marker=_MARKS[number % len(_MARKS)],
+            color="white" if is_ghost else f"{0.95 - 0.55 * number / len(parts):.2f}",
+            edgecolors="black",
+            linewidths=1.2,
+            linestyles=":" if is_ghost else "-",
+            zorder=3,
+            clip_on=False,
+            label=name,
+        )
+    if len(parts) > 1:
+        axes.legend(loc="upper left", bbox_to_anchor=(1, 1), frameon=False, ncols=ceil(len(parts) / 20))
 
 
-def _places_of_piece(graph: nx.Graph[int]) -> dict[int, Place]:
-    """Return places between -1 and 1: around a circle for a ring, otherwise as springs pull them."""
-    if len(graph) > 2 and all(degree == 2 for _, degree in graph.degree):
-        first = min(graph)
-        order = [first, *(b for _, b in nx.find_cycle(graph, first))][: len(graph)]
-        return {v: (sin(2 * pi * i / len(order)), cos(2 * pi * i / len(order))) for i, v in enumerate(order)}
-    planar, _ = nx.check_planarity(graph)
-    start = nx.planar_layout(graph) if planar else nx.circular_layout(graph)
-    return _plain(nx.spring_layout(graph, pos=start, iterations=60 if planar else 200, seed=1))
+def _parted(orbit: Sequence[int], ghosts: set[int]) -> Iterator[list[int]]:
+    for part in ([v for v in orbit if v not in ghosts], [v for v in orbit if v in ghosts]):
+        if part:
+            yield part
 
 
-def _plain(layout: Mapping[int, Any]) -> dict[int, Place]:
-    return {vertex: (float(x), float(y)) for vertex, (x, y) in layout.items()}
-
-
-def _outwards(places: Mapping[int, Place], vertex: int) -> Place:
-    """Return the direction from the middle of all places to that of a vertex, of length 1; up in the middle itself."""
-    x, y = (places[vertex][axis] - sum(place[axis] for place in places.values()) / len(places) for axis in (0, 1))
-    length = hypot(x, y)
-    return (x / length, y / length) if length > 0.01 else (0.0, 1.0)
-
-
-def _write_beside(axes: Axes, text: str, place: Place, towards: Place) -> None:
-    """Write a label beside its marker, on white, so that neither outlines nor edges run through it."""
-    x, y = towards
-    axes.annotate(
-        text,
-        place,
-        xytext=(9 * x, 9 * y),
-        textcoords="offset points",
-        ha="left" if x > 0.4 else "right" if x < -0.4 else "center",
-        va="bottom" if y > 0.4 else "top" if y < -0.4 else "center",
-        fontsize=9,
+def _write(axes: Axes, label: Label) -> None:
+    """Write a label on white, so that edges do not run through it where there is no room without them."""
+    across, up = label.sides
+    axes.text(
+        *label.anchor,
+        label.text,
+        ha=("center", "left", "right")[across],
+        va=("center", "bottom", "top")[up],
+        fontsize=LABEL_SIZE,
         zorder=4,
-        bbox={"boxstyle": "round,pad=0.15", "facecolor": "white", "edgecolor": "none", "alpha": 0.8},
+        # A label is no formula, even if there are dollar signs in it.
+        parse_math=False,
+        bbox={"boxstyle": "round,pad=0.1", "facecolor": "white", "edgecolor": "none"},
     )
 
 
@@ -213,14 +202,28 @@ def _curve(start: tuple[float, float], end: tuple[float, float], bow: float) -> 
     return points
 
 
+def _canvas_around(places: Mapping[int, Place], labels: Sequence[Label]) -> tuple[Figure, Axes]:
+    """Return axes for all vertices and labels in which the unit is a point."""
+    boxes = [(x - 6, y - 6, x + 6, y + 6) for x, y in places.values()] + [label.box for label in labels]
+    if not boxes:
+        return _canvas(2, 0.5)
+    left, lower = (min(box[end] for box in boxes) for end in (0, 1))
+    right, upper = (max(box[end] for box in boxes) for end in (2, 3))
+    figure, axes = _canvas((right - left) / 72, (upper - lower) / 72)
+    axes.set_xlim(left, right)
+    axes.set_ylim(lower, upper)
+    return figure, axes
+
+
 def _canvas(width: float, height: float) -> tuple[Figure, Axes]:
+    """Return a figure that its axes fill, in inches; titles and legends beside them are added when it is cropped."""
     try:
         from matplotlib.figure import Figure
     except ImportError as error:
         found = "none; install certify with the extra pictures"
         raise BadInput(where="the picture", expected="matplotlib", found=found) from error
-    figure = Figure(figsize=(width, height), layout="constrained")
-    axes = figure.subplots()
+    figure = Figure(figsize=(width, height))
+    axes = figure.add_axes((0, 0, 1, 1))
     axes.set_axis_off()
     return figure, axes
 
@@ -245,12 +248,17 @@ def _save(figure: Figure, path: Path) -> None:
             warnings.simplefilter("always")
             figure.savefig(file, format=kind, **plain, **cropped)
         if kind == "png":
-            _require_signs(str(warning.message) for warning in told)
+            _require_signs(figure, (str(warning.message) for warning in told))
 
 
-def _require_signs(messages: Iterable[str]) -> None:
+def _require_signs(figure: Figure, messages: Iterable[str]) -> None:
     """Refuse a picture of pixels with a sign that the font lacks; in an .svg file text stays text."""
+    from matplotlib.text import Text
+
     for message in messages:
         if missing := re.match(r"Glyph (\d+) .* missing from", message):
-            expected = "labels in signs that matplotlib's font has; an .svg file leaves the font to whoever shows it"
-            raise BadInput(where="the picture", expected=expected, found=f"the sign {chr(int(missing[1]))!r}")
+            sign = chr(int(missing[1]))
+            texts = (found.get_text() for found in figure.findobj(Text) if isinstance(found, Text))
+            label = next((text for text in texts if sign in text), sign)
+            expected = "labels in signs that matplotlib's font has (an .svg file leaves the font to whoever shows it)"
+            raise BadInput(where="the picture", expected=expected, found=f"the sign {sign} in the label {label}")
