@@ -225,6 +225,7 @@ class Statement:
         self.value = value = record(raw, ("kind", *about, *question, *answer))
         self.stated = {key: value[key] for key in answer}
         self.vertices = integer(value.get("vertices", 0), budget)
+        require(self.vertices >= 0, "statement", "a number of vertices from 0 on is expected")
         budget.spend("cells", self.vertices)
         self.facets = [numbers(facet, 1, self.vertices + 1) for facet in sequence(value.get("facets", [[]]))]
         self.check_facets(budget)
@@ -1014,16 +1015,17 @@ def prove_by_orbits(statement: Statement, lines: Lines, budget: Budget) -> Prove
     total: Total = {}
     find_summands(statement, lines, budget)
     m, base = statement.vertices, max((len(pair.shapes) for pair in statement.pairs), default=1)
+    budget.spend("cells", base**m)
     tables, part = [], 1
     while base ** (part + 1) <= 1024 and part < m:
         part += 1
     for value in sequence(record(lines.next(), ("generators",))["generators"]):
         generator = read_element(value, statement)
+        budget.spend("cells", base**m // 8)
         weights = [
             base ** (m - abs(to)) for to in reversed(generator)
         ]  # of the digits of a word, the last vertex first
         tables.append([spread(weights[start : start + part], base) for start in range(0, m, part)])
-    budget.spend("cells", base**m)
     seen, choices, room = bytearray(base**m), Choices(statement, budget), BATCH
     known: dict[tuple[tuple[Tag, ...], Faces, int], list[tuple[int, list[int]]]] = {}
     position = seen.find(0)
@@ -1425,9 +1427,9 @@ def prove_character(traces: Callable[..., list[int]], statement: Statement, line
     generators, sizes, covered = statement.generators, [], 0
     met: set[Element] = set()
     for element in elements:
+        require(element in group and element not in met, "classes", "each class has one of its elements in the list")
         own = orbit(element, lambda x: [*units(x), *(after(after(g, x), inverse_of(g)) for g in generators)])
         budget.spend("cells", len(own) * statement.vertices)
-        require(element in group and element not in met, "classes", "each class has one of its elements in the list")
         met.update(own)
         sizes.append(len(own))
         covered += len(own)
@@ -1482,7 +1484,8 @@ def prove_fixed_set(statement: Statement, lines: Lines, budget: Budget) -> Prove
     faces = [mask ^ centre for mask in invariant if mask & centre == centre]
     if not faces:
         return stated_groups(statement, {})
-    top = [mask for mask in faces if not any(mask & other == mask != other for other in faces)]
+    known = set(faces)
+    top = [mask for mask in faces if not any(mask | half in known for half in halves if not mask & half)]
     fixed = copy(statement)
     fixed.vertices, fixed.pairs, fixed.kind = len(halves), list(whole.values()), "homology"
     fixed.facets = sorted([place for place, half in enumerate(halves, 1) if mask & half] for mask in top)
@@ -1611,13 +1614,14 @@ def prove_branching(statement: Statement, _: Lines, budget: Budget) -> Proved:
     return {"orbits": orbits}, f"orbits of G, of order {size}, with isotropy other than 1: {points}; {count}"
 
 
-def prove_shelling(statement: Statement, lines: Lines, _: Budget) -> Proved:
+def prove_shelling(statement: Statement, lines: Lines, budget: Budget) -> Proved:
     """Require that the facets in the order given are a shelling, and that each ridge lies in two facets."""
     given = sequence(record(lines.next(), ("order",))["order"])
     order = [tuple(numbers(facet, 1, statement.vertices + 1)) for facet in given]
     require(sorted(map(list, order)) == statement.facets, "shelling", "the order lists every facet once")
     size = len(order[0])
     require(all(len(facet) == size for facet in order), "shelling", "facets of one size are expected")
+    budget.spend("cells", len(order) * (size * size + len(order)) // 4)
     ridges = Counter(ridge for facet in order for ridge in combinations(facet, size - 1)) if size else Counter()
     require(size == 0 or set(ridges.values()) == {2}, "shelling", "each ridge lies in two facets of a sphere")
     for number, facet in enumerate(order[1:], 1):
@@ -1649,12 +1653,12 @@ def prove_orbit_count(statement: Statement, _: Lines, budget: Budget) -> Proved:
             return int(colours ** len(list(partition)))
         counts = {tuple(parts): 1}
         for block in partition:
+            budget.spend("cells", len(counts) * (1 + colours * colours // 64))
             fewer: Counter[tuple[int, ...]] = Counter()
             for left, times in counts.items():
                 for colour, room in enumerate(left):
                     if room >= len(block):
                         fewer[(*left[:colour], room - len(block), *left[colour + 1 :])] += times
-            budget.spend("cells", len(fewer) + 1)
             counts = dict(fewer)
         return counts.get((0,) * colours, 0)
 
