@@ -8,7 +8,7 @@ from fractions import Fraction
 from typing import Any, ClassVar, Literal
 
 from certify.certificate import vector_value
-from certify.certificate.canonical import integer_value
+from certify.certificate.canonical import LARGEST, integer_value
 from certify.claims.base import Contribution, Task, generators_value, is_whole
 from certify.claims.homology import HomologyClaim
 from certify.claims.values import Values, ValuesClaim
@@ -325,6 +325,6 @@ def _with_cells(cells: ActedCells) -> Iterator[Task]:
         yield Task(cells)
 
 
-def _check_degree(degree: object) -> None:
-    if not is_whole(degree):
-        raise BadInput(where="degree", expected="a whole number from 0 on", found=repr(degree))
+def _check_degree(degree: int) -> None:
+    if not is_whole(degree) or not degree < LARGEST:
+        raise BadInput(where="degree", expected="a whole number from 0 to 2^53 - 2", found=repr(degree))

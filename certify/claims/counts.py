@@ -72,7 +72,7 @@ class OrbitCountClaim(ValuesClaim):
     def fields(self) -> dict[str, Any]:
         """Return colours, content and generators."""
         return {
-            "colours": self.colours,
+            "colours": integer_value(self.colours),
             "content": None if self.content is None else list(self.content),
             "generators": generators_value(self.generators),
         }

@@ -24,7 +24,7 @@ any it is trivial. Pictures are SVG or PNG, by the name of the file, and are dra
 
 _EPILOG = """For example:
 
-\\b
+\b
   certify picture --complex '{family = "torus"}' --generator "(1 2 3 4 5 6 7)" --out torus.svg
   certify picture --facets "1 2; 2 3; 3 4; 4 5; 5 1" --generator "(1 2 3 4 5)" --show surface --out quotient.png
 """

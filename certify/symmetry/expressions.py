@@ -108,10 +108,13 @@ def _compiled(text: str) -> CodeType:
         tree = ast.parse(text, mode="eval")
     except (SyntaxError, ValueError, RecursionError) as error:
         raise _fault(repr(text)) from error
-    for node in ast.walk(tree):
-        if not _is_known(node):
-            raise _fault(f"{ast.unparse(node) if isinstance(node, ast.expr) else type(node).__name__!r}")
-    return compile(ast.fix_missing_locations(_Powers().visit(tree)), "expression", "eval")
+    try:
+        for node in ast.walk(tree):
+            if not _is_known(node):
+                raise _fault(f"{ast.unparse(node) if isinstance(node, ast.expr) else type(node).__name__!r}")
+        return compile(ast.fix_missing_locations(_Powers().visit(tree)), "expression", "eval")
+    except RecursionError as error:
+        raise _fault("one that is nested too deeply; sum(...) is one way to write many terms") from error
 
 
 class _Powers(ast.NodeTransformer):

@@ -79,6 +79,15 @@ def test_answers_have_certificates_that_the_verifier_accepts(tmp_path: Path) -> 
         assert report["fingerprint"] == certificate.fingerprint
 
 
+def test_numbers_beyond_those_of_json_are_verified(tmp_path: Path) -> None:
+    """Burnside: q^5 + 4 q colourings for five rotations of the pentagon."""
+    q = 10**20
+    found = orbit_count(polygon(5), q, [TURN])
+    assert found.orbits == (q**5 + 4 * q) // 5
+    found.certificate.write(tmp_path / "many.cert.jsonl")
+    assert examined(tmp_path / "many.cert.jsonl")["verdict"] == "accepted"
+
+
 def test_none_means_all_automorphisms() -> None:
     generators = automorphism_group(polygon(5)).generators
     assert fixed_set_homology(PENTAGON, None) == fixed_set_homology(PENTAGON, generators)
@@ -103,8 +112,10 @@ def test_what_is_no_answer_is_an_error() -> None:
         fixed_set_homology(PENTAGON, ["(1 2)"])
     with pytest.raises(BadInput, match="colours: expected a whole number from 0 on, found -2"):
         orbit_count(polygon(5), -2)
-    with pytest.raises(BadInput, match="degree: expected a whole number from 0 on, found -1"):
+    with pytest.raises(BadInput, match="degree: expected a whole number from 0 to 2\\^53 - 2, found -1"):
         character(PENTAGON, -1, [TURN])
+    with pytest.raises(BadInput, match="degree: expected a whole number from 0 to 2\\^53 - 2, found"):
+        character(PENTAGON, 2**53 - 1, [TURN])
     with pytest.raises(BadInput, match="degrees: expected at least one degree from 0 on"):
         orbit_space_homology(polygon(5), [TURN], [True])
     with pytest.raises(BadInput, match="expected one of symmetric, cyclic, dihedral, found abelian"):

@@ -737,6 +737,20 @@ to = 3
         "divisors(n) or k in range(a, b), and binomial, bracelets, gcd, lyndon, mobius, necklaces, totient, witt, "
         "found 'n # one'",
     ),
+    "an expression of very many terms": (
+        f"""\
+[[claims]]
+id = "a"
+kind = "count-identity"
+left = "{"+".join(["n"] * 451)}"
+right = "451 * n"
+from = 1
+to = 3
+""",
+        "line 9, claim 1, key left: expected whole numbers, n, + - * // **, sums over d in "
+        "divisors(n) or k in range(a, b), and binomial, bracelets, gcd, lyndon, mobius, necklaces, totient, witt, "
+        "found one that is nested too deeply; sum(...) is one way to write many terms",
+    ),
     "a single summand under a change of sign": (
         """\
 [[claims]]
