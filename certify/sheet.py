@@ -15,7 +15,7 @@ from typing import Any
 from certify.certificate.about import NAME_RULE, about_claim, is_claim_name
 from certify.claims import Claim
 from certify.claims.kinds import KINDS
-from certify.claims.reading import Given
+from certify.claims.reading.tables import Given
 from certify.errors import BadInput, LimitReached
 from certify.products import Pair
 from certify.products.reading import pair_from_table

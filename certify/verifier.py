@@ -221,7 +221,7 @@ class Statement:
             raise Failure("unknown-kind", f"claims of the kind {str(kind)[:40]!r} are unknown here")
         question, answer, self.routes = KINDS[kind]
         self.kind = kind
-        about = () if kind == "count-identity" else ("facets", "vertices")
+        about = () if kind in NUMBERS else ("facets", "vertices")
         self.value = value = record(raw, ("kind", *about, *question, *answer))
         self.stated = {key: value[key] for key in answer}
         self.vertices = integer(value.get("vertices", 0), budget)
@@ -1303,7 +1303,7 @@ def watched_words(
 
 def traces_by_cells(statement: Statement, elements: list[Element], lines: Lines, budget: Budget) -> list[int]:
     """Return the traces of elements on the homology of the whole product."""
-    require(statement.value["summands"] is None, "statement", "single summands have the route blocks only")
+    require(statement.value.get("summands") is None, "statement", "single summands have the route blocks only")
     alphabets = [tuple(pair.cells) for pair in statement.pairs]
     space = watched_words(face_masks(statement, budget), alphabets, statement.degree, lines, budget)
     return [trace(matrix_of(space, element, alphabets)) if space else 0 for element in elements]
@@ -1314,7 +1314,7 @@ def traces_by_blocks(statement: Statement, elements: list[Element], lines: Lines
     find_summands(statement, lines, budget)
     faces = face_masks(statement, budget)
     chosen = None
-    if statement.value["summands"] is not None:
+    if statement.value.get("summands") is not None:
         words = sequence(statement.value["summands"])
         word_form = "".join(f"[{DIGITS[: len(pair.shapes)]}]" for pair in statement.pairs)
         fit = all(type(word) is str and re.fullmatch(word_form, word) for word in words)
@@ -1332,6 +1332,16 @@ def traces_by_blocks(statement: Statement, elements: list[Element], lines: Lines
         else:
             traces.append(trace_by_blocks(statement, element, faces, chosen, lines, budget))
     return traces
+
+
+def traces_both_ways(statement: Statement, elements: list[Element], lines: Lines, budget: Budget) -> list[int]:
+    """Return the traces of elements on the summands, after checking that they are those on the whole product."""
+    plain = all(to > 0 for generator in statement.generators for to in generator)
+    require(plain, "symmetry", "the splitting does not respect a change of sign")
+    by_blocks = traces_by_blocks(statement, elements, lines, budget)
+    same = traces_by_cells(statement, elements, lines, budget) == by_blocks
+    require(same, "false", "the traces on the whole product are not those on its summands")
+    return by_blocks
 
 
 def trace_by_blocks(
@@ -1436,7 +1446,7 @@ def prove_character(traces: Callable[..., list[int]], statement: Statement, line
     require(covered == len(group), "classes", "some class has no element in the list")
     values = traces(statement, elements, lines, budget)
     products, inner = [], ""
-    for function in sequence(statement.value["functions"]):
+    for function in sequence(statement.value.get("functions", [])):
         psi = [integer(entry, budget) for entry in sequence(function)]
         require(len(psi) == len(values), "statement", "a class function has a value for each class")
         pair = [sum(map(prod, zip(sizes, psi, with_, strict=True))) for with_ in (values, psi)]
@@ -1444,10 +1454,14 @@ def prove_character(traces: Callable[..., list[int]], statement: Statement, line
         products.append([spelled(total // len(group)) for total in pair])
         inner += f"; ⟨χ, ψ⟩ = {products[-1][0]}, ⟨ψ, ψ⟩ = {products[-1][1]} for ψ = {psi}"
     shown = ", ".join(f"χ({cycles_text([e])}) = {value}" for e, value in zip(elements, values, strict=True))
-    only = statement.value["summands"]
+    only = statement.value.get("summands")
     part = "" if only is None else f"the orbits of the summands {', '.join(map(str, sequence(only)))} of "
     of = f"the character of G, of order {len(group)}, on {part}H_{statement.degree}({statement.space()}; ℚ)"
-    return {"products": products, "values": [spelled(value) for value in values]}, f"{of} is {shown}{inner}"
+    answer: dict[str, object] = {"products": products, "values": [spelled(value) for value in values]}
+    if statement.kind == "equivariance":
+        del answer["products"]
+        inner = ", and it is the sum of the characters induced from the stabilisers of the summands"
+    return answer, f"{of} is {shown}{inner}"
 
 
 def prove_action(statement: Statement, lines: Lines, budget: Budget) -> Proved:
@@ -1460,7 +1474,9 @@ def prove_action(statement: Statement, lines: Lines, budget: Budget) -> Proved:
     columns = matrix_of(space, element, alphabets) if space else []
     matrix = [[spelled(entry) for entry in row] for row in zip(*columns, strict=True)]
     on = f"H_{statement.degree}({statement.space()}; ℤ) modulo torsion"
-    return {"basis": basis, "matrix": matrix}, f"{cycles_text([element])} acts on {on} by the matrix {matrix}"
+    answer: dict[str, object] = {"basis": basis, "matrix": matrix, "trace": spelled(trace(columns))}
+    by = f"in the basis of the cycles {basis} (cells, each with its coefficient) by the matrix {matrix}"
+    return answer, f"{cycles_text([element])} acts on {on} {by}, of trace {trace(columns)}"
 
 
 def prove_fixed_set(statement: Statement, lines: Lines, budget: Budget) -> Proved:
@@ -1483,14 +1499,33 @@ def prove_fixed_set(statement: Statement, lines: Lines, budget: Budget) -> Prove
     invariant = [mask for mask in every if all(moved(mask, g) == mask for g in generators)]
     faces = [mask ^ centre for mask in invariant if mask & centre == centre]
     if not faces:
-        return stated_groups(statement, {})
+        answer, text = stated_groups(statement, {})
+        return answer | {"components": 0, "points": 0}, f"{text}; points: 0"
     known = set(faces)
     top = [mask for mask in faces if not any(mask | half in known for half in halves if not mask & half)]
     fixed = copy(statement)
     fixed.vertices, fixed.pairs, fixed.kind = len(halves), list(whole.values()), "homology"
     fixed.facets = sorted([place for place, half in enumerate(halves, 1) if mask & half] for mask in top)
     find_summands(fixed, lines, budget)
-    return stated_groups(statement, sum_of_blocks(fixed, lines, budget))
+    total = sum_of_blocks(fixed, lines, budget)
+    answer, text = stated_groups(statement, total)
+    components = total[(0,)][0] if statement.degrees is None or 0 in statement.degrees else None
+    points = points_of(fixed, [[mask & half > 0 for half in halves] for mask in faces], budget)
+    text += "" if components is None else f"; components: {components}"
+    text += "" if points is None else f"; points: {points}"
+    return answer | {"components": components and spelled(components), "points": points and spelled(points)}, text
+
+
+def points_of(statement: Statement, faces: list[list[bool]], budget: Budget) -> int | None:
+    """Return the number of points of a polyhedral product, or None if it has cells of higher dimension."""
+    points = 0
+    budget.spend("cells", len(faces) * (1 + statement.vertices))
+    for face in faces:
+        degrees = [[c[0] for c in pair.cells if c[1] == out] for pair, out in zip(statement.pairs, face, strict=True)]
+        if all(degrees) and any(map(any, degrees)):
+            return None
+        points += prod(map(len, degrees))
+    return points
 
 
 class OrbitSpace(Space):
@@ -1526,22 +1561,24 @@ class OrbitSpace(Space):
                     for chain in flags[word]:
                         cells[len(chain) - 1].append(chain)
         self.first: dict[tuple[bytes, ...], tuple[tuple[bytes, ...], int]] = {}
-        self.isotropy: list[Counter[int]] = []
+        self.isotropy: list[
+            tuple[tuple[bytes, ...], list[Element]]
+        ] = []  # cells with those who fix them, if not only 1
         kept: list[list[tuple[bytes, ...]]] = []
         for level in cells:
             kept.append([])
-            self.isotropy.append(Counter())
             for cell in sorted(level):
                 if cell not in self.first:
-                    fixing = 0
+                    fixing = []
                     for g, image in zip(self.group, zip(*(images[word] for word in cell), strict=True), strict=True):
                         sign = 1 if self.chains else act(cell[0], g, intervals)[1]
                         self.first.setdefault(image, (cell, sign))
-                        fixing += image == cell
+                        fixing += [g] * (image == cell)
                     kept[-1].append(cell)
-                    self.isotropy[-1][fixing] += 1
+                    self.isotropy += [(cell, fixing)] * (len(fixing) > 1)
         self.words = words
         super().__init__(kept, self.ends)
+        self.euler = sum((-1) ** k * size for k, size in enumerate(self.sizes))
 
     def ends(self, cell: tuple[bytes, ...]) -> list[tuple[tuple[bytes, ...], int]]:
         """Return d of a cell in the cells that stand for orbits, each once."""
@@ -1587,7 +1624,7 @@ def prove_surface(statement: Statement, _: Lines, budget: Budget) -> Proved:
     twofold = [((a, side), (b, not side)) for a, b in double for side in (False, True)]
     sheets = [(triangle, side) for triangle in space.cells[2] for side in (False, True)]
     orientable = not connected(sheets, twofold)
-    euler = space.sizes[0] - space.sizes[1] + space.sizes[2]
+    euler = space.euler
     answer: dict[str, object] = {"boundary": boundary, "euler": euler, "orientable": int(orientable)}
     genus = (2 - euler - boundary) // 2 if orientable else 2 - euler - boundary
     name = f"{'an orientable' if orientable else 'a non-orientable'} surface of genus {genus}"
@@ -1600,18 +1637,48 @@ def letters(chain: tuple[bytes, ...]) -> str:
     return " < ".join(f"({', '.join(('-1', '1', '0')[letter] for letter in word)})" for word in chain)
 
 
+def prove_orbit_space(statement: Statement, lines: Lines, budget: Budget) -> Proved:
+    """Return homology and Euler characteristic of a quotient."""
+    space = OrbitSpace(statement, budget)
+    answer, text = prove_whole(lambda *_: space, statement, lines, budget)
+    return answer | {"euler": space.euler}, f"{text}; Euler characteristic {space.euler}"
+
+
 def prove_branching(statement: Statement, _: Lines, budget: Budget) -> Proved:
-    """Return how many orbits of points have an isotropy group of which order above 1, if these points are isolated."""
+    """Return how many orbits of points have which isotropy group other than 1, if these points are isolated.
+
+    The isotropy groups of an orbit are conjugate in G; the one whose sorted elements come first stands for them.
+    """
     space = OrbitSpace(statement, budget, chains=True)
-    isolated = all(set(orders) <= {1} for orders in space.isotropy[1:])
-    require(isolated, "not-isolated", "points with isotropy other than 1 are not isolated")
-    orbits = [[order, number] for order, number in sorted(space.isotropy[0].items()) if order > 1]
+    require(all(len(cell) == 1 for cell, _ in space.isotropy), "not-isolated", "points with isotropy are not isolated")
+    first: dict[tuple[Element, ...], list[Element]] = {}
+    found: Counter[tuple[int, tuple[Element, ...]]] = Counter()
     size = len(space.group)
-    euler = sum((-1) ** k * cells for k, cells in enumerate(space.sizes))
-    lost = size * sum(number for _, number in orbits) - sum(number * size // order for order, number in orbits)
-    points = ", ".join(f"{number} with isotropy of order {order}" for order, number in orbits) or "none"
-    count = f"χ({statement.space()}) = {size} · {euler} - {lost} = {size * euler - lost}"
-    return {"orbits": orbits}, f"orbits of G, of order {size}, with isotropy other than 1: {points}; {count}"
+    for own in (tuple(sorted(fixing)) for cell, fixing in space.isotropy):
+        if own not in first:
+            budget.spend("cells", len(own) * size * statement.vertices)
+            conjugates = [tuple(sorted(after(after(g, x), inverse_of(g)) for x in own)) for g in space.group]
+            first |= dict.fromkeys(conjugates, generators_of(min(conjugates)))
+        found[len(own), tuple(first[own])] += 1
+    orbits = [[list(map(list, by)), order, number] for (order, by), number in sorted(found.items())]
+    points = [f"{number} with isotropy ⟨{cycles_text(by)}⟩ of order {n}" for (n, by), number in sorted(found.items())]
+    lost = [f"{number * size // order}·{order - 1}" for (order, _), number in sorted(found.items())]
+    euler = size * space.euler - sum(number * size // order * (order - 1) for (order, _), number in found.items())
+    count = f"χ({statement.space()}) = {' - '.join([f'{size}·({space.euler})', *lost])} = {euler}"
+    which = f"orbits of G, of order {size}, with isotropy other than 1: {', '.join(points) or 'none'}"
+    return {"orbits": orbits}, f"{which}; {count}"
+
+
+def generators_of(group: Sequence[Element]) -> list[Element]:
+    """Return those of the sorted elements of a group that do not lie in the group of the ones before."""
+    generators: list[Element] = []
+    identity = tuple(sorted(map(abs, group[0])))
+    reached = {identity}
+    for element in group:
+        if element not in reached:
+            generators.append(element)
+            reached = set(orbit(identity, lambda power: [after(g, power) for g in generators]))
+    return generators
 
 
 def prove_shelling(statement: Statement, lines: Lines, budget: Budget) -> Proved:
@@ -1760,30 +1827,48 @@ def small_number(node: ast.AST, names: dict[str, int], budget: Budget) -> int:
     return value
 
 
+NUMBERS = ("count-identity", "count-values")  # the kinds that are about numbers alone
 MIXED = "[0-9][a-z]|[a-z][0-9]"
 OPERATIONS: dict[str, Callable[[int, int], int]]
 OPERATIONS = {"Add": operator.add, "Sub": operator.sub, "Mult": operator.mul, "FloorDiv": operator.floordiv, "Pow": pow}
 
 
-def prove_identity(statement: Statement, _: Lines, budget: Budget) -> Proved:
-    """Require two expressions to have the same value for each n of a range."""
+def values_of(statement: Statement, sides: Sequence[str], budget: Budget) -> list[list[int]]:
+    """Return the values of the expressions under these keys for each n of the range."""
     import ast
 
     value = statement.value
     first, last = (integer(value[key], budget) for key in ("first", "last"))
     require(1 <= first <= last <= 1000, "statement", "the range lies within 1 to 1000, and is not empty")
-    sides = [side for side in (value["left"], value["right"]) if type(side) is str and len(side) <= 1000]
-    require(len(sides) == 2, "statement", "an expression is a text of at most 1000 characters")
-    plain = all(re.fullmatch("[0-9a-z+*/(), -]+", side) and not re.search(MIXED, side) for side in sides)
-    require(plain, "expression", "an expression has lower-case names, decimal numbers and + - * / ( ) , only")
-    try:
-        left, right = (ast.parse(side, mode="eval") for side in sides)
-        pairs = [(evaluate(left, {"n": n}, budget), evaluate(right, {"n": n}, budget)) for n in range(first, last + 1)]
-    except (SyntaxError, TypeError, ValueError, ZeroDivisionError, RecursionError) as error:
-        raise Failure("expression", "an expression cannot be read or evaluated") from error
-    wrong = [n for n, (a, b) in enumerate(pairs, first) if a != b]
+    found = []
+    for text in (value[side] for side in sides):
+        if type(text) is not str or len(text) > 1000:
+            raise Failure("statement", "an expression is a text of at most 1000 characters")
+        plain = re.fullmatch("[0-9a-z+*/(), -]+", text) and not re.search(MIXED, text)
+        require(bool(plain), "expression", "an expression has lower-case names, decimal numbers and + - * / ( ) , only")
+        try:
+            tree = ast.parse(text, mode="eval")
+            found.append([evaluate(tree, {"n": n}, budget) for n in range(first, last + 1)])
+        except (SyntaxError, TypeError, ValueError, ZeroDivisionError, RecursionError) as error:
+            raise Failure("expression", "an expression cannot be read or evaluated") from error
+    return found
+
+
+def prove_identity(statement: Statement, _: Lines, budget: Budget) -> Proved:
+    """Require two expressions to have the same value for each n of a range."""
+    value, first, last = (statement.value, *(statement.value[key] for key in ("first", "last")))
+    left, right = values_of(statement, ("left", "right"), budget)
+    wrong = [n for n, (a, b) in enumerate(zip(left, right, strict=True), integer(first, budget)) if a != b]
     require(not wrong, "false", f"the two sides differ for n = {wrong[:1]}")
-    return {}, f"{sides[0]} = {sides[1]} for n = {first}, …, {last}"
+    return {}, f"{value['left']} = {value['right']} for n = {first}, …, {last}"
+
+
+def prove_values(statement: Statement, _: Lines, budget: Budget) -> Proved:
+    """Return the values of an expression for each n of a range."""
+    formula, first, last = (statement.value[key] for key in ("formula", "first", "last"))
+    (values,) = values_of(statement, ("formula",), budget)
+    answer: dict[str, object] = {"values": list(map(spelled, values))}
+    return answer, f"{formula} has the values {', '.join(map(str, values))} for n = {first}, …, {last}"
 
 
 Routes = dict[str, Callable[[Statement, Lines, Budget], Proved]]
@@ -1805,13 +1890,23 @@ KINDS: dict[str, tuple[tuple[str, ...], tuple[str, ...], Routes]] = {  # kind: k
         ("products", "values"),
         CHARACTERS,
     ),
-    "action": (("degree", "element", "pairs"), ("basis", "matrix"), {"cells": prove_action}),
-    "fixed-set": (("degrees", "generators", "pairs"), ("groups",), {"blocks": prove_fixed_set}),
-    "orbit-space": (("degrees", "generators"), ("groups",), {"cells": partial(prove_whole, OrbitSpace)}),
+    "equivariance": (
+        ("degree", "elements", "generators", "pairs"),
+        ("values",),
+        {"both": partial(prove_character, traces_both_ways)},
+    ),
+    "action": (("degree", "element", "pairs"), ("basis", "matrix", "trace"), {"cells": prove_action}),
+    "fixed-set": (
+        ("degrees", "generators", "pairs"),
+        ("components", "groups", "points"),
+        {"blocks": prove_fixed_set},
+    ),
+    "orbit-space": (("degrees", "generators"), ("euler", "groups"), {"cells": prove_orbit_space}),
     "surface": (("generators",), ("boundary", "euler", "orientable"), {"cells": prove_surface}),
     "branching": (("generators",), ("orbits",), {"cells": prove_branching}),
     "shelling": ((), (), {"shelling": prove_shelling}),
     "count-identity": (("first", "last", "left", "right"), (), {"values": prove_identity}),
+    "count-values": (("first", "formula", "last"), ("values",), {"values": prove_values}),
     "orbit-count": (("colours", "content", "generators"), ("orbits", "primitive"), {"permutations": prove_orbit_count}),
 }
 

@@ -3,6 +3,7 @@
 from certify.answers.bigraded import Splitting, Tor
 from certify.answers.certificates import Certificate
 from certify.answers.conversions import face_ideal, face_poset, one_skeleton, variables
+from certify.answers.counts import CountValues, OrbitCount, count_identity, count_values, orbit_count
 from certify.answers.graded import GradedGroups, Homology
 from certify.answers.polynomials import f_polynomial, h_polynomial, hilbert_series
 from certify.answers.questions import (
@@ -14,26 +15,33 @@ from certify.answers.questions import (
     splitting,
     tor,
 )
-from certify.answers.symmetry import (
+from certify.answers.quotients import (
     BranchPoints,
-    Character,
-    OrbitCount,
     ProvedSurface,
-    SymmetryGroup,
-    automorphism_group,
     branch_points,
-    character,
-    fixed_set_homology,
-    orbit_count,
     orbit_space_homology,
     shelling,
     surface,
 )
+from certify.answers.symmetry import (
+    Action,
+    Character,
+    FixedSet,
+    SymmetryGroup,
+    action,
+    automorphism_group,
+    character,
+    equivariance,
+    fixed_set,
+)
 
 __all__ = [
+    "Action",
     "BranchPoints",
     "Certificate",
     "Character",
+    "CountValues",
+    "FixedSet",
     "GradedGroups",
     "Homology",
     "OrbitCount",
@@ -41,13 +49,17 @@ __all__ = [
     "Splitting",
     "SymmetryGroup",
     "Tor",
+    "action",
     "automorphism_group",
     "branch_points",
     "character",
+    "count_identity",
+    "count_values",
+    "equivariance",
     "f_polynomial",
     "face_ideal",
     "face_poset",
-    "fixed_set_homology",
+    "fixed_set",
     "h_polynomial",
     "hilbert_series",
     "homology",

@@ -1,4 +1,4 @@
-"""Questions about symmetries that a person asks at a prompt; each answer has been proved, and has its certificate."""
+"""Questions about groups and how they act, as a person asks them at a prompt; each answer has its certificate."""
 
 from __future__ import annotations
 
@@ -8,44 +8,37 @@ from fractions import Fraction
 from typing import TYPE_CHECKING, TypeAlias
 
 from certify.answers.certificates import Certificate, proved_value
+from certify.answers.elements import Given, elements_of, require_kind
 from certify.answers.graded import Homology
 from certify.answers.writing import html_table
+from certify.claims.actions import ActionClaim
 from certify.claims.automorphisms import AutomorphismsClaim
 from certify.claims.characters import CharacterClaim
-from certify.claims.counts import OrbitCountClaim
+from certify.claims.equivariance import EquivarianceClaim
 from certify.claims.fixed_sets import FixedSetClaim
-from certify.claims.quotients import BranchingClaim, OrbitSpaceClaim, SurfaceClaim
-from certify.claims.shellings import ShellingClaim
+from certify.claims.quotients import intervals
 from certify.errors import BadInput
-from certify.products import PolyhedralProduct, parse_pairs
+from certify.products import PolyhedralProduct
 from certify.simplicial import SimplicialComplex
-from certify.symmetry.automorphisms import Generators, acting
+from certify.symmetry.automorphisms import acting
 from certify.symmetry.characters import IRREDUCIBLES
-from certify.symmetry.elements import Element, element_from_cycles, element_from_sympy, spell_cycles
-from certify.symmetry.surfaces import Surface
+from certify.symmetry.elements import Element, element_from_cycles, spell_cycles
 
 if TYPE_CHECKING:
-    from sympy.combinatorics import Permutation, PermutationGroup
+    from sympy import Matrix
+    from sympy.combinatorics import PermutationGroup
 
 __all__ = [
-    "BranchPoints",
+    "Action",
     "Character",
-    "OrbitCount",
-    "ProvedSurface",
+    "FixedSet",
     "SymmetryGroup",
+    "action",
     "automorphism_group",
-    "branch_points",
     "character",
-    "fixed_set_homology",
-    "orbit_count",
-    "orbit_space_homology",
-    "shelling",
-    "surface",
+    "equivariance",
+    "fixed_set",
 ]
-
-Given: TypeAlias = "str | Element | Permutation"
-"""A permutation of the vertices as people give it: in cycles of labels, as images with signs, or as SymPy has it."""
-
 
 ClassFunctions: TypeAlias = "Callable[[tuple[Element, ...], Sequence[Element]], Mapping[str, tuple[int, ...]]]"
 """What makes class functions from generators and the elements that stand for the classes."""
@@ -119,81 +112,61 @@ class Character:
 
 
 @dataclass(frozen=True, slots=True, repr=False)
-class ProvedSurface:
-    """A surface, with the proof that the space is one.
+class Action:
+    """How a symmetry acts on homology modulo torsion.
 
     Attributes
     ----------
-    euler, boundary, genus : int
-    orientable : bool
+    matrix : tuple of tuple of int
+        By rows: column j holds the image of the cycle j of the basis.
+    trace : int
+    basis : tuple of str
+        The cycles, as sums of cells: by their middles in a cube, otherwise by the numbers of the cells of the pairs.
     certificate : Certificate
     """
 
-    surface: Surface
+    matrix: tuple[tuple[int, ...], ...]
+    trace: int
+    basis: tuple[str, ...]
     certificate: Certificate = field(compare=False)
 
-    @property
-    def euler(self) -> int:
-        """The Euler characteristic."""
-        return self.surface.euler
-
-    @property
-    def orientable(self) -> bool:
-        """Whether it is orientable."""
-        return self.surface.orientable
-
-    @property
-    def boundary(self) -> int:
-        """The number of boundary circles."""
-        return self.surface.boundary
-
-    @property
-    def genus(self) -> int:
-        """The number of handles, or of cross-caps."""
-        return self.surface.genus
-
     def __repr__(self) -> str:
-        """Say which surface it is."""
-        return str(self.surface)
+        """Write trace, matrix and basis."""
+        rows = [" ".join(map(str, row)) for row in self.matrix]
+        cycles = [f"z_{i} = {cycle}" for i, cycle in enumerate(self.basis, 1)]
+        return "\n".join([f"trace {self.trace}, in the basis of the cycles z:", *rows, *cycles])
+
+    def sympy(self) -> Matrix:
+        """Return the matrix as SymPy has it."""
+        from sympy import Matrix
+
+        return Matrix(len(self.matrix), len(self.matrix), [x for row in self.matrix for x in row])
 
 
 @dataclass(frozen=True, slots=True, repr=False)
-class BranchPoints:
-    """Orbits of isolated points with isotropy.
+class FixedSet:
+    """The points of a polyhedral product that a group of symmetries fixes.
 
     Attributes
     ----------
-    orbits : mapping from int to int
-        The number of orbits by the order of the isotropy group, from 2 on.
+    homology : Homology
+    components : int or None
+        None if the question left out degree 0.
+    points : int or None
+        None if there are infinitely many.
     certificate : Certificate
     """
 
-    orbits: Mapping[int, int]
+    homology: Homology
+    components: int | None
+    points: int | None
     certificate: Certificate = field(compare=False)
 
     def __repr__(self) -> str:
-        """Write how many orbits there are of which order."""
-        return ", ".join(f"{number} of order {order}" for order, number in self.orbits.items()) or "none"
-
-
-@dataclass(frozen=True, slots=True, repr=False)
-class OrbitCount:
-    """A number of orbits on colourings.
-
-    Attributes
-    ----------
-    orbits, primitive : int
-        All of them, and those with trivial isotropy.
-    certificate : Certificate
-    """
-
-    orbits: int
-    primitive: int
-    certificate: Certificate = field(compare=False)
-
-    def __repr__(self) -> str:
-        """Write both numbers."""
-        return f"{self.orbits} orbits, {self.primitive} with trivial isotropy"
+        """Write the groups and the numbers."""
+        numbers = (("components", self.components), ("points", self.points))
+        known = ", ".join(f"{name}: {number}" for name, number in numbers if number is not None)
+        return f"{self.homology!r}{'; ' if known else ''}{known}"
 
 
 def automorphism_group(
@@ -218,8 +191,8 @@ def automorphism_group(
     >>> automorphism_group(projective_plane()).order
     60
     """
-    product = k if isinstance(k, PolyhedralProduct) else _intervals(k)
-    elements = _elements(generators, product.complex)
+    product = k if isinstance(k, PolyhedralProduct) else intervals(require_kind(k, SimplicialComplex))
+    elements = elements_of(generators, product.complex)
     found, certificate = proved_value(AutomorphismsClaim(product, elements), "the order of a group of symmetries")
     names = tuple(spell_cycles(element, product.complex) for element in acting(elements, product))
     return SymmetryGroup(product.complex, names, int(found["order"]), found["orbits"], certificate)
@@ -265,7 +238,7 @@ def character(
     >>> character(polyhedral_product(points(3), "(D1, S0)"), 1, ["(1 2 3)", "(1 2)"], irreducibles="symmetric")
     χ(()) = 5, χ((1 2 3)) = -1, χ((1 2)) = -1; 2 · 2 1 + 1 · 1 1 1
     """
-    elements = _elements(generators, product.complex)
+    elements = elements_of(generators, require_kind(product, PolyhedralProduct).complex)
     words = None if summands is None else tuple(summands)
     plain = CharacterClaim(product, degree, elements, summands=words)
     chosen = {name: tuple(values) for name, values in (functions or {}).items()}
@@ -282,130 +255,92 @@ def character(
     return Character(value["values"], claim.class_sizes(), multiplicities, certificate)
 
 
-def fixed_set_homology(
+def equivariance(
+    product: PolyhedralProduct, degree: int, generators: Iterable[Given] | None, *, jobs: int = 1
+) -> Character:
+    """Return the character on H_k((X, A)^K; ℚ), and prove that it is that on the summands of the stable splitting.
+
+    So H_k((X, A)^K; ℚ) is, as a representation of G, the sum over the orbits of summands of the representations that
+    are induced from their stabilisers.
+
+    Raises
+    ------
+    BadInput
+        If a generator is no symmetry, or changes signs.
+
+    Examples
+    --------
+    >>> from certify import polygon, polyhedral_product
+    >>> equivariance(polyhedral_product(polygon(5), "(D2, S1)"), 3, ["(1 2 3 4 5)"])
+    χ(()) = 5, χ((1 2 3 4 5)) = 0
+    """
+    elements = elements_of(generators, require_kind(product, PolyhedralProduct).complex)
+    claim = EquivarianceClaim(product, degree, elements)
+    found, certificate = proved_value(claim, f"H_{degree}({product}; ℚ) and its summands", jobs)
+    return Character(claim.value(found)["values"], claim.class_sizes(), {}, certificate)
+
+
+def action(product: PolyhedralProduct, degree: int, element: Given) -> Action:
+    """Return the integer matrix of a symmetry on H_k((X, A)^K; ℤ) modulo torsion, proved.
+
+    Parameters
+    ----------
+    product : PolyhedralProduct
+    degree : int
+    element : str, tuple, or SymPy permutation
+
+    Raises
+    ------
+    BadInput
+        If the element is no symmetry.
+
+    Examples
+    --------
+    >>> from certify import points, polyhedral_product
+    >>> action(polyhedral_product(points(2), "(D1, S0)"), 1, "(1 2)")
+    trace -1, in the basis of the cycles z:
+    -1
+    z_1 = (0, -1) - (0, 1) - (-1, 0) + (1, 0)
+    """
+    (own,) = elements_of([element], require_kind(product, PolyhedralProduct).complex) or ()
+    claim = ActionClaim(product, degree, own)
+    found, certificate = proved_value(claim, claim.name("matrix"))
+    matrix = tuple(tuple(row) for row in found["matrix"])
+    return Action(matrix, found["trace"], tuple(claim.basis(found)), certificate)
+
+
+def fixed_set(
     product: PolyhedralProduct,
     generators: Iterable[Given] | None,
     degrees: Iterable[int] | None = None,
     *,
     jobs: int = 1,
-) -> Homology:
-    """Return the integral homology of the points of (X, A)^K that a group of symmetries fixes, proved.
+) -> FixedSet:
+    """Return the homology, components and points of the part of (X, A)^K that a group of symmetries fixes, proved.
+
+    Parameters
+    ----------
+    product : PolyhedralProduct
+    generators : iterable of str, tuples, or SymPy permutations, or None
+    degrees : iterable of int, optional
+        By default all.
+    jobs : int
+
+    Raises
+    ------
+    BadInput
+        If a generator is no symmetry of K and the pairs.
 
     Examples
     --------
     >>> from certify import polygon, polyhedral_product
-    >>> fixed_set_homology(polyhedral_product(polygon(6), "(D1, S0)"), ["(1 3 5)(2 4 6)"])
-    H_0 = ℤ⁴
+    >>> fixed_set(polyhedral_product(polygon(6), "(D1, S0)"), ["(1 3 5)(2 4 6)"])
+    H_0 = ℤ⁴; components: 4, points: 4
     """
     wanted = None if degrees is None else tuple(degrees)
-    claim = FixedSetClaim(product, wanted, generators=_elements(generators, product.complex))
+    elements = elements_of(generators, require_kind(product, PolyhedralProduct).complex)
+    claim = FixedSetClaim(product, wanted, generators=elements)
     found, certificate = proved_value(claim, f"H_*(({product})^G; ℤ)", jobs)
-    return Homology(tuple(found.items()), claim.degrees, f"({product})^G", certificate=certificate)
-
-
-def orbit_space_homology(
-    k: SimplicialComplex, generators: Iterable[Given] | None, degrees: Iterable[int] | None = None, *, jobs: int = 1
-) -> Homology:
-    """Return the integral homology of (D¹, S⁰)^K / G, proved.
-
-    Examples
-    --------
-    >>> from certify import polygon
-    >>> orbit_space_homology(polygon(5), ["(1 2 3 4 5)"])
-    H_0 = ℤ, H_1 = ℤ², H_2 = ℤ
-    """
-    wanted = None if degrees is None else tuple(degrees)
-    claim = OrbitSpaceClaim(k, _elements(generators, k), wanted)
-    found, certificate = proved_value(claim, "H_*((D¹,S⁰)^K/G; ℤ)", jobs)
-    return Homology(tuple(found.items()), claim.degrees, "(D¹,S⁰)^K/G", certificate=certificate)
-
-
-def surface(k: SimplicialComplex, generators: Iterable[Given] | None = ()) -> ProvedSurface:
-    """Return the surface that (D¹, S⁰)^K, or its quotient by a group, is, proved.
-
-    Raises
-    ------
-    ClaimIsFalse
-        If it is no connected surface; the point and its link are named.
-
-    Examples
-    --------
-    >>> from certify import polygon
-    >>> surface(polygon(6))
-    an orientable surface of genus 17, closed, Euler characteristic -32
-    >>> surface(polygon(6), ["(1 2 3 4 5 6)"]).genus
-    2
-    """
-    found, certificate = proved_value(SurfaceClaim(k, _elements(generators, k)), "a surface")
-    return ProvedSurface(Surface(found["euler"], bool(found["orientable"]), found["boundary"]), certificate)
-
-
-def branch_points(k: SimplicialComplex, generators: Iterable[Given] | None) -> BranchPoints:
-    """Return the orbits of points of (D¹, S⁰)^K with isotropy, where these points are isolated, proved.
-
-    Examples
-    --------
-    >>> from certify import polygon
-    >>> branch_points(polygon(6), ["(1 2 3 4 5 6)"])
-    2 of order 2, 1 of order 3, 2 of order 6
-    """
-    found, certificate = proved_value(BranchingClaim(k, _elements(generators, k)), "branch points")
-    return BranchPoints(dict(map(tuple, found["orbits"])), certificate)
-
-
-def orbit_count(
-    k: SimplicialComplex,
-    colours: int,
-    generators: Iterable[Given] | None = None,
-    *,
-    content: Sequence[int] | None = None,
-) -> OrbitCount:
-    """Return the number of orbits of a group of automorphisms of K on colourings of its vertices, proved.
-
-    Examples
-    --------
-    >>> from certify import polygon
-    >>> orbit_count(polygon(6), 2, ["(1 2 3 4 5 6)"])
-    14 orbits, 9 with trivial isotropy
-    """
-    claim = OrbitCountClaim(k, colours, _elements(generators, k), None if content is None else tuple(content))
-    found, certificate = proved_value(claim, "a number of orbits")
-    return OrbitCount(int(found["orbits"]), int(found["primitive"]), certificate)
-
-
-def shelling(k: SimplicialComplex) -> Certificate:
-    """Return a certificate that K is a shellable sphere, so that (D¹, S⁰)^K and (D², S¹)^K are closed manifolds.
-
-    Raises
-    ------
-    ClaimIsFalse
-        If it is none.
-
-    Examples
-    --------
-    >>> from certify import cyclic_polytope
-    >>> shelling(cyclic_polytope(7, 4)).title
-    'K is a shellable sphere'
-    """
-    return proved_value(ShellingClaim(k), "K is a shellable sphere")[1]
-
-
-def _intervals(k: SimplicialComplex) -> PolyhedralProduct:
-    return PolyhedralProduct(k, parse_pairs("(D1, S0)", k.vertex_count))
-
-
-def _elements(given: Iterable[Given] | None, k: SimplicialComplex) -> Generators:
-    """Return elements from what people give."""
-    if given is None:
-        return None
-    if isinstance(given, str):
-        raise BadInput(where="generators", expected="a list of permutations", found=repr(given))
-    found = []
-    for one in given:
-        if isinstance(one, str):
-            found.append(element_from_cycles(one, k))
-        elif isinstance(one, tuple):
-            found.append(one)
-        else:
-            found.append(element_from_sympy(one, k))
-    return tuple(found)
+    homology = Homology(tuple(found.items()), claim.degrees, f"({product})^G", certificate=certificate)
+    numbers = claim.numbers(found)
+    return FixedSet(homology, numbers["components"], numbers["points"], certificate)

@@ -27,6 +27,7 @@ __all__ = [
     "Source",
     "Sum",
     "Task",
+    "check_degree",
     "checked_degrees",
     "complex_value",
     "generators_value",
@@ -321,6 +322,12 @@ def solve(task: Task) -> Solved:
 def is_whole(number: object) -> bool:
     """Tell whether something is a whole number from 0 on; True and False are none."""
     return isinstance(number, int) and not isinstance(number, bool) and number >= 0
+
+
+def check_degree(degree: int) -> None:
+    """Raise BadInput if something is no degree from 0 on."""
+    if not is_whole(degree) or not degree < LARGEST:
+        raise BadInput(where="degree", expected="a whole number from 0 to 2^53 - 2", found=repr(degree))
 
 
 def checked_degrees(degrees: Iterable[int] | None, groups: Iterable[int] | None) -> tuple[int, ...] | None:

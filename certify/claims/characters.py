@@ -1,4 +1,4 @@
-"""The claim kinds ``character`` and ``action``: how symmetries act on homology modulo torsion."""
+"""The claim kind ``character``: the traces of a group of symmetries on homology, by rational classes."""
 
 from __future__ import annotations
 
@@ -7,13 +7,11 @@ from dataclasses import dataclass, field
 from fractions import Fraction
 from typing import Any, ClassVar, Literal
 
-from certify.certificate import vector_value
-from certify.certificate.canonical import LARGEST, integer_value
-from certify.claims.base import Contribution, Task, generators_value, is_whole
+from certify.certificate.canonical import integer_value
+from certify.claims.base import Contribution, Task, check_degree, generators_value
 from certify.claims.homology import HomologyClaim
 from certify.claims.values import Values, ValuesClaim
-from certify.errors import BadInput
-from certify.exact import adapted_basis
+from certify.errors import BadInput, ClaimIsFalse
 from certify.products import Block, PolyhedralProduct, block_classes
 from certify.products.blocks import DIGITS
 from certify.simplicial.complexes import SimplicialComplex
@@ -30,7 +28,7 @@ from certify.symmetry.elements import (
     spell_cycles,
 )
 
-__all__ = ["ActionClaim", "CharacterClaim"]
+__all__ = ["CharacterClaim"]
 
 
 @dataclass(frozen=True)
@@ -47,7 +45,7 @@ class CharacterClaim(ValuesClaim):
         One element of each rational class; None lets them be found.
     claimed : mapping
         ``values``: the traces on these elements, in this order; ``multiplicities``: ⟨χ, ψ⟩ / ⟨ψ, ψ⟩ by the name of the
-        class function ψ, a function that is left out being claimed to have multiplicity 0.
+        class function ψ, a fraction in general, a function that is left out being claimed to have multiplicity 0.
     functions : mapping
         Class functions ψ by name, with their values on these elements. Their inner products ⟨χ, ψ⟩ and ⟨ψ, ψ⟩ are
         proved; the quotient is the multiplicity of ψ if it is irreducible over ℚ, which is not part of the proof.
@@ -59,7 +57,8 @@ class CharacterClaim(ValuesClaim):
     Raises
     ------
     BadInput
-        If a generator is no symmetry, a word is none, or a rational class is missing or there twice.
+        If a generator is no symmetry, a word is none, a rational class is missing or there twice, or a class function
+        has another number of values or a norm that is no whole number above 0.
     """
 
     product: PolyhedralProduct
@@ -75,7 +74,7 @@ class CharacterClaim(ValuesClaim):
     def __post_init__(self) -> None:
         """Refuse generators that are no symmetries, and a list of elements that does not match the classes."""
         k = self.base
-        _check_degree(self.degree)
+        check_degree(self.degree)
         check_symmetries(self.generators or (), self.product)
         generators = acting(self.generators, self.product)
         classes = rational_classes(generated_group(generators, k.vertex_count), generators)
@@ -96,12 +95,20 @@ class CharacterClaim(ValuesClaim):
             if number not in met:
                 found = f"none of the class of {spell_cycles(own[0], k)}"
                 raise BadInput(where="values", expected="an element of each rational class", found=found)
-        for psi in self.functions.values():
-            if len(psi) != len(classes):
-                expected = f"a value for each of the {len(classes)} classes"
-                raise BadInput(where="functions", expected=expected, found=f"{len(psi)}")
-        self._check_words()
         object.__setattr__(self, "_sizes", tuple(len(classes[where[element]]) for element in self._elements))
+        self._check_functions()
+        self._check_words()
+
+    def _check_functions(self) -> None:
+        """Refuse class functions that are zero, have another number of values, or whose norm is no whole number."""
+        for name, psi in self.functions.items():
+            if len(psi) != len(self._elements):
+                expected = f"a value for each of the {len(self._elements)} classes"
+                raise BadInput(where="functions", expected=expected, found=f"{len(psi)} for {name}")
+            norm = self._inner(psi, psi)
+            if norm.denominator > 1 or not norm:
+                expected = "class functions ψ for which ⟨ψ, ψ⟩ is a whole number above 0"
+                raise BadInput(where="functions", expected=expected, found=f"{norm} for {name}")
 
     def _check_words(self) -> None:
         """Refuse words that choose no summands, and summands on the route of cells."""
@@ -169,7 +176,9 @@ class CharacterClaim(ValuesClaim):
         """Yield the whole product, or the blocks that each element maps to themselves; all of them for the identity."""
         if self.route == "cells":
             cells = tuple(pair.cells for pair in self.product.pairs)
-            yield from _with_cells(ActedCells(self.base.face_masks(), cells, self.degree, self._elements))
+            whole = ActedCells(self.base.face_masks(), cells, self.degree, self._elements)
+            if whole.is_watched:
+                yield Task(whole)
             return
         chosen = self._chosen()
         for number, element in enumerate(self._elements):
@@ -192,16 +201,17 @@ class CharacterClaim(ValuesClaim):
                 for shift, times in source.shifts.items():
                     if 0 <= self.degree - shift < len(contribution.groups):
                         values[one] += times * contribution.groups[self.degree - shift].rank
-        products = [[self._inner(values, psi), self._inner(psi, psi)] for psi in self.functions.values()]
+        products = []
+        for name, psi in self.functions.items():
+            inner = self._inner(values, psi)
+            if inner.denominator > 1:
+                raise ClaimIsFalse(what=f"⟨χ, ψ⟩ for ψ = {name}", claimed="a whole number", found=str(inner))
+            products.append([int(inner), int(self._inner(psi, psi))])
         return {"products": products, "values": values}
 
-    def _inner(self, some: Iterable[int], others: Iterable[int]) -> int:
+    def _inner(self, some: Iterable[int], others: Iterable[int]) -> Fraction:
         sizes: tuple[int, ...] = getattr(self, "_sizes")  # noqa: B009 - no field, and so not compared
-        total = sum(n * x * y for n, x, y in zip(sizes, some, others, strict=True))
-        if total % sum(sizes):
-            found = f"one with an inner product of {total}/{sum(sizes)}"
-            raise BadInput(where="functions", expected="class functions with whole inner products", found=found)
-        return total // sum(sizes)
+        return Fraction(sum(n * x * y for n, x, y in zip(sizes, some, others, strict=True)), sum(sizes))
 
     def check(self, found: Values) -> None:
         """Raise ClaimIsFalse at the first value of the character, or multiplicity, that is not the one claimed."""
@@ -215,7 +225,7 @@ class CharacterClaim(ValuesClaim):
 
     def _multiplicities(self, found: Values) -> dict[str, Fraction]:
         pairs = zip(self.functions, found["products"], strict=True)
-        return {name: Fraction(inner, norm) if norm else Fraction(0) for name, (inner, norm) in pairs}
+        return {name: Fraction(inner, norm) for name, (inner, norm) in pairs}
 
     def answer(self, found: Values) -> dict[str, Any]:
         """Return values and products as the statement holds them."""
@@ -244,87 +254,3 @@ class CharacterClaim(ValuesClaim):
         elements = [spell_cycles(element, self.base) for element in self._elements]
         multiplicities = {name: str(value) for name, value in self._multiplicities(found).items()}
         return {"values": dict(zip(elements, found["values"], strict=True)), "multiplicities": multiplicities}
-
-
-@dataclass(frozen=True)
-class ActionClaim(ValuesClaim):
-    """A claim about the integer matrix of a symmetry on H_k((X, A)^K; ℤ) modulo torsion, in a basis of cycles.
-
-    Parameters
-    ----------
-    product : PolyhedralProduct
-    degree : int
-    element : Element
-    claimed : mapping
-        ``matrix``, by rows; it belongs to the basis that is found, so it is mostly asked for.
-
-    Raises
-    ------
-    BadInput
-        If the element is no symmetry.
-    """
-
-    product: PolyhedralProduct
-    degree: int
-    element: Element
-    claimed: Values = field(default_factory=dict)
-    route: str = "cells"
-    kind: ClassVar[str] = "action"
-
-    def __post_init__(self) -> None:
-        """Refuse an element that is no symmetry, and a degree that is none."""
-        _check_degree(self.degree)
-        check_symmetries([self.element], self.product)
-
-    @property
-    def base(self) -> SimplicialComplex:
-        """The complex K."""
-        return self.product.complex
-
-    @property
-    def _cells(self) -> ActedCells:
-        cells = tuple(pair.cells for pair in self.product.pairs)
-        return ActedCells(self.base.face_masks(), cells, self.degree, (self.element,))
-
-    def fields(self) -> dict[str, Any]:
-        """Return degree, element and pairs."""
-        pairs = [pair.value for pair in self.product.pairs]
-        return {"degree": self.degree, "element": list(self.element), "pairs": pairs}
-
-    def tasks(self) -> Iterator[Task]:
-        """Yield the whole product."""
-        yield from _with_cells(self._cells)
-
-    def found(self, contributions: Iterable[Contribution]) -> dict[str, Any]:
-        """Return the cycles of the basis, and the matrix by rows."""
-        list(contributions)
-        if not self._cells.is_watched:
-            return {"basis": [], "matrix": []}
-        complex_ = self._cells.chains()
-        # The same basis as in the record, since it depends on the complex alone.
-        basis = adapted_basis(complex_)
-        (columns,) = self._cells.matrices(complex_, basis)
-        cycles = [vector_value(cycle) for cycle in basis.degrees[self.degree].cycles]
-        matrix = [[integer_value(x) for x in row] for row in zip(*columns, strict=True)]
-        return {"basis": cycles, "matrix": matrix}
-
-    def name(self, key: str) -> str:
-        """Write in words what a value is."""
-        return f"the {key} of {spell_cycles(self.element, self.base)} on H_{self.degree}({self.product}; ℤ) mod torsion"
-
-    def lines(self, found: Mapping[str, Any]) -> list[str]:
-        """Write the matrix by rows, and its trace."""
-        rows = [" ".join(map(str, row)) for row in found["matrix"]]
-        trace = sum(int(row[i]) for i, row in enumerate(found["matrix"]))
-        return [f"{self.name('matrix')}, of trace {trace}:", *rows, "its basis of cycles stands in the certificate"]
-
-
-def _with_cells(cells: ActedCells) -> Iterator[Task]:
-    """Yield the task, if there are cells of the degree."""
-    if cells.is_watched:
-        yield Task(cells)
-
-
-def _check_degree(degree: int) -> None:
-    if not is_whole(degree) or not degree < LARGEST:
-        raise BadInput(where="degree", expected="a whole number from 0 to 2^53 - 2", found=repr(degree))

@@ -8,10 +8,13 @@ from __future__ import annotations
 from collections.abc import Mapping
 from types import MappingProxyType
 
-from certify.claims.reading import SPACE_KINDS, Kind
-from certify.claims.reading_symmetry import SYMMETRY_KINDS
+from certify.claims.reading.actions import ACTION_KINDS
+from certify.claims.reading.counts import COUNT_KINDS
+from certify.claims.reading.quotients import QUOTIENT_KINDS
+from certify.claims.reading.spaces import SPACE_KINDS
+from certify.claims.reading.tables import Kind
 
 __all__ = ["KINDS"]
 
-KINDS: Mapping[str, Kind] = MappingProxyType({**SPACE_KINDS, **SYMMETRY_KINDS})
+KINDS: Mapping[str, Kind] = MappingProxyType({**SPACE_KINDS, **ACTION_KINDS, **QUOTIENT_KINDS, **COUNT_KINDS})
 """The claim kinds, by the name that sheets give under ``kind``."""

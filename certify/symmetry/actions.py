@@ -78,6 +78,11 @@ class ActedCells:
         return words_by_degree(self.faces, self.alphabets, self.degree + 1)
 
     @property
+    def watched_words(self) -> list[Word]:
+        """The cells of the degree that is watched."""
+        return self._words[self.degree]
+
+    @property
     def is_watched(self) -> bool:
         """Whether there are cells of the degree that is watched."""
         return len(self._words) > self.degree and bool(self._words[self.degree])

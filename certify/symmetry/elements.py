@@ -160,36 +160,37 @@ def check_symmetries(elements: Iterable[Element], product: PolyhedralProduct) ->
     Raises
     ------
     BadInput
-        It names a face with its image, or a vertex.
+        It names a face with its image, or a vertex; the place is ``generator 2`` for the second element.
     """
-    for element in elements:
+    for number, element in enumerate(elements, 1):
+        where = f"generator {number}"
         if sorted(map(abs, element)) != list(identity(product.complex.vertex_count)):
             expected = f"images of all {product.complex.vertex_count} vertices"
-            raise BadInput(where="element", expected=expected, found=f"{element}")
-        _check_faces(element, product.complex)
-        _check_pairs(element, product)
+            raise BadInput(where=where, expected=expected, found=f"{element}")
+        _check_faces(where, element, product.complex)
+        _check_pairs(where, element, product)
 
 
-def _check_faces(element: Element, k: SimplicialComplex) -> None:
+def _check_faces(where: str, element: Element, k: SimplicialComplex) -> None:
     facets = k.facet_masks()
     for mask in facets:
         image = moved_mask(mask, element)
         if not any(image & facet == image for facet in facets):
             face, other = (_labels(k, part) for part in (mask, image))
             found = f"{spell_cycles(element, k)}, by which the face {face} goes to {other}, which is none"
-            raise BadInput(where="element", expected="a permutation that preserves K", found=found)
+            raise BadInput(where=where, expected="a permutation that preserves K", found=found)
 
 
-def _check_pairs(element: Element, product: PolyhedralProduct) -> None:
+def _check_pairs(where: str, element: Element, product: PolyhedralProduct) -> None:
     k, pairs = product.complex, product.pairs
     for place, to in enumerate(element):
         if pairs[place] != pairs[abs(to) - 1]:
             ends = (f"{pairs[i].symbol} at {k.labels[i]}" for i in (place, abs(to) - 1))
             found = f"{spell_cycles(element, k)}, which exchanges {' and '.join(ends)}"
-            raise BadInput(where="element", expected="a permutation that preserves the pairs", found=found)
+            raise BadInput(where=where, expected="a permutation that preserves the pairs", found=found)
         if to < 0 and pairs[place].name != "(D1, S0)":
             found = f"{spell_cycles(element, k)}, with one on {pairs[place].symbol} at {k.labels[place]}"
-            raise BadInput(where="element", expected="changes of sign on (D1, S0) only", found=found)
+            raise BadInput(where=where, expected="changes of sign on (D1, S0) only", found=found)
 
 
 def _labels(k: SimplicialComplex, mask: int) -> str:

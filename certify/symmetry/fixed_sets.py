@@ -1,14 +1,15 @@
-"""The points of a polyhedral product that a group of symmetries fixes."""
+"""The points of a polyhedral product that a group of symmetries fixes, and how many there are."""
 
 from __future__ import annotations
 
 from collections.abc import Sequence
+from math import prod
 
 from certify.products import PolyhedralProduct
 from certify.simplicial import SimplicialComplex
 from certify.symmetry.elements import Element, after, moved_mask, orbit
 
-__all__ = ["fixed_set"]
+__all__ = ["fixed_set", "number_of_points", "quotient_euler"]
 
 
 def fixed_set(product: PolyhedralProduct, generators: Sequence[Element]) -> PolyhedralProduct | None:
@@ -45,6 +46,45 @@ def fixed_set(product: PolyhedralProduct, generators: Sequence[Element]) -> Poly
     sets = [[place for place, half in enumerate(halves) if mask & half] for mask in faces]
     pairs = tuple(product.pairs[vertex - 1] for vertex in halves.values())
     return PolyhedralProduct(SimplicialComplex.from_faces(labels, sets), pairs)
+
+
+def number_of_points(product: PolyhedralProduct) -> int | None:
+    """Return the number of points of a polyhedral product, or None if there are infinitely many."""
+    points = 0
+    for mask in product.complex.face_masks():
+        degrees = [
+            [letter.degree for letter in pair.cells if letter.outside == bool(mask >> vertex & 1)]
+            for vertex, pair in enumerate(product.pairs)
+        ]
+        if all(degrees) and any(map(any, degrees)):
+            return None
+        points += prod(map(len, degrees))
+    return points
+
+
+def quotient_euler(product: PolyhedralProduct, group: Sequence[Element]) -> int:
+    """Return the Euler characteristic of (D¹, S⁰)^K / G.
+
+    Parameters
+    ----------
+    product : PolyhedralProduct
+        Of the pairs (D¹, S⁰).
+    group : sequence of Element
+        All elements of G.
+
+    Notes
+    -----
+    It is the mean of the Euler characteristics of the fixed sets of the elements, by Burnside's lemma for the cells of
+    the barycentric subdivision. That of (D¹, S⁰)^L is Σ (-1)^|σ| 2^(m - |σ|), over the faces σ of L on m vertices.
+    """
+    total = 0
+    for element in group:
+        fixed = fixed_set(product, [element])
+        if fixed is not None:
+            m = fixed.complex.vertex_count
+            f_vector = fixed.complex.f_vector()
+            total += sum((-1) ** size * number * 2 ** (m - size) for size, number in enumerate(f_vector))
+    return total // len(group)
 
 
 def _name(orbit_: Sequence[str]) -> str:

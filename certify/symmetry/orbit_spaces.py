@@ -93,23 +93,26 @@ class OrbitSpace:
         return [sorted(level) for level in cells]
 
     @cached_property
-    def _orbits(self) -> tuple[list[list[Cell]], dict[Cell, tuple[Cell, int]], list[Counter[int]]]:
-        """Return the first cells of orbits, where each cell goes with which sign, and orders of isotropy groups."""
+    def _orbits(self) -> tuple[list[list[Cell]], dict[Cell, tuple[Cell, int]], dict[Cell, list[Element]]]:
+        """Return the first cells of orbits, where each cell goes with which sign, and isotropy groups other than 1."""
         first: dict[Cell, tuple[Cell, int]] = {}
         kept: list[list[Cell]] = []
-        isotropy: list[Counter[int]] = []
+        isotropy: dict[Cell, list[Element]] = {}
         for level in self._all_cells:
             kept.append([])
-            isotropy.append(Counter())
             for cell in level:
                 if cell not in first:
                     kept[-1].append(cell)
-                    fixing = 0
-                    for images in zip(*(self._images[word] for word in cell), strict=True):
+                    fixing = []
+                    for element, images in zip(
+                        self.group, zip(*(self._images[word] for word in cell), strict=True), strict=True
+                    ):
                         image = tuple(word for word, _ in images)
                         first.setdefault(image, (cell, 1 if self.on_chains else images[0][1]))
-                        fixing += image == cell
-                    isotropy[-1][fixing] += 1
+                        if image == cell:
+                            fixing.append(element)
+                    if len(fixing) > 1:
+                        isotropy[cell] = fixing
         return kept, first, isotropy
 
     @property
@@ -118,8 +121,8 @@ class OrbitSpace:
         return self._orbits[0]
 
     @property
-    def isotropy(self) -> list[Counter[int]]:
-        """For each dimension, how many orbits have an isotropy group of which order."""
+    def isotropy(self) -> dict[Cell, list[Element]]:
+        """The isotropy groups other than 1, all elements of each, by the first cells of orbits."""
         return self._orbits[2]
 
     def first(self, cell: Cell) -> Cell:

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from collections import Counter
 from collections.abc import Sequence
 from dataclasses import dataclass
 
@@ -9,9 +10,11 @@ import networkx as nx
 
 from certify.errors import BadInput
 from certify.simplicial.spelling import spell_labels
+from certify.symmetry.elements import Element
 from certify.symmetry.orbit_spaces import Cell, OrbitSpace
+from certify.symmetry.subgroups import conjugates, sifted_generators
 
-__all__ = ["Surface", "branch_orbits", "recognise_surface", "spell_point"]
+__all__ = ["BranchOrbits", "Surface", "branch_orbits", "recognise_surface", "spell_point"]
 
 
 @dataclass(frozen=True, slots=True)
@@ -97,8 +100,27 @@ def recognise_surface(space: OrbitSpace) -> Surface:
     return Surface(space.euler_characteristic(), nx.is_bipartite(dual), boundary)
 
 
-def branch_orbits(space: OrbitSpace) -> list[tuple[int, int]]:
-    """Return how many orbits of points have an isotropy group of which order above 1, orders ascending.
+@dataclass(frozen=True, slots=True, order=True)
+class BranchOrbits:
+    """Orbits of points with conjugate isotropy groups.
+
+    Parameters
+    ----------
+    order : int
+        The order of the isotropy groups, from 2 on.
+    generators : tuple of Element
+        Of the isotropy group of one of the points.
+    number : int
+        How many orbits.
+    """
+
+    order: int
+    generators: tuple[Element, ...]
+    number: int
+
+
+def branch_orbits(space: OrbitSpace) -> list[BranchOrbits]:
+    """Return how many orbits of points have which isotropy group other than 1, orders ascending.
 
     Parameters
     ----------
@@ -110,12 +132,19 @@ def branch_orbits(space: OrbitSpace) -> list[tuple[int, int]]:
     BadInput
         If such points are not isolated.
     """
-    for level, orders in zip(space.cells[1:], space.isotropy[1:], strict=True):
-        if set(orders) - {1}:
-            found = f"whole cells of dimension {len(level[0]) - 1}"
+    found: Counter[tuple[int, tuple[Element, ...]]] = Counter()
+    first: dict[tuple[Element, ...], tuple[Element, ...]] = {}
+    for cell, fixing in space.isotropy.items():
+        if len(cell) > 1:
+            found_words = f"whole cells of dimension {len(cell) - 1}"
             where = "the set of points with isotropy"
-            raise BadInput(where=where, expected="a set of isolated points", found=found)
-    return sorted((order, number) for order, number in space.isotropy[0].items() if order > 1)
+            raise BadInput(where=where, expected="a set of isolated points", found=found_words)
+        own = tuple(sorted(fixing))
+        if own not in first:
+            alike = conjugates(own, space.group)
+            first |= dict.fromkeys(alike, sifted_generators(min(alike)))
+        found[len(own), first[own]] += 1
+    return [BranchOrbits(order, generators, number) for (order, generators), number in sorted(found.items())]
 
 
 def spell_point(word: Sequence[int]) -> str:

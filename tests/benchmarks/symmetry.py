@@ -9,7 +9,7 @@ from typing import Any
 
 from certify.claims.base import Claim
 from certify.claims.characters import CharacterClaim
-from certify.claims.quotients import OrbitSpaceClaim
+from certify.claims.orbit_spaces import OrbitSpaceClaim
 from certify.products import PolyhedralProduct, parse_pairs
 from certify.simplicial.families import polygon
 from certify.symmetry.elements import Element

@@ -13,11 +13,15 @@ from hypothesis import strategies as st
 from networkx.algorithms.isomorphism import GraphMatcher, categorical_node_match
 from sympy.combinatorics import Permutation, PermutationGroup
 
+from certify.claims.actions import ActionClaim
 from certify.claims.automorphisms import AutomorphismsClaim
-from certify.claims.characters import ActionClaim, CharacterClaim
-from certify.claims.counts import OrbitCountClaim
+from certify.claims.branching import BranchingClaim
+from certify.claims.characters import CharacterClaim
+from certify.claims.equivariance import EquivarianceClaim
 from certify.claims.fixed_sets import FixedSetClaim
-from certify.claims.quotients import BranchingClaim, OrbitSpaceClaim, SurfaceClaim
+from certify.claims.orbit_counts import OrbitCountClaim
+from certify.claims.orbit_spaces import OrbitSpaceClaim
+from certify.claims.surfaces import SurfaceClaim
 from certify.errors import ClaimIsFalse
 from certify.exact import adapted_basis
 from certify.products import PolyhedralProduct, cell_complex
@@ -200,8 +204,61 @@ def test_the_fixed_set_is_made_of_the_cells_that_are_fixed(acted: Acted) -> None
     k, generators = acted
     space = OrbitSpace(disc_product(k, 1), generators, always_chains=True)
     size = len(space.group)
-    fixed = sum((-1) ** degree * orders[size] for degree, orders in enumerate(space.isotropy))
-    assert fixed == euler_of_groups(certified_statement(FixedSetClaim(disc_product(k, 1), generators=generators)))
+    levels = [[cell for cell in level if len(space.isotropy.get(cell, "1")) == size] for level in space.cells]
+    statement = certified_statement(FixedSetClaim(disc_product(k, 1), generators=generators))
+    assert euler_of_groups(statement) == sum((-1) ** degree * len(level) for degree, level in enumerate(levels))
+    graph: nx.Graph[Any] = nx.Graph()
+    graph.add_nodes_from(cell[0] for cell in levels[0])
+    graph.add_edges_from((near, far) for near, far in (levels[1] if len(levels) > 1 else []))
+    assert statement["components"] == nx.number_connected_components(graph)
+    assert statement["points"] == (None if graph.edges else len(graph))
+
+
+@given(symmetric_complexes(max_vertices=4), st.sampled_from(PAIRS), st.integers(0, 4))
+def test_the_splitting_is_one_of_representations(acted: Acted, pair: str, degree: int) -> None:
+    """By the proposition in docs/mathematics.md, section 12.3, the claim is always true; here for random symmetries."""
+    k, generators = acted
+    product = product_of(k, pair)
+    statement = certified_statement(EquivarianceClaim(product, degree, generators))
+    assert statement["values"] == list(character(product, degree, generators).values())
+
+
+@given(symmetric_complexes(max_vertices=4, signs=True))
+def test_isotropy_groups_are_those_of_the_points(acted: Acted) -> None:
+    """Of each middle of a cell the isotropy group is listed, and its orbit is counted with one class of subgroups."""
+    k, generators = acted
+    try:
+        found = certified_statement(BranchingClaim(k, generators))["orbits"]
+    except ClaimIsFalse:
+        assume(False)
+    group = generated_group(generators, k.vertex_count)
+    points = [point for point in words((-1, 0, 1), repeat=k.vertex_count) if k.is_face(support_of(point))]
+    classes: Counter[frozenset[frozenset[Element]]] = Counter()
+    left = set(points)
+    while left:
+        point = left.pop()
+        left -= {moved_point(point, g) for g in group}
+        fixing = [g for g in group if moved_point(point, g) == point]
+        if len(fixing) > 1:
+            classes[frozenset(frozenset(after(after(g, x), inverse(g)) for x in fixing) for g in group)] += 1
+    for by, order, number in found:
+        own = frozenset(generated_group([tuple(x) for x in by], k.vertex_count))
+        (alike,) = [subgroups for subgroups in classes if own in subgroups]
+        assert (len(own), classes.pop(alike)) == (order, number)
+    assert not classes
+
+
+def support_of(point: tuple[int, ...]) -> list[int]:
+    """Return the vertices at which a point of a cube is inside the interval."""
+    return [vertex for vertex, x in enumerate(point, 1) if x == 0]
+
+
+def moved_point(point: tuple[int, ...], element: Element) -> tuple[int, ...]:
+    """Return the image of a point of a cube."""
+    image = [0] * len(point)
+    for x, to in zip(point, element, strict=True):
+        image[abs(to) - 1] = x if to > 0 else -x
+    return tuple(image)
 
 
 @given(symmetric_complexes(max_vertices=5))
@@ -272,4 +329,4 @@ def test_riemann_and_hurwitz(n: int, r: int) -> None:
     size = len(generated_group([element], n))
     upstairs, downstairs = (certified_statement(SurfaceClaim(k, g))["euler"] for g in ((), (element,)))
     orbits = certified_statement(BranchingClaim(k, (element,)))["orbits"]
-    assert upstairs == size * downstairs - sum(number * (size - size // e) for e, number in orbits)
+    assert upstairs == size * downstairs - sum(number * (size - size // e) for _, e, number in orbits)

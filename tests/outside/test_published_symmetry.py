@@ -12,12 +12,14 @@ from typing import Any
 import pytest
 
 from certify.claims.automorphisms import AutomorphismsClaim
+from certify.claims.branching import BranchingClaim
 from certify.claims.characters import CharacterClaim
-from certify.claims.counts import OrbitCountClaim
+from certify.claims.count_identities import IdentityClaim
 from certify.claims.fixed_sets import FixedSetClaim
-from certify.claims.identities import IdentityClaim
-from certify.claims.quotients import BranchingClaim, OrbitSpaceClaim, SurfaceClaim
+from certify.claims.orbit_counts import OrbitCountClaim
+from certify.claims.orbit_spaces import OrbitSpaceClaim
 from certify.claims.shellings import ShellingClaim
+from certify.claims.surfaces import SurfaceClaim
 from certify.simplicial import SimplicialComplex, build
 from certify.simplicial.families import points, polygon
 from certify.symmetry.characters import IRREDUCIBLES, specht_character

@@ -179,7 +179,7 @@ END: dict[str, Any] = {"end": {"records": 0, "sha256": "0" * 64}}
 INVALID: dict[str, tuple[str, Any, tuple[str | int, ...], Any]] = {
     "another format": ("header", HEADER, ("format",), 2),
     "true as the format": ("header", HEADER, ("format",), True),
-    "an unknown route": ("header", HEADER, ("route",), "both"),
+    "an unknown route": ("header", HEADER, ("route",), "summands"),
     "a name with a line feed": ("header", HEADER, ("about", "claim"), "a\nb"),
     "an unknown key": ("header", HEADER, ("note",), ""),
     "no degrees": ("header", HEADER, ("statement", "degrees"), []),

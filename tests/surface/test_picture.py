@@ -197,7 +197,7 @@ def test_the_same_picture_has_the_same_bytes(certify: Certify, tmp_path: Path, e
         (
             [*RING, "--generator", "(1 2)", "--out", "a.svg"],
             2,
-            "Invalid value for '--generator': element: expected a permutation that preserves K, found (1 2), "
+            "Invalid value for '--generator': generator 1: expected a permutation that preserves K, found (1 2), "
             "by which the face 1 5 goes to 2 5, which is none (certify picture --help says more.)",
         ),
         (

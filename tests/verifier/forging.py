@@ -21,14 +21,19 @@ from certify.claims import (
     TableClaim,
     TorClaim,
 )
+from certify.claims.actions import ActionClaim
 from certify.claims.automorphisms import AutomorphismsClaim
-from certify.claims.characters import ActionClaim, CharacterClaim
-from certify.claims.counts import OrbitCountClaim
+from certify.claims.branching import BranchingClaim
+from certify.claims.characters import CharacterClaim
+from certify.claims.count_identities import IdentityClaim
+from certify.claims.count_values import CountValuesClaim
+from certify.claims.equivariance import EquivarianceClaim
 from certify.claims.fixed_sets import FixedSetClaim
 from certify.claims.homology import Route
-from certify.claims.identities import IdentityClaim
-from certify.claims.quotients import BranchingClaim, OrbitSpaceClaim, SurfaceClaim
+from certify.claims.orbit_counts import OrbitCountClaim
+from certify.claims.orbit_spaces import OrbitSpaceClaim
 from certify.claims.shellings import ShellingClaim
+from certify.claims.surfaces import SurfaceClaim
 from certify.products import Pair, PolyhedralProduct, parse_pair, parse_pairs
 from certify.simplicial import SimplicialComplex, build
 from certify.simplicial.families import polygon, simplex
@@ -94,6 +99,10 @@ CLAIMS: dict[str, Claim[Any]] = {
     "character-of-own-pair": CharacterClaim(
         PolyhedralProduct(build("points", m=2), (DEGREE_TWO, DEGREE_TWO)), 2, ((2, 1),)
     ),
+    "equivariance": EquivarianceClaim(disc_product(polygon(4), 2), 3, ((2, 3, 4, 1),)),
+    "equivariance-of-own-pair": EquivarianceClaim(
+        PolyhedralProduct(build("points", m=2), (DEGREE_TWO, DEGREE_TWO)), 2, None
+    ),
     "action": ActionClaim(disc_product(polygon(4), 1), 1, (2, 3, 4, 1)),
     "fixed-set": FixedSetClaim(disc_product(polygon(5), 1), generators=(REFLECTION,)),
     "fixed-set-of-nothing": FixedSetClaim(disc_product(polygon(5), 1)),
@@ -107,10 +116,12 @@ CLAIMS: dict[str, Claim[Any]] = {
     "free-orbit-space": OrbitSpaceClaim(polygon(4), ((-1, -2, -3, -4),)),
     "surface": SurfaceClaim(polygon(4), ((1, 4, 3, 2),)),
     "branching": BranchingClaim(polygon(5), (ROTATION,)),
+    "branching-of-conjugates": BranchingClaim(polygon(3), ((2, 3, 1), (-1, -2, 3))),
     "shelling": ShellingClaim(polygon(5)),
     "orbit-count": OrbitCountClaim(polygon(5), 2, (ROTATION,)),
     "orbit-count-by-content": OrbitCountClaim(polygon(5), 2, None, (2, 3)),
     "count-identity": IdentityClaim("necklaces(n, 2)", "sum(lyndon(d, 2) for d in divisors(n))", 1, 6),
+    "count-values": CountValuesClaim("witt(n, 2) + 2 ** 60", 2, 5),
 }
 """Claims that together use every kind, route, pair and key of the format."""
 

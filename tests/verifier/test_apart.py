@@ -12,7 +12,7 @@ import certify
 
 PACKAGE = Path(certify.__file__).parent
 VERIFIER = PACKAGE / "verifier.py"
-MOST_LINES = 1500
+MOST_LINES = 1600
 """All claim kinds together; those of polyhedral products of discs alone need some 600."""
 NO_CODE = {
     tokenize.COMMENT,

@@ -8,7 +8,7 @@ import pytest
 
 from certify.claims import RealToricClaim
 from certify.claims.fixed_sets import FixedSetClaim
-from certify.claims.quotients import OrbitSpaceClaim
+from certify.claims.orbit_spaces import OrbitSpaceClaim
 from certify.simplicial.families import points, simplex, simplex_boundary
 from tests.helpers import certificate_of, disc_product
 from tests.verifier.forging import Edit, Values, forged, genuine, judged, signed, values_of
@@ -302,7 +302,37 @@ SYMMETRY_CASES: dict[str, tuple[str, Edit, str]] = {
     "a record of a fixed block left out": ("character", lambda v: v.pop(-2), "keys"),
     "another matrix": ("action", _state("matrix", to=[[0, 1], [1, 0]]), "false"),
     "another basis": ("action", _state("basis", 0, to=[0, 1]), "false"),
+    "another trace of a matrix": ("action", _state("trace", to=2), "false"),
+    "an induced character with another value": ("equivariance", _state("values", 1, to=2), "false"),
+    "a splitting without the whole product": ("equivariance", lambda v: v.pop(-2), "keys"),
+    "a splitting that goes along with signs": (
+        "equivariance",
+        lambda v: v[0][S].update(
+            pairs=["(D1, S0)"] * 4, generators=[[-1, 2, 3, 4]], elements=[[1, 2, 3, 4], [-1, 2, 3, 4]]
+        ),
+        "symmetry",
+    ),
+    "traces of single summands in place of all": (
+        "equivariance",
+        lambda v: v[0][S].update(summands=["1010"]),
+        "keys",
+    ),
     "more fixed points": ("fixed-set", lambda v: v[0][S]["groups"][0].__setitem__(1, 5), "false"),
+    "another number of fixed points": ("fixed-set-of-all", _state("points", to=3), "false"),
+    "finitely many points where there are curves": ("fixed-set-of-own-pair", _state("points", to=2), "false"),
+    "curves where there are finitely many points": ("fixed-set-of-all", _state("points", to=None), "false"),
+    "another number of components": ("fixed-set", _state("components", to=3), "false"),
+    "true as the number of components": ("fixed-set-with-signs", _state("components", to=True), "false"),
+    "a point in the empty fixed set": (
+        "fixed-set-of-nothing",
+        lambda v: _empty_fixed_set(v, points=1),
+        "false",
+    ),
+    "a component of the empty fixed set": (
+        "fixed-set-of-nothing",
+        lambda v: _empty_fixed_set(v, components=1),
+        "false",
+    ),
     "fixed points of an own pair without its splitting": (
         "fixed-set-of-own-pair",
         _both(lambda v: v[0][S].update(groups=[]), lambda v: [v.pop(1) for _ in v[2:]]),
@@ -318,6 +348,7 @@ SYMMETRY_CASES: dict[str, tuple[str, Edit, str]] = {
     ),
     "fixed points of the whole group": ("fixed-set", lambda v: v[0][S]["generators"].append([2, 3, 4, 5, 1]), "block"),
     "a quotient that is a sphere no more": ("orbit-space", _state("groups", to=[[0, 1, []], [1, 2, []]]), "false"),
+    "a quotient with another Euler characteristic": ("orbit-space", _state("euler", to=0), "false"),
     "the quotient by another group": ("orbit-space", _state("generators", to=[[1, 4, 3, 2]]), "cycle"),
     "a quotient on cells where the action is not free": ("orbit-space", lambda v: v[1]["basis"].pop(), "degrees"),
     "a torus for a Klein bottle": ("free-orbit-space", _state("groups", to=[[0, 1, []], [1, 2, []]]), "false"),
@@ -336,7 +367,18 @@ SYMMETRY_CASES: dict[str, tuple[str, Edit, str]] = {
         lambda v: v[0][S].update(facets=[[1, 2], [3, 4]], generators=[]),
         "no-surface",
     ),
-    "a branch point too many": ("branching", _state("orbits", to=[[5, 3]]), "false"),
+    "a branch point too many": ("branching", _state("orbits", 0, 2, to=3), "false"),
+    "another generator of an isotropy group": ("branching", _state("orbits", 0, 0, 0, to=[3, 4, 5, 1, 2]), "false"),
+    "another conjugate of an isotropy group": (
+        "branching-of-conjugates",
+        _state("orbits", 0, 0, 0, to=[-1, 2, -3]),
+        "false",
+    ),
+    "conjugate isotropy groups apart": (
+        "branching-of-conjugates",
+        lambda v: v[0][S]["orbits"].__setitem__(slice(1, 2), [[v[0][S]["orbits"][1][0], 3, 1]] * 2),
+        "false",
+    ),
     "branch points on a line": ("branching", _state("generators", to=[[1, 5, 4, 3, 2]]), "not-isolated"),
     "a facet of a shelling twice": (
         "shelling",
@@ -368,6 +410,12 @@ SYMMETRY_CASES: dict[str, tuple[str, Edit, str]] = {
     "a content of three colours": ("orbit-count-by-content", _state("content", to=[1, 2, 2]), "statement"),
     "an identity that is none": ("count-identity", _state("right", to="lyndon(n, 2)"), "false"),
     "an identity that fails at the end": ("count-identity", _state("left", to="necklaces(n, 2) + n // 6"), "false"),
+    "another value of a count": ("count-values", _state("values", 1, to="1152921504606846977"), "false"),
+    "a value too few": ("count-values", lambda v: v[0][S]["values"].pop(), "false"),
+    "a value too many": ("count-values", lambda v: v[0][S]["values"].append(3), "false"),
+    "a count that calls for trouble": ("count-values", _state("formula", to="exit(n)"), "expression"),
+    "a count that is a number": ("count-values", _state("formula", to=5), "statement"),
+    "values from 0 on": ("count-values", _state("first", to=0), "statement"),
     "a range without a number": ("count-identity", _state("last", to=0), "statement"),
     "an expression that calls for trouble": ("count-identity", _state("left", to="exit(n, 2)"), "expression"),
     "an expression with an attribute": ("count-identity", _state("left", to="n.real"), "expression"),
@@ -392,6 +440,13 @@ SYMMETRY_CASES: dict[str, tuple[str, Edit, str]] = {
     "a name that is bound in a sum only": ("count-identity", _state("left", to="d"), "expression"),
 }
 CASES |= SYMMETRY_CASES
+
+
+def _empty_fixed_set(values: Values, **numbers: int) -> None:
+    """Make it a claim about an edge whose ends are exchanged with a change of sign of both: nothing is fixed."""
+    quarter = {"facets": [[1], [2]], "vertices": 2, "pairs": ["(D1, S0)"] * 2, "generators": [[2, -1]]}
+    values[0][S].update({**quarter, "groups": [], "components": 0, "points": 0, **numbers})
+    del values[1:-1]
 
 
 def _shorten(values: Values, place: int) -> None:

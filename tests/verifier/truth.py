@@ -8,13 +8,18 @@ from flint import fmpz_mat
 
 from certify.certificate import Spool
 from certify.claims import Claim, prove
+from certify.claims.actions import ActionClaim
 from certify.claims.automorphisms import AutomorphismsClaim
-from certify.claims.characters import ActionClaim, CharacterClaim
-from certify.claims.counts import OrbitCountClaim
+from certify.claims.branching import BranchingClaim
+from certify.claims.characters import CharacterClaim
+from certify.claims.count_identities import IdentityClaim
+from certify.claims.count_values import CountValuesClaim
+from certify.claims.equivariance import EquivarianceClaim
 from certify.claims.fixed_sets import FixedSetClaim
-from certify.claims.identities import IdentityClaim
-from certify.claims.quotients import BranchingClaim, OrbitSpaceClaim, SurfaceClaim
+from certify.claims.orbit_counts import OrbitCountClaim
+from certify.claims.orbit_spaces import OrbitSpaceClaim
 from certify.claims.shellings import ShellingClaim
+from certify.claims.surfaces import SurfaceClaim
 from certify.errors import CertifyError
 from certify.exact import AbelianGroup, BasedComplex
 from certify.products import Block, Pair, PolyhedralProduct, cell_complex, parse_pair
@@ -54,6 +59,8 @@ def _claim(statement: dict[str, Any]) -> Claim[Any]:
     """Return the claim that asks the question of a statement about symmetries."""
     if statement["kind"] == "count-identity":
         return IdentityClaim(*(statement[key] for key in ("left", "right", "first", "last")))
+    if statement["kind"] == "count-values":
+        return CountValuesClaim(*(statement[key] for key in ("formula", "first", "last")))
     k = SimplicialComplex.from_facets(statement["facets"], range(1, statement["vertices"] + 1))
     given = statement.get("generators")
     generators = None if given is None else tuple(map(tuple, given))
@@ -68,6 +75,9 @@ def _claim(statement: dict[str, Any]) -> Claim[Any]:
             words = statement["summands"]
             summands = None if words is None else tuple(words)
             return CharacterClaim(product, statement["degree"], generators, elements, {}, functions, summands)
+        case "equivariance":
+            elements = tuple(map(tuple, statement["elements"]))
+            return EquivarianceClaim(product, statement["degree"], generators, elements)
         case "action":
             return ActionClaim(product, statement["degree"], tuple(statement["element"]))
         case "fixed-set":

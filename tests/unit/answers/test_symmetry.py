@@ -2,19 +2,26 @@
 
 from __future__ import annotations
 
+from collections.abc import Callable
 from fractions import Fraction
 from pathlib import Path
+from typing import Any
 
 import pytest
+from sympy import eye
 from sympy.combinatorics import Permutation
 
 from certify import (
     BadInput,
     ClaimIsFalse,
+    action,
     automorphism_group,
     branch_points,
     character,
-    fixed_set_homology,
+    count_identity,
+    count_values,
+    equivariance,
+    fixed_set,
     orbit_count,
     orbit_space_homology,
     points,
@@ -28,6 +35,7 @@ from tests.helpers import examined
 
 TURN = Permutation(0, 1, 2, 3, 4)
 PENTAGON = polyhedral_product(polygon(5), "(D1, S0)")
+MIXED_UP: Any = {"K": polygon(5), "product": PENTAGON, "number": "2"}
 
 
 def test_permutations_come_in_three_ways() -> None:
@@ -62,13 +70,17 @@ def test_answers_have_certificates_that_the_verifier_accepts(tmp_path: Path) -> 
     answers = {
         "group": automorphism_group(polygon(4)).certificate,
         "character": character(PENTAGON, 1, [TURN]).certificate,
-        "fixed": fixed_set_homology(PENTAGON, [TURN]).certificate,
+        "fixed": fixed_set(PENTAGON, [TURN]).certificate,
         "quotient": orbit_space_homology(polygon(4), ["(-1)(-2)(-3)(-4)"]).certificate,
         "surface": surface(polygon(5), [TURN]).certificate,
         "branch": branch_points(polygon(5), [TURN]).certificate,
         "count": orbit_count(polygon(5), 3).certificate,
         "content": orbit_count(polygon(5), 2, content=[2, 3]).certificate,
         "shelling": shelling(polygon(5)),
+        "action": action(PENTAGON, 1, TURN).certificate,
+        "equivariance": equivariance(PENTAGON, 1, [TURN]).certificate,
+        "values": count_values("bracelets(n, 2)", 1, 9).certificate,
+        "identity": count_identity("n * n", "sum(2 * k + 1 for k in range(0, n))", 1, 9),
     }
     for name, certificate in answers.items():
         assert certificate is not None
@@ -90,7 +102,7 @@ def test_numbers_beyond_those_of_json_are_verified(tmp_path: Path) -> None:
 
 def test_none_means_all_automorphisms() -> None:
     generators = automorphism_group(polygon(5)).generators
-    assert fixed_set_homology(PENTAGON, None) == fixed_set_homology(PENTAGON, generators)
+    assert fixed_set(PENTAGON, None) == fixed_set(PENTAGON, generators)
     assert orbit_space_homology(polygon(5), None) == orbit_space_homology(polygon(5), generators)
     assert surface(polygon(5), None).boundary == 2
     assert character(polyhedral_product(points(1), "(D1, S0)"), 0, None, irreducibles="symmetric").multiplicities == {
@@ -103,13 +115,59 @@ def test_a_surface_knows_what_it_is() -> None:
     assert (found.euler, found.orientable, found.boundary, found.genus) == (-4, False, 2, 4)
 
 
+def test_a_matrix_has_a_trace_and_goes_to_sympy() -> None:
+    found = action(PENTAGON, 1, TURN)
+    matrix = found.sympy()
+    assert matrix.shape == (10, 10)
+    assert matrix**5 == eye(10) != matrix
+    assert found.trace == matrix.trace() == 0
+    assert len(found.basis) == 10
+    assert action(PENTAGON, 3, TURN).matrix == ()
+
+
+def test_a_fixed_set_knows_its_points() -> None:
+    turned = fixed_set(PENTAGON, [TURN])
+    assert (turned.components, turned.points) == (2, 2)
+    mirror = fixed_set(PENTAGON, ["(2 5)(3 4)"], [1])
+    assert (mirror.components, mirror.points) == (None, None)
+    assert repr(mirror) == repr(mirror.homology)
+
+
+def test_branch_points_have_isotropy_groups() -> None:
+    """The rotations of a cube that preserve a tetrahedron: the corners of two of them, and the middles of its edges."""
+    found = branch_points(polygon(3), ["(1 2 3)", "(-1)(-2)"])
+    assert found.orbits == {2: 1, 3: 2}
+    assert found.isotropy == {"(-1)(-2)": 1, "(-1 -3 2)": 2}
+
+
+@pytest.mark.parametrize(
+    ("question", "message"),
+    [
+        (lambda: automorphism_group(polygon(5), [5]), 'expected permutations in cycles like "(1 2 3)", as tuples'),
+        (
+            lambda: character(MIXED_UP["K"], 1, [TURN]),
+            "expected a product polyhedral_product(K, pair), found Simplicial",
+        ),
+        (lambda: surface(MIXED_UP["product"]), "the first argument: expected a complex K, found PolyhedralProduct"),
+        (lambda: shelling(MIXED_UP["product"]), "the first argument: expected a complex K, found PolyhedralProduct"),
+        (lambda: automorphism_group(MIXED_UP["number"]), "the first argument: expected a complex K, found str"),
+        (lambda: orbit_count(polygon(5), MIXED_UP["number"]), "colours: expected a whole number from 0 on, found '2'"),
+        (lambda: count_values("n", 0, 2), "from: expected a range within 1 to 1000, found 0 to 2"),
+    ],
+)
+def test_what_is_mixed_up_is_told_in_one_sentence(question: Callable[[], object], message: str) -> None:
+    with pytest.raises(BadInput) as caught:
+        question()
+    assert message in str(caught.value)
+
+
 def test_what_is_no_answer_is_an_error() -> None:
     with pytest.raises(ClaimIsFalse, match="claimed to be a connected surface, but is not"):
         surface(points(3))
-    with pytest.raises(BadInput, match="expected a list of permutations, found"):
+    with pytest.raises(BadInput, match="generators: expected a list, found"):
         orbit_space_homology(polygon(5), "(1 2 3 4 5)")
     with pytest.raises(BadInput, match="by which the face"):
-        fixed_set_homology(PENTAGON, ["(1 2)"])
+        fixed_set(PENTAGON, ["(1 2)"])
     with pytest.raises(BadInput, match="colours: expected a whole number from 0 on, found -2"):
         orbit_count(polygon(5), -2)
     with pytest.raises(BadInput, match="degree: expected a whole number from 0 to 2\\^53 - 2, found -1"):

@@ -8,12 +8,18 @@ import pytest
 
 from certify.certificate import Spool
 from certify.claims import Claim, prove
+from certify.claims.actions import ActionClaim
 from certify.claims.automorphisms import AutomorphismsClaim
+from certify.claims.branching import BranchingClaim
 from certify.claims.characters import CharacterClaim
-from certify.claims.counts import OrbitCountClaim
-from certify.claims.identities import IdentityClaim
-from certify.claims.quotients import BranchingClaim, OrbitSpaceClaim, SurfaceClaim
+from certify.claims.count_identities import IdentityClaim
+from certify.claims.count_values import CountValuesClaim
+from certify.claims.equivariance import EquivarianceClaim
+from certify.claims.fixed_sets import FixedSetClaim
+from certify.claims.orbit_counts import OrbitCountClaim
+from certify.claims.orbit_spaces import OrbitSpaceClaim
 from certify.claims.shellings import ShellingClaim
+from certify.claims.surfaces import SurfaceClaim
 from certify.errors import ClaimIsFalse, LimitReached
 from certify.exact import AbelianGroup
 from certify.simplicial import SimplicialComplex, build
@@ -33,8 +39,7 @@ FALSE: dict[str, tuple[Claim[Any], str]] = {
     ),
     "orbits": (
         AutomorphismsClaim(disc_product(polygon(5), 1), (TURN,), {"orbits": {"subsets": 7}}),
-        "the orbits of the group of these generators is claimed to be 1 on vertices, 1, 1, 1 on faces by size, "
-        "7 on sets of vertices, but is 1 on vertices, 1, 1, 1 on faces by size, 8 on sets of vertices",
+        "the number of orbits on sets of vertices of the group of these generators is claimed to be 7, but is 8",
     ),
     "a trace": (
         CharacterClaim(disc_product(polygon(5), 1), 1, (TURN,), claimed={"values": [10, 1]}),
@@ -71,8 +76,40 @@ FALSE: dict[str, tuple[Claim[Any], str]] = {
         "it has whole cells of dimension 1",
     ),
     "other branch points": (
-        BranchingClaim(polygon(5), (TURN,), {"orbits": [[5, 1]]}),
+        BranchingClaim(polygon(5), (TURN,), {"orbits": {5: 1}}),
         "orbits of points with isotropy is claimed to be 1 with a group of order 5, but is 2 with a group of order 5",
+    ),
+    "other isotropy groups": (
+        BranchingClaim(polygon(5), (TURN,), {"isotropy": {(TURN,): 3}}),
+        "orbits of points with isotropy is claimed to be 3 with ⟨(1 2 3 4 5)⟩, but is 2 with ⟨(1 2 3 4 5)⟩",
+    ),
+    "a splitting with another trace": (
+        EquivarianceClaim(disc_product(polygon(5), 1), 1, (TURN,), None, {"values": [10, 1]}),
+        "χ((1 2 3 4 5)) is claimed to be 1, but is 0",
+    ),
+    "the trace of a matrix": (
+        ActionClaim(disc_product(polygon(5), 1), 1, TURN, {"trace": 1}),
+        "the trace of (1 2 3 4 5) on H_1((D¹,S⁰)^K; ℤ) mod torsion is claimed to be 1, but is 0",
+    ),
+    "a matrix": (
+        ActionClaim(disc_product(points(2), 1), 1, (2, 1), {"matrix": [[1]]}),
+        "the matrix of (1 2) on H_1((D¹,S⁰)^K; ℤ) mod torsion is claimed to be [[1]], but is [[-1]]",
+    ),
+    "a number of points": (
+        FixedSetClaim(disc_product(polygon(5), 1), generators=(TURN,), claimed={"points": 3}),
+        "the number of points of ((D¹,S⁰)^K)^G is claimed to be 3, but is 2",
+    ),
+    "points of a curve": (
+        FixedSetClaim(disc_product(polygon(5), 1), generators=(FLIP,), claimed={"points": 3}),
+        "the number of points of ((D¹,S⁰)^K)^G is claimed to be 3, but is not finite",
+    ),
+    "an Euler characteristic": (
+        OrbitSpaceClaim(polygon(5), (TURN,), claimed={"euler": 2}),
+        "the Euler characteristic of (D¹,S⁰)^K/G is claimed to be 2, but is 0",
+    ),
+    "an inner product that is no whole number": (
+        CharacterClaim(disc_product(polygon(4), 1), 0, ((2, 3, 4, 1),), functions={"two": (2, 0, 0)}),
+        "⟨χ, ψ⟩ for ψ = two is claimed to be a whole number, but is 1/2",
     ),
     "a path": (ShellingClaim(SimplicialComplex.from_facets([[1, 2], [2, 3]])), "K is claimed to be a shellable sphere"),
     "two circles": (
@@ -83,6 +120,10 @@ FALSE: dict[str, tuple[Claim[Any], str]] = {
     "necklaces": (
         OrbitCountClaim(polygon(5), 2, (TURN,), claimed={"orbits": 9}),
         "the number of orbits on colourings with 2 colours is claimed to be 9, but is 8",
+    ),
+    "a value of a count": (
+        CountValuesClaim("necklaces(n, 2)", 1, 3, {"values": [2, 3, 5]}),
+        "necklaces(n, 2) for n = 3 is claimed to be 5, but is 4",
     ),
     "an identity": (IdentityClaim("n", "n + n // 5", 1, 9), "n + n // 5 for n = 5 is claimed to be 5, but is 6"),
 }

@@ -13,7 +13,7 @@ from certify.simplicial.complexes import SimplicialComplex
 from certify.simplicial.families import simplex
 from certify.symmetry.expressions import values_of
 
-__all__ = ["IdentityClaim"]
+__all__ = ["IdentityClaim", "check_expression", "check_range"]
 
 _LAST = 1000
 
@@ -45,13 +45,9 @@ class IdentityClaim(ValuesClaim):
 
     def __post_init__(self) -> None:
         """Refuse ranges and expressions that are none."""
-        if not 1 <= self.first <= self.last <= _LAST:
-            raise BadInput(where="from", expected=f"a range within 1 to {_LAST}", found=f"{self.first} to {self.last}")
-        for where, text in (("left", self.left), ("right", self.right)):
-            try:
-                values_of(text, self.first, self.first)
-            except BadInput as fault:
-                raise BadInput(where=where, expected=fault.expected, found=fault.found) from fault
+        check_range(self.first, self.last)
+        check_expression("left", self.left, self.first)
+        check_expression("right", self.right, self.first)
 
     @property
     def base(self) -> SimplicialComplex:
@@ -81,3 +77,17 @@ class IdentityClaim(ValuesClaim):
     def lines(self, found: Values) -> list[str]:  # noqa: ARG002 - there are no values
         """Write the identity."""
         return [f"{self.left} = {self.right} for n = {self.first}, …, {self.last}"]
+
+
+def check_range(first: int, last: int) -> None:
+    """Raise BadInput if this is no range that claims may be about."""
+    if not 1 <= first <= last <= _LAST:
+        raise BadInput(where="from", expected=f"a range within 1 to {_LAST}", found=f"{first} to {last}")
+
+
+def check_expression(where: str, text: str, n: int) -> None:
+    """Raise BadInput, with this place, if an expression cannot be read, or not be evaluated for n."""
+    try:
+        values_of(text, n, n)
+    except BadInput as fault:
+        raise BadInput(where=where, expected=fault.expected, found=fault.found) from fault
