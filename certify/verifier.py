@@ -1730,9 +1730,15 @@ def prove_orbit_count(statement: Statement, _: Lines, budget: Budget) -> Proved:
         return counts.get((0,) * colours, 0)
 
     total = sum(times * constant(partition) for partition, times in Counter(map(blocks, group)).items())
-    # Colourings that some element other than 1 fixes: inclusion and exclusion over the partitions into cycles.
+    # Colourings that some element other than 1 fixes: inclusion and exclusion over the partitions into cycles. Those
+    # that are coarser than another one are not needed, since what is constant on them is constant on that one.
+    finest: list[frozenset[frozenset[int]]] = []
+    for partition in sorted({blocks(element) for element in group[1:]}, key=len, reverse=True):
+        budget.spend("cells", len(finest))
+        if not any(orbit_partition([*partition, *other]) == partition for other in finest):
+            finest.append(partition)
     signs: Counter[frozenset[frozenset[int]]] = Counter({blocks(group[0]): 1})
-    for partition in {blocks(element) for element in group[1:]}:
+    for partition in finest:
         for other, sign in list(signs.items()):
             budget.spend("cells", statement.vertices)
             joined = orbit_partition([*other, *partition])
@@ -1807,7 +1813,7 @@ def evaluate(node: ast.AST, names: dict[str, int], budget: Budget) -> int:
             small = not power or b * max(a.bit_length(), 1) <= budget.limits["bits"]
             require(small, "limit", f"a power of more than {budget.limits['bits']} bits; raise --max-bits")
             return OPERATIONS[type(operation).__name__](a, b)
-        case ast.Call(ast.Name("sum"), [ast.GeneratorExp(term, [ast.comprehension(ast.Name(name), over, [])])], []):
+        case ast.Call(ast.Name("sum"), [ast.GeneratorExp(term, [ast.comprehension(ast.Name(name), over, [], 0)])], []):
             match name, over:
                 case "d", ast.Call(ast.Name("divisors"), [number], []):
                     places: Iterable[int] = divisors(small_number(number, names, budget))

@@ -60,6 +60,15 @@ class AutomorphismsClaim(ValuesClaim):
         """Return generators and pairs."""
         return {"generators": generators_value(self.generators), "pairs": [pair.value for pair in self.product.pairs]}
 
+    @property
+    def group_cells(self) -> int:
+        """About |G| m for a group that is listed, and for orbits the sets that generators move."""
+        k, m = self.base, self.base.vertex_count
+        generators = acting(self.generators, self.product)
+        listed = 0 if self.generators is None else len(generated_group(generators, m)) * m
+        sets = sum(k.f_vector()) + (1 << m if m <= MOST_VERTICES else 0)
+        return listed + sets * (1 + len(generators))
+
     def found(self, contributions: Iterable[Contribution]) -> dict[str, Any]:  # noqa: ARG002 - there are none
         """Return order and orbits."""
         k, m = self.base, self.base.vertex_count

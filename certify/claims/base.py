@@ -133,6 +133,11 @@ class Claim(ABC, Generic[Found]):
         """The sum of the weights of all tasks, or a bound for it."""
         return 1
 
+    @property
+    def group_cells(self) -> int:
+        """About how many cells the verifier counts because of a group, in the unit of its option --max-cells."""
+        return 0
+
     def opening(self) -> Iterator[dict[str, Any]]:
         """Yield the records that come before those of the tasks."""
         yield from ()

@@ -148,6 +148,12 @@ class CharacterClaim(ValuesClaim):
         return dict(zip(elements, getattr(self, "_sizes"), strict=True))  # noqa: B009 - no field, and so not compared
 
     @property
+    def group_cells(self) -> int:
+        """About 2 |G| m, once for the group and once for its classes."""
+        sizes: tuple[int, ...] = getattr(self, "_sizes")  # noqa: B009 - no field, and so not compared
+        return 2 * sum(sizes) * self.base.vertex_count
+
+    @property
     def _elements(self) -> tuple[Element, ...]:
         return self.elements or ()
 

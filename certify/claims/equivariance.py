@@ -73,6 +73,11 @@ class EquivarianceClaim(ValuesClaim):
     def _on_cells(self) -> CharacterClaim:
         return CharacterClaim(self.product, self.degree, self.generators, self.elements, route="cells")
 
+    @property
+    def group_cells(self) -> int:
+        """As for the character."""
+        return self._on_summands.group_cells
+
     def class_sizes(self) -> dict[str, int]:
         """Return how many elements each rational class has, under the element that stands for it."""
         return self._on_summands.class_sizes()

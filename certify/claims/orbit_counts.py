@@ -77,6 +77,12 @@ class OrbitCountClaim(ValuesClaim):
             "generators": generators_value(self.generators),
         }
 
+    @property
+    def group_cells(self) -> int:
+        """About |G| m."""
+        m = self.complex.vertex_count
+        return m * len(generated_group(acting(self.generators, self._product), m))
+
     def found(self, contributions: Iterable[Contribution]) -> dict[str, Any]:
         """Return both numbers."""
         list(contributions)

@@ -9,7 +9,7 @@ from typing import Any, ClassVar
 
 from certify.claims.base import Task, checked_degrees, generators_value
 from certify.claims.numbers import Numbers, WithNumbers
-from certify.claims.quotients import intervals
+from certify.claims.quotients import intervals, quotient_cells
 from certify.exact import AbelianGroup
 from certify.simplicial.complexes import SimplicialComplex
 from certify.symmetry.automorphisms import Generators, acting
@@ -62,6 +62,11 @@ class OrbitSpaceClaim(WithNumbers):
         """Yield the one piece of work."""
         product = intervals(self.complex)
         yield Task(OrbitSpace(product, acting(self.generators, product)))
+
+    @property
+    def group_cells(self) -> int:
+        """The chains of cells, once for each element of the group; fewer if single cells will do."""
+        return quotient_cells(self.complex, self.generators)
 
     def in_degree(self, degree: str) -> str:
         """Write a homology group as in print."""

@@ -48,6 +48,9 @@ _EPILOG = """A sheet is a TOML file. The smallest one:
 `certify demo` writes a longer one, with comments.
 """
 
+_MOST_CELLS = 10_000_000
+"""What the verifier counts up to if it is given no other limit."""
+
 _JOURNAL = ".state.jsonl"
 
 _CODE = {"proved": codes.DONE, "false": codes.REFUSED, "undecided": codes.UNDECIDED}
@@ -250,6 +253,9 @@ def _lines(outcome: Outcome) -> Iterator[str]:
     if outcome.item.complex:
         yield f"where K is {outcome.item.complex}, on {counted(base.vertex_count, 'vertex', 'vertices')}"
     yield from claim.remarks()
+    if 2 * claim.group_cells > _MOST_CELLS:
+        limit = 10 ** len(str(2 * claim.group_cells))
+        yield f"the group is large; the verifier may need certify verify --max-cells {limit}"
     yield f"certificate {outcome.path}, {counted(outcome.size or 0, 'byte')}"
     yield f"fingerprint {outcome.fingerprint}"
 

@@ -13,7 +13,7 @@ import click
 
 from certify.commands import codes
 from certify.commands.options import JSON
-from certify.commands.terminal import tell_fault
+from certify.commands.terminal import progress, tell_fault
 
 __all__ = ["run_verifier", "verify"]
 
@@ -55,10 +55,13 @@ def verify(paths: tuple[str, ...], as_json: bool, **limits: float | None) -> int
 def run_verifier(arguments: Sequence[str]) -> int:
     """Run the verifier, whose output goes where ours goes, and return its exit code."""
     sys.stdout.flush()
+    watched = sys.stdout.isatty() and sys.stderr.isatty()
     with as_file(files("certify") / "verifier.py") as file:
+        command = [sys.executable, "-I", "-S", str(file), *arguments]
         with _interrupts_ignored():
-            process = subprocess.Popen([sys.executable, "-I", "-S", str(file), *arguments])
+            process = subprocess.Popen(command, stdout=subprocess.PIPE if watched else None)
         try:
+            _pass_on(process)
             code = process.wait()
         finally:
             process.kill()
@@ -68,6 +71,17 @@ def run_verifier(arguments: Sequence[str]) -> int:
         tell_fault(f"the verifier {how}, no verdict")
         return codes.INTERNAL
     return code
+
+
+def _pass_on(process: subprocess.Popen[bytes]) -> None:
+    """Print what the verifier prints, and show that it is at work while nothing comes."""
+    while process.stdout is not None:
+        with progress("verifying"):
+            line = process.stdout.readline()
+        if not line:
+            return
+        sys.stdout.buffer.write(line)
+        sys.stdout.flush()
 
 
 @contextmanager

@@ -30,7 +30,8 @@ def sphere_shelling(k: SimplicialComplex) -> tuple[Face, ...]:
 
     Notes
     -----
-    Facets are added greedily, with a return where no one fits; spheres that come up in practice need few returns.
+    Facets are added greedily, with a return where no one fits; spheres that come up in practice need few returns. Every
+    facet is tried as the first one before a complex is said to have no shelling.
 
     References
     ----------
@@ -60,7 +61,7 @@ def sphere_shelling(k: SimplicialComplex) -> tuple[Face, ...]:
 
 def _search(facets: tuple[Face, ...]) -> tuple[Face, ...] | None:
     sets = [frozenset(facet) for facet in facets]
-    order = [0]
+    order: list[int] = []
     tried: list[set[int]] = [set()]
     for _ in range(_MOST_STEPS):
         if len(order) == len(facets):
@@ -74,10 +75,10 @@ def _search(facets: tuple[Face, ...]) -> tuple[Face, ...] | None:
             order.append(following)
             tried.append(set())
             continue
-        order.pop()
-        tried.pop()
         if not order:
             return None
+        order.pop()
+        tried.pop()
     raise LimitReached(f"no shelling was found in {_MOST_STEPS:,} steps; there may be one all the same")
 
 

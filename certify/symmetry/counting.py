@@ -31,7 +31,8 @@ def colouring_orbits(group: Sequence[Element], colours: int, content: Sequence[i
     Notes
     -----
     Burnside's lemma for the first number. For the second, the colourings that some element other than 1 fixes are
-    counted by inclusion and exclusion over the partitions of the vertices into cycles, joined in all ways.
+    counted by inclusion and exclusion over the partitions of the vertices into cycles, joined in all ways; only the
+    finest of them are needed, since what is constant on a coarser one is constant on them.
 
     Examples
     --------
@@ -45,11 +46,8 @@ def colouring_orbits(group: Sequence[Element], colours: int, content: Sequence[i
         )
     partitions = Counter(_partition(element) for element in group)
     total = sum(times * _constant(partition, colours, content) for partition, times in partitions.items())
-    signs: Counter[Partition] = Counter({_partition(group[0]): 1})
-    for partition in {_partition(element) for element in group[1:]}:
-        for other, sign in list(signs.items()):
-            signs[_joined([*other, *partition])] -= sign
-        signs = Counter({other: sign for other, sign in signs.items() if sign})
+    vertices = _partition(group[0])
+    signs = _signed_joins(vertices, _finest(partitions.keys() - {vertices}))
     free = sum(sign * _constant(partition, colours, content) for partition, sign in signs.items())
     return total // len(group), free // len(group)
 
@@ -124,6 +122,25 @@ def witt_rank(content: Sequence[int]) -> int:
 
 def _partition(element: Element) -> Partition:
     return frozenset(frozenset(cycle) for cycle in cycles_of(element))
+
+
+def _finest(partitions: Iterable[Partition]) -> list[Partition]:
+    """Return the partitions of which none of the others is a refinement."""
+    found: list[Partition] = []
+    for partition in sorted(partitions, key=len, reverse=True):
+        if not any(_joined([*partition, *other]) == partition for other in found):
+            found.append(partition)
+    return found
+
+
+def _signed_joins(vertices: Partition, partitions: Iterable[Partition]) -> Counter[Partition]:
+    """Return the joins of these partitions with the signs of inclusion and exclusion; the empty join is `vertices`."""
+    signs: Counter[Partition] = Counter({vertices: 1})
+    for partition in partitions:
+        for other, sign in list(signs.items()):
+            signs[_joined([*other, *partition])] -= sign
+        signs = Counter({other: sign for other, sign in signs.items() if sign})
+    return signs
 
 
 def _joined(parts: Iterable[frozenset[int]]) -> Partition:

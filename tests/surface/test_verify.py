@@ -6,8 +6,11 @@ import gzip
 import hashlib
 import json
 import os
+import re
 import signal
 import subprocess
+from collections.abc import Iterator
+from contextlib import suppress
 from pathlib import Path
 
 import pytest
@@ -200,3 +203,25 @@ def test_compressed_certificates_are_found_and_checked(certify: Certify, folder:
     path.unlink()
     ended = certify("verify", folder)
     assert (ended.code, ended.out.count("accepted   ")) == (0, 2)
+
+
+def test_a_terminal_shows_what_a_file_gets(folder: Path) -> None:
+    """On a terminal the verifier's lines pass through a pipe, so that progress can be shown between them."""
+    command = command_line("verify", folder)
+    plain = subprocess.run(command, env=environment(), capture_output=True, check=True).stdout
+    ours, theirs = os.openpty()
+    with subprocess.Popen(command, env=environment(), stdout=theirs, stderr=theirs) as process:
+        os.close(theirs)
+        shown = b"".join(_pieces(ours))
+    os.close(ours)
+    assert process.returncode == 0
+    seen = re.sub(rb"\x1b\[[0-9;?]*[A-Za-z]", b"", shown).replace(b"\r", b"")
+    assert seen.endswith(plain.splitlines()[-1] + b"\n")
+    assert all(line in seen for line in plain.splitlines())
+
+
+def _pieces(terminal: int) -> Iterator[bytes]:
+    """Yield what is written to a terminal until the other side is closed, which Linux reports as an error."""
+    with suppress(OSError):
+        while piece := os.read(terminal, 65536):
+            yield piece

@@ -433,6 +433,11 @@ SYMMETRY_CASES: dict[str, tuple[str, Edit, str]] = {
     "hexadecimal numbers": ("count-identity", _state("left", to="n + 0x10"), "expression"),
     "a number with an underscore": ("count-identity", _state("left", to="n + 1_0"), "expression"),
     "n as the name in a sum": ("count-identity", _state("left", to="sum(n for n in divisors(n))"), "expression"),
+    "a sum that is no plain one": (
+        "count-identity",
+        lambda v: v[0][S].update(left="sum(k async for k in range(0, n))", right="n * (n - 1) // 2"),
+        "expression",
+    ),
     "k over divisors": ("count-identity", _state("left", to="sum(k for k in divisors(n))"), "expression"),
     "divisors of 0": ("count-identity", _state("left", to="sum(d for d in divisors(n - n))"), "expression"),
     "the Möbius function at 0": ("count-identity", _state("left", to="mobius(0)"), "expression"),

@@ -721,7 +721,7 @@ to = 3
 """,
         "line 10, claim 1, key right: expected whole numbers, n, + - * // **, sums over d in "
         "divisors(n) or k in range(a, b), and binomial, bracelets, gcd, lyndon, mobius, necklaces, totient, witt, "
-        "found name 'x' is not defined for n = 1",
+        "found the name x",
     ),
     "a comment in an expression": (
         """\
@@ -750,6 +750,30 @@ to = 3
         "line 9, claim 1, key left: expected whole numbers, n, + - * // **, sums over d in "
         "divisors(n) or k in range(a, b), and binomial, bracelets, gcd, lyndon, mobius, necklaces, totient, witt, "
         "found one that is nested too deeply; sum(...) is one way to write many terms",
+    ),
+    "a range without a beginning": (
+        """\
+[[claims]]
+id = "a"
+kind = "count-values"
+formula = "sum(k for k in range(n))"
+from = 1
+to = 3
+""",
+        "line 9, claim 1, key formula: expected 2 arguments of range, found range(n)",
+    ),
+    "a value that is too long": (
+        """\
+[[claims]]
+id = "a"
+kind = "count-values"
+formula = "2**7000 * 2**7000 * n"
+from = 1
+to = 3
+""",
+        "line 9, claim 1, key formula: expected whole numbers, n, + - * // **, sums over d in "
+        "divisors(n) or k in range(a, b), and binomial, bracelets, gcd, lyndon, mobius, necklaces, totient, witt, "
+        "found a value of more than 14000 bits, for n = 1",
     ),
     "a single summand under a change of sign": (
         """\
