@@ -193,7 +193,10 @@ def small_pure_complexes(draw: st.DrawFn, most: int = 8) -> Facets:
         case "ball":
             return whole[1:] or whole
         case "two":
-            other = draw(polytopes(most).filter(lambda facets: len(facets[0]) == len(whole[0])))
+            d = len(whole[0])
+            other: Facets = tuple(combinations(range(1, d + 2), d))
+            if d and draw(st.booleans()):
+                other = starred(other, draw(st.sampled_from(other)))
             top = max((vertex for facet in whole for vertex in facet), default=0)
             by = top - draw(st.integers(0, min(1, top)))
             facets = {*whole, *(tuple(vertex + by for vertex in facet) for facet in other)}
@@ -505,7 +508,10 @@ def _with_quotient(term: Expression, a: Expression) -> Expression:
 @st.composite
 def identities(draw: st.DrawFn) -> tuple[Expression, Expression, int]:
     """Draw an expression, another one with the same values, and the last n of a range in which there are some."""
-    left, last = draw(expressions()), draw(st.integers(1, 8))
+    names = st.sampled_from(sorted(FORMULAS))
+    small_ones = st.integers(0, 3).map(lambda c: op(N, "+", number(c))) | st.integers(1, 6).map(number)
+    counts = names.map(lambda name: Expression(name, tuple(draw(small_ones) for _ in range(ARITY[name]))))
+    left, last = draw(counts | expressions()), draw(st.integers(1, 8))
     right = rewritten(left, draw)
     assume(left != right)
     assume(max(len(left.spelled()), len(right.spelled())) <= 900)
