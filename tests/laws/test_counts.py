@@ -24,7 +24,7 @@ from certify.simplicial import SimplicialComplex, build
 from certify.symmetry.elements import Element
 from certify.symmetry.expressions import values_of
 from tests.helpers import certificate_of, certified_statement
-from tests.strategies import symmetric_complexes
+from tests.strategies import complexes, symmetric_complexes
 from tests.verifier.forging import forged, judged
 from tests.verifier.forging import values_of as lines_of
 
@@ -44,6 +44,11 @@ def meets_well(facet: Facet, before: Iterable[Facet]) -> bool:
     common = faces_of([facet]) & faces_of(before)
     ridges = {face for face in common if len(face) == len(facet) - 1}
     return bool(ridges) and common == faces_of(ridges)
+
+
+def meets_somewhere(facet: Facet, before: Iterable[Facet]) -> bool:
+    """Tell whether a facet has a ridge in common with those before it."""
+    return any(len(set(facet) & set(earlier)) == len(facet) - 1 for earlier in before)
 
 
 def is_shelling(order: Sequence[Facet]) -> bool:
@@ -185,11 +190,18 @@ def test_all_orders_of_the_edges_of_a_polygon(n: int) -> None:
     assert verdicts == {"accepted": accepted} | ({"shelling": factorial(n) - accepted} if n > 3 else {})
 
 
+def test_all_orders_of_the_triangles_of_a_bipyramid() -> None:
+    """In some orders a triangle meets those before it in an edge and the vertex opposite to it."""
+    facets = joined(facets_of(build("polygon", n=3)), ((1,), (2,)))
+    for order in permutations(facets):
+        assert judged_order(order) == ("accepted" if is_shelling(order) else "shelling")
+
+
 @st.composite
-def small_pure_complexes(draw: st.DrawFn, most: int = 8) -> Facets:
-    """Draw facets of one size: a small sphere, one without a facet, two of them, apart or glued, or any sets."""
+def small_complexes(draw: st.DrawFn, most: int = 8) -> Facets:
+    """Draw a small sphere, one without a facet, two of them, apart or glued, any sets of one size, or any complex."""
     whole = draw(polytopes(most))
-    match draw(st.sampled_from(("sphere", "ball", "two", "any"))):
+    match draw(st.sampled_from(("sphere", "ball", "two", "sets", "any"))):
         case "ball":
             return whole[1:] or whole
         case "two":
@@ -203,6 +215,8 @@ def small_pure_complexes(draw: st.DrawFn, most: int = 8) -> Facets:
             assume(len(facets) <= most)
             return tuple(sorted(facets))
         case "any":
+            return facets_of(draw(complexes(4, ghosts=False)))
+        case "sets":
             size = draw(st.integers(1, 3))
             every = list(combinations(range(1, size + 3), size))
             facets = set(draw(st.lists(st.sampled_from(every), min_size=1, max_size=most)))
@@ -211,21 +225,15 @@ def small_pure_complexes(draw: st.DrawFn, most: int = 8) -> Facets:
             return whole
 
 
-@given(small_pure_complexes(12), st.data())
+@given(small_complexes(12), st.data())
 def test_an_order_is_accepted_exactly_if_it_is_a_shelling(facets: Facets, data: st.DataObject) -> None:
     """By the definition, and each ridge lies in two facets."""
-    order = list(facets)
-    if data.draw(st.booleans()):
-        order = data.draw(st.permutations(facets))
-    else:
-        # An order in which facets are added well, as long as this is possible: nearly a shelling, or one.
-        order, left = [], data.draw(st.permutations(facets))
-        while left:
-            order.append(next((facet for facet in left if not order or meets_well(facet, order)), left[0]))
-            left = [facet for facet in left if facet != order[-1]]
-        if data.draw(st.booleans()):
-            i, j = data.draw(st.permutations([0, len(order) - 1])) if len(order) > 1 else (0, 0)
-            order[i], order[j] = order[j], order[i]
+    # Facets are taken as they come; or one with a common ridge is taken next, or one that meets those before it well.
+    first = data.draw(st.sampled_from((lambda *_: True, meets_somewhere, meets_well)))
+    order: list[Facet] = []
+    left = list(data.draw(st.permutations(facets)))
+    while left:
+        order.append(left.pop(next((i for i, facet in enumerate(left) if not order or first(facet, order)), 0)))
     assert judged_order(order) == ("accepted" if is_closed(facets) and is_shelling(order) else "shelling")
 
 
@@ -236,7 +244,7 @@ def test_a_shelling_of_a_sphere_may_be_turned_around(facets: Facets) -> None:
     assert judged_order(order[::-1]) == "accepted"
 
 
-@given(small_pure_complexes())
+@given(small_complexes())
 def test_the_prover_finds_a_shelling_exactly_if_there_is_one(facets: Facets) -> None:
     """Of all orders of facets, by way of all sets of them that can come first."""
     if is_closed(facets) and has_shelling(facets):
@@ -432,6 +440,10 @@ def judged_identity(left: str, right: str, first: int, last: int) -> str:
 @given(expressions(), st.sampled_from(("", " ")), st.integers(1, 30))
 def test_expressions_have_the_values_that_sympy_finds(expression: Expression, blank: str, n: int) -> None:
     """Prover and verifier agree with the evaluation above, also on where there is no value."""
+    check_value(expression, blank, n)
+
+
+def check_value(expression: Expression, blank: str, n: int) -> None:
     text, expected = expression.spelled(blank), value_or_none(expression, n)
     assume(len(text) <= 1000)
     if expected is None:
@@ -448,6 +460,23 @@ def test_expressions_have_the_values_that_sympy_finds(expression: Expression, bl
     assert judged_identity(text, wrong, n, n) == "false"
     with pytest.raises(ClaimIsFalse):
         certificate_of(IdentityClaim(text, wrong, n, n))
+
+
+@pytest.mark.parametrize("name", sorted([*FORMULAS, "divisors"]))
+@given(st.lists(st.integers(-1, 30) | st.sampled_from((0, 36, 60, 1000, 1001)), min_size=3, max_size=3), st.data())
+def test_formulas_have_the_values_that_sympy_finds(name: str, arguments: list[int], data: st.DataObject) -> None:
+    """The same for each formula by itself; and Möbius' function is needed where arguments have a common divisor."""
+    common = data.draw(st.integers(1, 4)) if name in ("gcd", "witt") else 1
+    parts = [number(common * argument) for argument in arguments[: ARITY.get(name, 1)]]
+    if name == "divisors":
+        parts.insert(0, data.draw(st.sampled_from((number(1), D, N))))
+    check_value(Expression(name, tuple(parts)), "", 7)
+
+
+@given(st.sampled_from(sorted(BINDING)), st.integers(-(10**20), 10**20), st.integers(-(10**20), 10**20))
+def test_operations_on_large_and_negative_numbers(head: str, a: int, b: int) -> None:
+    """Quotients are rounded down, not towards zero."""
+    check_value(op(number(a), head, number(b % 20 - 1 if head == "**" else b)), "", 1)
 
 
 # -- identities ---------------------------------------------------------------------------------
