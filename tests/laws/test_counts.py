@@ -170,12 +170,16 @@ def test_what_is_accepted_as_a_sphere_has_its_euler_characteristic(facets: Facet
 # -- orders of facets ---------------------------------------------------------------------------
 
 
-def judged_order(order: Sequence[Facet]) -> str:
-    """Return what the verifier says to an order of facets as a shelling: accepted, or the code of the rejection."""
+def judged_order(order: Sequence[Facet], facets: Sequence[Facet] | None = None) -> str:
+    """Return what the verifier says to an order as a shelling of these facets: accepted, or the code of the rejection.
+
+    Without `facets`, they are those of the order.
+    """
+    of = order if facets is None else facets
 
     def edit(lines: list[Any]) -> None:
-        lines[0]["statement"]["facets"] = sorted(map(list, order))
-        lines[0]["statement"]["vertices"] = max((vertex for facet in order for vertex in facet), default=0)
+        lines[0]["statement"]["facets"] = sorted(map(list, of))
+        lines[0]["statement"]["vertices"] = max((vertex for facet in of for vertex in facet), default=0)
         lines[1]["order"] = list(map(list, order))
 
     report = judged(forged("shelling", edit))
@@ -235,6 +239,26 @@ def test_an_order_is_accepted_exactly_if_it_is_a_shelling(facets: Facets, data: 
     while left:
         order.append(left.pop(next((i for i, facet in enumerate(left) if not order or first(facet, order)), 0)))
     assert judged_order(order) == ("accepted" if is_closed(facets) and is_shelling(order) else "shelling")
+
+
+@pytest.mark.parametrize("size", [2, 3, 4])
+def test_a_point_and_a_simplex_are_no_sphere(size: int) -> None:
+    """Each has the empty set in the place of its one ridge, if the point comes first."""
+    order = (1,), tuple(range(2, size + 2))
+    assert judged_order(order) == judged_order(order[::-1]) == "shelling"
+
+
+@given(polytopes(20), st.data())
+def test_a_shelling_is_one_of_the_complex_in_the_statement(facets: Facets, data: st.DataObject) -> None:
+    """A shelling of a sphere with a facet too many or too few, or another one twice, is none of it."""
+    order = [tuple(f) for f in lines_of(certificate_of(ShellingClaim(complex_of(facets))))[1]["order"]]
+    top = max((vertex for facet in order for vertex in facet), default=0)
+    if order[0]:
+        assert judged_order(order, [*order, tuple(range(top + 1, top + 1 + len(order[0])))]) == "shelling"
+    if len(order) > 1:
+        assert judged_order(order, order[1:]) == "shelling"
+    again = data.draw(st.sampled_from(order))
+    assert judged_order([*order, again], order) == judged_order([again, *order], order) == "shelling"
 
 
 @given(polytopes(20))
