@@ -29,7 +29,7 @@ from certify.simplicial.families import points, polygon
 from certify.symmetry.characters import IRREDUCIBLES, specht_character
 from certify.symmetry.counting import witt_rank
 from certify.symmetry.elements import Element
-from tests.helpers import certified_groups, certified_statement, disc_product, graded
+from tests.helpers import certified_statement, disc_product, graded
 from tests.outside.values import entry
 
 
@@ -73,17 +73,20 @@ def _trivial(n: int) -> dict[str, tuple[int, ...]]:
 def test_the_branch_points_of_the_rotation_quotient(n: int) -> None:
     """Entry S03: with isotropy of order e there are as many orbits as Lyndon words of length n / e, for e > 1."""
     statement = certified_statement(BranchingClaim(polygon(n), (rotation(n),)))
-    assert statement["orbits"] == sorted([int(e), number] for e, number in entry("S03").value[str(n)].items())
-    assert all(number == entry("N02").value[n // e - 1] for e, number in statement["orbits"])
+    orbits = [[e, number] for _, e, number in statement["orbits"]]
+    assert orbits == sorted([int(e), number] for e, number in entry("S03").value[str(n)].items())
+    assert all(number == entry("N02").value[n // e - 1] for e, number in orbits)
+    for (by,), e, _ in statement["orbits"]:
+        assert abs(by[0] - 1) % (n // e) == 0, "the isotropy group of order e consists of rotations by multiples of n/e"
 
 
 @pytest.mark.parametrize(("n", "r"), [(n, r) for n in range(3, 13) for r in range(1, n)])
 def test_the_fixed_points_of_rotations(n: int, r: int) -> None:
     """Entry S02: 2^gcd(n, r) points; two of them if n is prime, which is common practice in the field."""
     claim = FixedSetClaim(disc_product(polygon(n), 1), generators=(rotation(n, r),))
-    assert certified_groups(claim, degrees=None, pairs=["(D1, S0)"] * n, generators=[list(rotation(n, r))]) == {
-        (0,): graded({0: 2 ** gcd(n, r)})[0]
-    }
+    statement = certified_statement(claim)
+    assert (statement["points"], statement["components"]) == (2 ** gcd(n, r),) * 2
+    assert statement["groups"] == [[0, 2 ** gcd(n, r), []]]
 
 
 @pytest.mark.parametrize("n", range(4, 8))

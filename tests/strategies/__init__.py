@@ -33,6 +33,7 @@ __all__ = [
     "disc_products",
     "disc_products_with_torsion",
     "graphs",
+    "graphs_with_groups",
     "integer_matrices",
     "mixed_products",
     "own_pairs",
@@ -362,6 +363,24 @@ def symmetric_complexes(
         flips = st.lists(st.sampled_from((1, -1)), min_size=m, max_size=m)
         generators = [tuple(s * to for s, to in zip(draw(flips), g, strict=True)) for g in generators]
     return SimplicialComplex.from_masks(range(1, m + 1), sorted(masks)), tuple(generators)
+
+
+@st.composite
+def graphs_with_groups(draw: st.DrawFn) -> tuple[SimplicialComplex, tuple[Element, ...]]:
+    """Draw a polygon, a random graph or any complex, with one or two symmetries with signs."""
+    if draw(st.booleans()):
+        k, generators = draw(symmetric_complexes(max_vertices=4, signs=True))
+        return k, generators
+    n = draw(st.integers(3, 6))
+    turn, flip = (*range(2, n + 1), 1), (1, *range(n, 1, -1))
+    steps = draw(st.just({1}) | st.sets(st.integers(1, n // 2), min_size=1))
+    edges = {frozenset((i, (i + step - 1) % n + 1)) for i in range(1, n + 1) for step in steps}
+    signs = [draw(st.lists(st.sampled_from((1, -1)), min_size=n, max_size=n)) for _ in range(2)]
+    bases = draw(st.lists(st.sampled_from((turn, turn, flip, tuple(range(1, n + 1)))), min_size=1, max_size=2))
+    generators = tuple(
+        tuple(s * v for s, v in zip(sign, base, strict=True)) for sign, base in zip(signs, bases, strict=False)
+    )
+    return SimplicialComplex.from_facets(edges, vertices=range(1, n + 1)), generators
 
 
 # -- pairs --------------------------------------------------------------------------------------
