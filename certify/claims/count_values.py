@@ -2,24 +2,21 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterable, Sequence
+from collections.abc import Iterable
 from dataclasses import dataclass, field
 from typing import Any, ClassVar
 
 from certify.certificate.canonical import integer_value
 from certify.claims.base import Contribution
-from certify.claims.count_identities import check_expression, check_range
-from certify.claims.values import Values, ValuesClaim
+from certify.claims.expressions import ExpressionsClaim
+from certify.claims.values import Values
 from certify.errors import BadInput
-from certify.simplicial.complexes import SimplicialComplex
-from certify.simplicial.families import simplex
-from certify.symmetry.expressions import values_of
 
 __all__ = ["CountValuesClaim"]
 
 
 @dataclass(frozen=True)
-class CountValuesClaim(ValuesClaim):
+class CountValuesClaim(ExpressionsClaim):
     """A claim that an expression in n has certain values for each n of a range.
 
     So are stated the numbers of necklaces, of bracelets and of Lyndon words, and the ranks in the Hilton–Milnor
@@ -48,29 +45,20 @@ class CountValuesClaim(ValuesClaim):
     kind: ClassVar[str] = "count-values"
 
     def __post_init__(self) -> None:
-        """Refuse ranges and expressions that are none."""
-        check_range(self.first, self.last)
-        check_expression("formula", self.formula, self.first)
-        if "values" in self.claimed:
-            _check_number(self.claimed["values"], self.last - self.first + 1)
+        """Refuse ranges and expressions that are none, and another number of values."""
+        super().__post_init__()
+        number, given = self.last - self.first + 1, self.claimed.get("values")
+        if given is not None and len(given) != number:
+            raise BadInput(where="values", expected=f"one for each of the {number} numbers n", found=f"{len(given)}")
 
-    @property
-    def base(self) -> SimplicialComplex:
-        """The complex of nothing: the claim is about numbers alone."""
-        return simplex(0)
-
-    def question(self) -> dict[str, Any]:
-        """Return the expression and the range."""
-        return {"kind": self.kind} | self.fields()
-
-    def fields(self) -> dict[str, Any]:
-        """Return the expression and the range."""
-        return {"first": self.first, "formula": self.formula, "last": self.last}
+    def expressions(self) -> dict[str, str]:
+        """Return the formula."""
+        return {"formula": self.formula}
 
     def found(self, contributions: Iterable[Contribution]) -> dict[str, Any]:
         """Return the values."""
         list(contributions)
-        return {"values": values_of(self.formula, self.first, self.last)}
+        return {"values": self.values("formula")}
 
     def check(self, found: Values) -> None:
         """Raise ClaimIsFalse at the first value that is not the one claimed."""
@@ -81,16 +69,6 @@ class CountValuesClaim(ValuesClaim):
         """Return the values as the statement holds them."""
         return {"values": [integer_value(value) for value in found["values"]]}
 
-    def name(self, key: str) -> str:
-        """Write in words what a value is."""
-        return key
-
     def lines(self, found: Values) -> list[str]:
         """Write the values."""
-        values = ", ".join(map(str, found["values"]))
-        return [f"{self.formula} = {values} for n = {self.first}, …, {self.last}"]
-
-
-def _check_number(values: Sequence[int], number: int) -> None:
-    if len(values) != number:
-        raise BadInput(where="values", expected=f"one for each of the {number} numbers n", found=f"{len(values)}")
+        return [f"{self.formula} = {', '.join(map(str, found['values']))} {self.range_in_words}"]
