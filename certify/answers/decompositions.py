@@ -32,12 +32,26 @@ class ActedFamily:
         Returns generators of the group; takes the member's number.
     functions : callable
         Returns the irreducible characters by name; takes the generators and an element of each class.
+    has_dimension : bool
     """
 
     least: int
     complex: Callable[[int, int], SimplicialComplex]
     generators: Callable[[int], tuple[Element, ...]]
     functions: Callable[[tuple[Element, ...], Sequence[Element]], Mapping[str, tuple[int, ...]]]
+    has_dimension: bool = False
+
+    def member(self, n: int, dim: int | None) -> SimplicialComplex:
+        """Return a member; the dimension is 1 if none is given.
+
+        Raises
+        ------
+        BadInput
+            If there is no such member, or a dimension is given where the family has none.
+        """
+        if dim is not None and not self.has_dimension:
+            raise BadInput(where="dim", expected="no dimension for a family that has none", found=f"{dim}")
+        return self.complex(n, 1 if dim is None else dim)
 
 
 @dataclass(frozen=True, slots=True, repr=False)
@@ -94,7 +108,7 @@ def decomposition(
     degree: int,
     *,
     pair: str = "(D1, S0)",
-    dim: int = 1,
+    dim: int | None = None,
     jobs: int = 1,
     progress: Callable[[int, int], None] | None = None,
 ) -> Decomposition:
@@ -109,8 +123,8 @@ def decomposition(
     degree : int
     pair : str
         The pair at each vertex.
-    dim : int
-        The dimension of a skeleton.
+    dim : int, optional
+        The dimension of a skeleton, 1 if it is left out.
     jobs : int
     progress : callable, optional
         Is told how many members are done, of how many.
@@ -141,7 +155,7 @@ def decomposition(
     for done, n in enumerate(columns, 1):
         if n < acted.least:
             raise BadInput(where=f"family {family}", expected=f"members from {acted.least} on", found=f"{n}")
-        k = acted.complex(n, dim)
+        k = acted.member(n, dim)
         product = PolyhedralProduct(k, parse_pairs(pair, k.vertex_count))
         try:
             found = character(product, degree, acted.generators(n), functions_of=acted.functions, jobs=jobs)
@@ -203,7 +217,7 @@ def _on_axes(generators: tuple[Element, ...], elements: Sequence[Element]) -> Ma
 ACTED_FAMILIES: Mapping[str, ActedFamily] = MappingProxyType(
     {
         "points": ActedFamily(1, lambda m, _: points(m), _symmetric_generators, _on_vertices),
-        "simplex-skeleton": ActedFamily(2, simplex_skeleton, _symmetric_generators, _on_vertices),
+        "simplex-skeleton": ActedFamily(2, simplex_skeleton, _symmetric_generators, _on_vertices, has_dimension=True),
         "polygon": ActedFamily(3, lambda n, _: polygon(n), _dihedral_generators, IRREDUCIBLES["dihedral"]),
         "cross-polytope": ActedFamily(1, lambda n, _: cross_polytope(n), _axes_generators, _on_axes),
     }

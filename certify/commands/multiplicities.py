@@ -35,7 +35,9 @@ _EPILOG = """For example:
 @click.option("--to", "last", type=click.IntRange(1, 99), required=True, metavar="N", help="The last member.")
 @click.option("--degree", type=click.IntRange(0, 999), required=True, metavar="K", help="The degree of homology.")
 @click.option("--pair", default="(D1, S0)", show_default=True, metavar="PAIR", help="The pair at each vertex.")
-@click.option("--dim", type=click.IntRange(-1), default=1, show_default=True, help="The dimension of the skeleton.")
+@click.option(
+    "--dim", type=click.IntRange(-1), show_default="1", metavar="D", help="The dimension of a simplex-skeleton."
+)
 @click.option("--out", type=PATH, metavar="DIR", help="Write the certificates of the characters there.")
 @click.option(
     "--picture", "path", type=PATH, callback=picture_path, metavar="FILE", help="Draw the table too, .svg or .png."
@@ -48,7 +50,7 @@ def multiplicities(
     last: int,
     degree: int,
     pair: str,
-    dim: int,
+    dim: int | None,
     out: Path | None,
     path: Path | None,
     jobs: int,
@@ -69,7 +71,7 @@ def multiplicities(
     with blaming("--pair"):
         parse_pair(pair)
     with blaming("--dim"):
-        ACTED_FAMILIES[family].complex(first, dim)
+        ACTED_FAMILIES[family].member(first, dim)
     with progress("decomposing") as report:
         table = decomposition(family, range(first, last + 1), degree, pair=pair, dim=dim, jobs=jobs, progress=report)
     if out is not None:

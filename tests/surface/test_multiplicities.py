@@ -77,6 +77,11 @@ def test_a_table_can_be_drawn(certify: Certify, tmp_path: Path) -> None:
             "Invalid value for '--dim': argument dim: expected a whole number from -1 to 2, found 7",
         ),
         (
+            ["points", "--from", "2", "--to", "3", "--degree", "1", "--dim", "2"],
+            2,
+            "Invalid value for '--dim': dim: expected no dimension for a family that has none, found 2",
+        ),
+        (
             ["points", "--from", "9", "--to", "9", "--degree", "1"],
             3,
             "points 9: the group has more than 200,000 elements, and larger ones are not enumerated; give generators "
